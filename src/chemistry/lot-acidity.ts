@@ -1,0 +1,58 @@
+import { named } from '../formula/expression.js';
+import type { Expression } from '../formula/expression.js';
+import { choice, limit, quantity } from '../formula/quantity.js';
+import type { Choice, Quantity } from '../formula/quantity.js';
+import { gramPerLitre, millimolePerGram } from '../formula/units.js';
+import { acidValueLike, acidValueOf, freeFattyAcidLike, freeFattyAcidOf, fromAcidValue, fromFreeFattyAcid } from './acidity.js';
+import { ISO_660, PRACTICE } from './sources.js';
+import { sampleDensity, titrantMolarMass } from './titration.js';
+
+const SOURCES = ['titration', 'certificate-acid-value', 'certificate-ffa'] as const;
+
+/** Acidity of a lot of oil: from runs of a titration, or from a certificate. */
+export interface Acidity {
+  readonly acidContent: Quantity;
+  readonly acidValue: Quantity;
+  readonly freeFattyAcid: Quantity;
+  readonly all: readonly (Quantity | Choice)[];
+}
+
+/**
+ * The acidity that dosing starts from. Everything downstream uses the acid content b, never a
+ * rounded acid value or FFA, so that no method's constant enters a dose twice.
+ *
+ * @param prefix of the keys: empty for the lot as it came, `retest.` after pretreatment
+ * @param mean acid content of the runs that count; undefined while there is none
+ */
+export function acidity(prefix: '' | 'retest.', mean: Expression | undefined): Acidity {
+  const from = choice(`${prefix}acidKnownFrom`, SOURCES);
+  const certificateAcidValue = quantity({
+    key: `${prefix}certificateAcidValue`, symbol: 'AV_cert', ...acidValueLike,
+    limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '935', 'out-of-range')],
+  });
+  const certificateFfa = quantity({
+    key: `${prefix}certificateFfa`, symbol: 'FFA_cert', ...freeFattyAcidLike,
+    limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '100', 'ffa-above-100')],
+  });
+  const acidContent = quantity({
+    key: `${prefix}acidContent`, symbol: prefix ? 'b_r' : 'b', unit: millimolePerGram, cites: [ISO_660],
+    is: from.of({
+      titration: mean ?? named(`${prefix}run1.acidContent`),
+      'certificate-acid-value': fromAcidValue(certificateAcidValue),
+      'certificate-ffa': fromFreeFattyAcid(certificateFfa),
+    }),
+  });
+  const acidValue = quantity({ key: `${prefix}acidValue`, symbol: prefix ? 'AV_r' : 'AV', ...acidValueLike, is: acidValueOf(acidContent) });
+  const freeFattyAcid = quantity({
+    key: `${prefix}freeFattyAcid`, symbol: prefix ? 'FFA_r' : 'FFA', ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent),
+    limits: [limit('atMost', '100', 'ffa-above-100')],
+  });
+  return { acidContent, acidValue, freeFattyAcid, all: [from, certificateAcidValue, certificateFfa, acidContent, acidValue, freeFattyAcid] };
+}
+
+/** The bench figure "grams of alkali per litre of oil": x mL of 1 g/L titrant a millilitre of oil is x g/L. */
+export const alkaliPerLitreOfOil = (acidContent: Quantity): Quantity =>
+  quantity({
+    key: 'alkaliPerLitreOfOil', symbol: 'a', unit: gramPerLitre, cites: [PRACTICE],
+    is: acidContent.times(sampleDensity).times(titrantMolarMass), digits: { significant: 3 },
+  });

@@ -1,0 +1,91 @@
+import { constant } from '../formula/expression.js';
+import type { Expression } from '../formula/expression.js';
+import { Choice, Quantity, quantity } from '../formula/quantity.js';
+import { Sheet } from '../formula/sheet.js';
+import { kilogram, mole } from '../formula/units.js';
+import * as acid from './acidity.js';
+import { afterPretreatment } from './after-pretreatment.js';
+import { baseCharge, conversion, entrainedEster } from './base-charge.js';
+import * as catalystProduct from './catalyst.js';
+import * as esterification from './esterification.js';
+import { fat, glycerides, glyceridesBy } from './glycerides.js';
+import { acidity, alkaliPerLitreOfOil } from './lot-acidity.js';
+import * as methanol from './methanol.js';
+import * as oil from './oil.js';
+import * as pretreatment from './pretreatment.js';
+import { meanOf, titrationRun } from './run.js';
+import type { TitrationRun } from './run.js';
+import * as site from './site-limits.js';
+import { STOICHIOMETRY } from './sources.js';
+import * as titration from './titration.js';
+
+/** How many runs a titration has, and which of them count (by index from 0). */
+export interface RunPlan {
+  readonly runs: number;
+  readonly counted: readonly number[];
+}
+
+/** Key of a quantity of a run: `run1.titre`, `retest.run2.buretteEnd`; runs count from 1. */
+export const runKey = (prefix: '' | 'retest.', index: number, name: string): string => `${prefix}run${index + 1}.${name}`;
+
+/** Every formula of a lot with the given runs. The same runs give the same sheet, built once. */
+export function lotFormulas(lot: RunPlan, retest: RunPlan): Sheet {
+  const id = `${lot.runs}:${lot.counted.join()}|${retest.runs}:${retest.counted.join()}`;
+  let sheet = sheets.get(id);
+  if (!sheet) {
+    if (sheets.size >= MOST_SHEETS) sheets.clear();
+    sheets.set(id, (sheet = build(lot, retest)));
+  }
+  return sheet;
+}
+
+const sheets = new Map<string, Sheet>();
+/** Far more combinations of runs than a site meets; a bound for pages that stay open for months. */
+const MOST_SHEETS = 64;
+
+function build(lot: RunPlan, retest: RunPlan): Sheet {
+  const titrated = runsOf('', lot);
+  const retitrated = runsOf('retest.', retest);
+  const asItCame = acidity('', titrated.mean);
+  const afterAcidStep = acidity('retest.', retitrated.mean);
+  const fats = glycerides(asItCame.acidContent);
+
+  const acidAmount = quantity({
+    key: 'acidAmount', symbol: 'n_acid', unit: mole, cites: [STOICHIOMETRY], is: asItCame.acidContent.times(oil.oilMass).in(mole),
+  });
+  const direct = baseCharge('direct', {
+    mass: oil.oilMass,
+    acid: acidAmount,
+    sulfuricAcid: constant('0', mole),
+    water: oil.waterContent.times(oil.oilMass).in(kilogram),
+  }, fats);
+  const first = pretreatment.pretreatmentPass(1, acidAmount, fats, undefined);
+  const second = pretreatment.pretreatmentPass(2, acidAmount, fats, first);
+  const third = pretreatment.pretreatmentPass(3, acidAmount, fats, second);
+  const pretreated = afterPretreatment([first, second, third], acidAmount, afterAcidStep.acidContent);
+  const twoStep = baseCharge('twoStep', pretreated.feed, fats);
+
+  return Sheet.define([
+    ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
+    ...members(esterification), ...members(pretreatment), ...members(site),
+    ...titrated.all, ...retitrated.all, ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
+    glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
+    ...direct, ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
+  ]);
+}
+
+function runsOf(prefix: '' | 'retest.', plan: RunPlan): { mean: Expression | undefined; all: Quantity[] } {
+  // a titration that has not begun still names its first run, so that what is missing can be said
+  const runs: TitrationRun[] = Array.from({ length: Math.max(1, plan.runs) }, (_, i) => titrationRun(runKey(prefix, i, '')));
+  const counted = runs.filter((_, index) => plan.counted.includes(index));
+  return { mean: counted.length ? meanOf(counted) : undefined, all: runs.flatMap((run) => run.all) };
+}
+
+/** The quantities and choices that a module exports, singly or as a record of them. */
+function members(module: Readonly<Record<string, unknown>>): (Quantity | Choice)[] {
+  return Object.values(module).flatMap((value) =>
+    isEntry(value) ? [value] : typeof value === 'object' && value !== null ? Object.values(value).filter(isEntry) : [],
+  );
+}
+
+const isEntry = (value: unknown): value is Quantity | Choice => value instanceof Quantity || value instanceof Choice;

@@ -1,0 +1,74 @@
+import type { Expression } from '../formula/expression.js';
+import { limit, quantity } from '../formula/quantity.js';
+import type { Quantity } from '../formula/quantity.js';
+import { gram, millilitre, millimolePerGram } from '../formula/units.js';
+import { acidValueLike, acidValueOf, freeFattyAcidLike, freeFattyAcidOf } from './acidity.js';
+import { EN_14104, EN_14104_TEMPERATURE, ISO_660 } from './sources.js';
+import { correctedBlank, sampleDensity, sampleTakenBy, titrantConcentration, volumeFactor } from './titration.js';
+
+/** One run of a titration: a portion, two burette readings, and what follows from them. */
+export interface TitrationRun {
+  readonly acidContent: Quantity;
+  readonly all: readonly Quantity[];
+}
+
+/**
+ * The quantities of one run.
+ *
+ * @param prefix of its keys, e.g. `run1.` or `retest.run1.`
+ */
+export function titrationRun(prefix: string): TitrationRun {
+  const weighedMass = quantity({
+    key: `${prefix}weighedMass`, symbol: 'm_w', unit: gram, digits: { significant: 4 },
+    limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '1000', 'out-of-range')],
+  });
+  const sampleVolume = quantity({
+    key: `${prefix}sampleVolume`, symbol: 'V_s', unit: millilitre,
+    limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '1000', 'out-of-range')],
+  });
+  const sampleMass = quantity({
+    key: `${prefix}sampleMass`, symbol: 'm', unit: gram, cites: [ISO_660],
+    is: sampleTakenBy.of({ weighing: weighedMass, volume: sampleVolume.times(sampleDensity) }),
+  });
+  const burette = (end: 'Start' | 'End', symbol: string): Quantity =>
+    quantity({
+      key: `${prefix}burette${end}`, symbol, unit: millilitre, digits: { decimals: 2 },
+      limits: [limit('atLeast', '0', 'negative'), limit('atMost', '1000', 'out-of-range')],
+    });
+  const buretteStart = burette('Start', 'V_start');
+  const buretteEnd = burette('End', 'V_end');
+  const titre = quantity({
+    key: `${prefix}titre`, symbol: 'V', unit: millilitre, cites: [ISO_660], digits: { decimals: 2 },
+    is: buretteEnd.minus(buretteStart),
+    limits: [limit('atLeast', '0', 'end-below-start', buretteEnd.key)],
+  });
+  const correctedTitre = quantity({
+    key: `${prefix}correctedTitre`, symbol: 'V′', unit: millilitre, cites: [EN_14104_TEMPERATURE], digits: { decimals: 3 },
+    is: titre.times(volumeFactor),
+  });
+  const netTitre = quantity({
+    key: `${prefix}netTitre`, symbol: 'V_net', unit: millilitre, cites: [ISO_660, EN_14104], digits: { decimals: 3 },
+    is: correctedTitre.minus(correctedBlank),
+    limits: [limit('above', '0', 'titre-not-above-blank', buretteEnd.key)],
+  });
+  const acidContent = quantity({
+    key: `${prefix}acidContent`, symbol: 'b', unit: millimolePerGram, cites: [ISO_660, EN_14104],
+    is: titrantConcentration.times(netTitre).per(sampleMass),
+  });
+  const acidValue = quantity({ key: `${prefix}acidValue`, symbol: 'AV', ...acidValueLike, is: acidValueOf(acidContent) });
+  const freeFattyAcid = quantity({
+    key: `${prefix}freeFattyAcid`, symbol: 'FFA', ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent),
+    limits: [limit('atMost', '100', 'ffa-above-100', `${prefix}sampleMass`)],
+  });
+  return {
+    acidContent,
+    all: [weighedMass, sampleVolume, sampleMass, buretteStart, buretteEnd, titre, correctedTitre, netTitre, acidContent, acidValue, freeFattyAcid],
+  };
+}
+
+/** Mean of the acid contents of the runs that count. */
+export function meanOf(runs: readonly TitrationRun[]): Expression {
+  const [first, ...rest] = runs.map((run) => run.acidContent as Expression);
+  if (!first) throw new RangeError('a mean of no runs');
+  return rest.length ? rest.reduce((sum, run) => sum.plus(run), first).per(String(runs.length)) : first;
+}

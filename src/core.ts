@@ -1,0 +1,1 @@
+export { Decimal } from './formula/decimal.js';

@@ -1,0 +1,103 @@
+import { Decimal, decimal } from '../formula/decimal.js';
+import { isKnown } from '../formula/reading.js';
+import type { Outcome } from '../formula/reading.js';
+
+/**
+ * `direct`: base step with extra catalyst; `two-step`: acid step first; `too-close`: within the
+ * guard band of a limit; `outside`: above both routes' limits; `no-acid-step`: needs the acid step,
+ * which the site cannot run; `not-known`: something it rests on is missing or refused.
+ */
+export type Verdict = 'direct' | 'two-step' | 'too-close' | 'outside' | 'no-acid-step' | 'not-known';
+
+/** Why, as data: the locale makes the sentence from the code and the figures. */
+export interface Reason {
+  readonly code: ReasonCode;
+  /** Decimal text, by the name the sentence uses. */
+  readonly params: Readonly<Record<string, string>>;
+}
+
+export const REASON_CODES = [
+  'at-or-below-direct-limit', 'above-direct-limit', 'above-pretreatment-limit', 'within-guard-band', 'extra-negligible',
+  'no-acid-proof-equipment', 'dry-before-base-step', 'dry-before-acid-step', 'water-not-measured',
+  'pretreatment-misses-target', 'ffa-not-known',
+] as const;
+export type ReasonCode = (typeof REASON_CODES)[number];
+
+export interface Route {
+  readonly verdict: Verdict;
+  /** In a close call, the route that is safe on either side of the limit. */
+  readonly safe?: Verdict;
+  readonly reasons: readonly Reason[];
+}
+
+/** What the route is decided on; shares in per cent. */
+export interface RouteBasis {
+  readonly ffa: Outcome;
+  /** Standard uncertainty of the FFA, where it is known. */
+  readonly u?: Decimal;
+  readonly directLimit: Outcome;
+  readonly pretreatmentLimit: Outcome;
+  /** Water as measured; an assumed figure is no ground for a gate. */
+  readonly water: Outcome | undefined;
+  readonly waterLimitBase: Outcome;
+  readonly waterLimitAcid: Outcome;
+  readonly acidProofEquipment: boolean;
+}
+
+/** One-sided 95 % point of the normal distribution (Eurachem/CITAC, compliance assessment, Annex A; from memory). */
+const GUARD_FACTOR = decimal('1.645');
+/** At or below this FFA the extra catalyst is lost in the scatter of the base load (published limits of 0.5 %). */
+const NEGLIGIBLE = decimal('0.5');
+
+/** The route by the site's limits, the guard band and the water gate. */
+export function decideRoute(basis: RouteBasis): Route {
+  const { ffa, directLimit, pretreatmentLimit } = basis;
+  if (!isKnown(ffa) || !isKnown(directLimit) || !isKnown(pretreatmentLimit)) {
+    return { verdict: 'not-known', reasons: [{ code: 'ffa-not-known', params: {} }] };
+  }
+  const guard = basis.u ? GUARD_FACTOR.times(basis.u) : new Decimal(0);
+  const beyond = (limit: Decimal): 'below' | 'above' | 'close' =>
+    ffa.plus(guard).lte(limit) ? 'below' : ffa.minus(guard).gt(limit) ? 'above' : 'close';
+  const reasons: Reason[] = [];
+  const say = (code: ReasonCode, params: Record<string, Decimal> = {}): void => {
+    reasons.push({ code, params: Object.fromEntries(Object.entries(params).map(([name, value]) => [name, value.toString()])) });
+  };
+  const acidStep: Verdict = basis.acidProofEquipment ? 'two-step' : 'no-acid-step';
+  const result = (verdict: Verdict, safe?: Verdict): Route => {
+    waterGate(basis, verdict === 'too-close' ? (safe ?? verdict) : verdict, say);
+    return safe ? { verdict, safe, reasons } : { verdict, reasons };
+  };
+
+  switch (beyond(directLimit)) {
+    case 'below':
+      say('at-or-below-direct-limit', { ffa, limit: directLimit });
+      if (ffa.lte(NEGLIGIBLE)) say('extra-negligible', { limit: NEGLIGIBLE });
+      return result('direct');
+    case 'close':
+      say('within-guard-band', { ffa, limit: directLimit, guard });
+      return result('too-close', acidStep);
+    case 'above':
+      break;
+  }
+  switch (beyond(pretreatmentLimit)) {
+    case 'above':
+      say('above-pretreatment-limit', { ffa, limit: pretreatmentLimit });
+      return result('outside');
+    case 'close':
+      say('within-guard-band', { ffa, limit: pretreatmentLimit, guard });
+      return result('too-close', 'outside');
+    case 'below':
+      say('above-direct-limit', { ffa, limit: directLimit });
+      if (!basis.acidProofEquipment) say('no-acid-proof-equipment');
+      return result(acidStep);
+  }
+}
+
+function waterGate(basis: RouteBasis, route: Verdict, say: (code: ReasonCode, params?: Record<string, Decimal>) => void): void {
+  const { water } = basis;
+  if (water === undefined) return say('water-not-measured');
+  if (!isKnown(water)) return;
+  const gate = route === 'direct' ? basis.waterLimitBase : route === 'two-step' ? basis.waterLimitAcid : undefined;
+  if (gate === undefined || !isKnown(gate) || water.lte(gate)) return;
+  say(route === 'direct' ? 'dry-before-base-step' : 'dry-before-acid-step', { water, limit: gate });
+}

@@ -1,0 +1,48 @@
+import type { Constant, Expression } from './expression.js';
+import { InfixNotation, RANK, write } from './notation.js';
+import type { Printed } from './notation.js';
+import type { Sheet } from './sheet.js';
+
+/** Where a quantity's figure or a choice's option stands in a workbook, e.g. `B7` or `Site!C4`. */
+export type AddressOf = (key: string) => string;
+
+const SIGNS = {
+  plus: '+', minus: '-', times: '*', per: '/', least: 'MIN', greatest: 'MAX', exponential: 'EXP', logarithm: 'LN', separator: ',',
+} as const;
+
+/**
+ * A formula as the text of a spreadsheet cell, without the leading equals sign, in the functions
+ * that every spreadsheet shares (OpenFormula, small group). Choices become nested `IF`s over the
+ * cell that holds the option; an option that is none of them gives `NA()`.
+ */
+export function cellFormula(expression: Expression, sheet: Sheet, addressOf: AddressOf): string {
+  return write(expression, sheet, new CellNotation(addressOf)).out;
+}
+
+class CellNotation extends InfixNotation {
+  constructor(private readonly addressOf: AddressOf) {
+    super(SIGNS);
+  }
+
+  override constant({ text }: Constant): Printed<string> {
+    return { out: text, rank: text.startsWith('-') ? RANK.choice : RANK.atom };
+  }
+
+  override named(key: string): Printed<string> {
+    return { out: this.addressOf(key), rank: RANK.atom };
+  }
+
+  override choice(by: string, cases: readonly (readonly [string, Printed<string>])[]): Printed<string> {
+    const cell = this.addressOf(by);
+    const out = cases.reduceRight((rest, [option, part]) => `IF(${cell}="${option.replace(/"/g, '""')}",${part.out},${rest})`, 'NA()');
+    return { out, rank: RANK.atom };
+  }
+
+  override threshold(left: Printed<string>, right: Printed<string>, below: Printed<string>, otherwise: Printed<string>): Printed<string> {
+    return { out: `IF(${left.out}<${right.out},${below.out},${otherwise.out})`, rank: RANK.atom };
+  }
+
+  override branch(): undefined {
+    return undefined;
+  }
+}

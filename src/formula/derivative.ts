@@ -1,0 +1,123 @@
+import { conversionFactor } from './balance.js';
+import { Decimal } from './decimal.js';
+import type { BinaryOp, Expression, NodeOf } from './expression.js';
+import type { Findings, Plan } from './plan.js';
+import { isKnown } from './reading.js';
+import type { Unknown } from './reading.js';
+import type { Sheet } from './sheet.js';
+import { branch, valueOf } from './trace.js';
+
+/**
+ * How much a quantity moves with each input it rests on: its partial derivatives, in its unit per
+ * unit of the input, found by carrying adjoints backwards through the formulas (reverse-mode
+ * automatic differentiation). At a corner (least, greatest, a threshold) it is the derivative of
+ * the branch that was taken.
+ *
+ * @returns a figure for every input that the evaluated formulas touch, or why the quantity itself is not known.
+ */
+export function sensitivities(plan: Plan, findings: Findings, key: string): ReadonlyMap<string, Decimal> | Unknown {
+  const value = findings.outcome(key);
+  if (!isKnown(value)) return value;
+  const walker = new Adjoints(plan.sheet, findings);
+  walker.add(key, ONE);
+  const inputs = new Map<string, Decimal>();
+  for (let i = plan.order.length - 1; i >= 0; i--) {
+    const at = plan.order[i]!;
+    const adjoint = walker.of(at);
+    if (!adjoint) continue;
+    const { is } = plan.sheet.quantity(at);
+    if (is) walker.spread(is, adjoint);
+    else inputs.set(at, adjoint);
+  }
+  return inputs;
+}
+
+/** Derivative of one quantity with respect to one input; zero when it does not rest on it. */
+export function derivative(plan: Plan, findings: Findings, key: string, input: string): Decimal | Unknown {
+  const all = sensitivities(plan, findings, key);
+  return all instanceof Map ? ((all.get(input) as Decimal | undefined) ?? ZERO) : (all as Unknown);
+}
+
+const ZERO = new Decimal(0);
+const ONE = new Decimal(1);
+
+type BinaryNode = NodeOf<BinaryOp>;
+
+class Adjoints {
+  readonly #sums = new Map<string, Decimal>();
+
+  constructor(
+    private readonly sheet: Sheet,
+    private readonly findings: Findings,
+  ) {}
+
+  of(key: string): Decimal | undefined {
+    return this.#sums.get(key);
+  }
+
+  add(key: string, adjoint: Decimal): void {
+    const sum = this.#sums.get(key);
+    this.#sums.set(key, sum ? sum.plus(adjoint) : adjoint);
+  }
+
+  /** Hands the adjoint of an expression on to the quantities it names. */
+  spread(expression: Expression, adjoint: Decimal): void {
+    const { node } = expression;
+    switch (node.op) {
+      case 'constant':
+        return;
+      case 'named':
+        return this.add(node.key, adjoint);
+      case 'choice':
+      case 'threshold':
+        return this.spread(branch(node, this.sheet, this.findings), adjoint);
+      case 'converted':
+        return this.spread(node.of, conversionFactor(node, this.sheet.unitOf).scale(adjoint));
+      case 'exponential':
+        return this.spread(node.of, adjoint.times(this.value(expression)));
+      case 'logarithm':
+        return this.spread(node.of, adjoint.div(this.value(node.of)));
+      case 'power':
+        return this.power(node, adjoint);
+      default:
+        return this.binary(node, adjoint);
+    }
+  }
+
+  private binary(node: BinaryNode, adjoint: Decimal): void {
+    switch (node.op) {
+      case 'sum':
+        this.spread(node.left, adjoint);
+        return this.spread(node.right, adjoint);
+      case 'difference':
+        this.spread(node.left, adjoint);
+        return this.spread(node.right, adjoint.neg());
+      case 'product':
+        this.spread(node.left, adjoint.times(this.value(node.right)));
+        return this.spread(node.right, adjoint.times(this.value(node.left)));
+      case 'quotient': {
+        const under = this.value(node.right);
+        this.spread(node.left, adjoint.div(under));
+        return this.spread(node.right, adjoint.times(this.value(node.left)).div(under.times(under)).neg());
+      }
+      default: {
+        const right = this.value(node.right);
+        const left = this.value(node.left);
+        const rightTaken = node.op === 'least' ? right.lt(left) : right.gt(left);
+        return this.spread(rightTaken ? node.right : node.left, adjoint);
+      }
+    }
+  }
+
+  private power(node: NodeOf<'power'>, adjoint: Decimal): void {
+    const base = this.value(node.base);
+    const exponent = this.value(node.exponent);
+    // x⁰ is 1 everywhere, and 0ᵖ is 0 for every p > 0: both are flat where the rule would give 0 · ∞
+    if (!exponent.isZero()) this.spread(node.base, adjoint.times(exponent).times(base.pow(exponent.minus(1))));
+    if (node.exponent.node.op !== 'constant' && !base.isZero()) this.spread(node.exponent, adjoint.times(base.pow(exponent)).times(base.ln()));
+  }
+
+  private value(expression: Expression): Decimal {
+    return valueOf(expression, this.sheet, this.findings);
+  }
+}

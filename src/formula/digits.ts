@@ -1,0 +1,21 @@
+import { Decimal } from './decimal.js';
+import type { Digits } from './quantity.js';
+
+/**
+ * A value as it is reported: rounded to its digits, halves away from zero as people round by hand
+ * (ISO 80000-1, rule B). The full value is always kept beside it.
+ */
+export function shownText(value: Decimal, digits: Digits): string {
+  if ('significant' in digits) return significantText(value, digits.significant);
+  if ('decimals' in digits) return value.toFixed(digits.decimals, Decimal.ROUND_HALF_UP);
+  const size = value.abs();
+  const band = digits.bands.find(({ below }) => below === undefined || size.lt(below));
+  return value.toFixed(band?.decimals ?? 0, Decimal.ROUND_HALF_UP);
+}
+
+/** Plain decimal text of so many significant digits; whole digits are never rounded away. */
+function significantText(value: Decimal, significant: number): string {
+  if (value.isZero()) return '0';
+  const decimals = Math.max(0, significant - 1 - value.e);
+  return value.toFixed(Math.min(decimals, 30), Decimal.ROUND_HALF_UP);
+}

@@ -1,0 +1,35 @@
+import { existsSync, readFileSync } from 'node:fs';
+import { resolve } from 'node:path';
+import { gzipSync } from 'node:zlib';
+
+const root = resolve(import.meta.dirname, '../..');
+
+/** The self-contained script file. */
+export const scriptFile = resolve(root, 'dist/browser/esterway.min.js');
+/** `esterway/core` minified with decimal.js inside: built only to be measured. */
+export const coreMeasured = resolve(root, 'node_modules/.cache/size/core.min.js');
+
+/** Most bytes after gzip. */
+export const budgets = [
+  { name: 'script file', file: scriptFile, most: 75_000 },
+  { name: 'core with decimal.js', file: coreMeasured, most: 35_000 },
+] as const;
+
+export function gzipBytes(file: string): number {
+  return gzipSync(readFileSync(file), { level: 9 }).length;
+}
+
+export function printSizes(): void {
+  const rows = budgets
+    .filter(({ file }) => existsSync(file))
+    .map(({ name, file, most }) => {
+      const raw = readFileSync(file).length;
+      const gzip = gzipBytes(file);
+      return [name, raw, gzip, most, `${Math.round((100 * gzip) / most)} %`].map(String);
+    });
+  const table = [['bundle', 'minified', 'gzip', 'at most', 'used'], ...rows];
+  const widths = table[0]!.map((_, column) => Math.max(...table.map((row) => row[column]!.length)));
+  for (const row of table) {
+    console.log(row.map((cell, i) => (i ? cell.padStart(widths[i]!) : cell.padEnd(widths[i]!))).join('  '));
+  }
+}

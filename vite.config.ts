@@ -1,0 +1,195 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { basename, dirname } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import type { Plugin, UserConfig } from 'vite';
+import { defineConfig, type ViteUserConfig } from 'vitest/config';
+import { chromiumArgs, chromiumPath, pageDefaults } from './tests/tools/browser.ts';
+import { coreMeasured, printSizes, scriptFile } from './tests/tools/sizes.ts';
+
+const at = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
+
+/** Dependencies by name: one that Vite finds only late makes it reload a page that is already running. */
+const runtime = [
+  'lit',
+  'lit/decorators.js',
+  'lit/static-html.js',
+  ...['class-map', 'guard', 'if-defined', 'keyed', 'live', 'ref', 'repeat', 'when'].map(
+    (name) => `lit/directives/${name}.js`,
+  ),
+  '@lit/context',
+  'decimal.js',
+];
+
+const shared: UserConfig = {
+  resolve: {
+    alias: [
+      // demo pages and tests may import the package by its public name
+      { find: /^esterway$/, replacement: at('./src/index.ts') },
+      { find: /^esterway\/(define|core)$/, replacement: at('./src') + '/$1.ts' },
+    ],
+    dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
+  },
+};
+
+/** `npm start`: the pages of demo/. */
+const site: UserConfig = {
+  ...shared,
+  root: at('./demo'),
+  appType: 'mpa',
+  base: './',
+  publicDir: false,
+  server: { host: 'localhost', fs: { allow: [at('.')] } },
+  optimizeDeps: { include: runtime },
+};
+
+const builds: Record<string, () => UserConfig> = {
+  /** One ES module for each source file, dependencies left outside. Empties dist/ first. */
+  lib: () => ({
+    ...shared,
+    publicDir: false,
+    build: {
+      target: 'es2022',
+      outDir: 'dist',
+      emptyOutDir: true,
+      minify: false,
+      sourcemap: true,
+      lib: {
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts') },
+        formats: ['es'],
+      },
+      rolldownOptions: {
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js'],
+        output: {
+          preserveModules: true,
+          preserveModulesRoot: at('./src'),
+          // the compiler's own helpers carry its version in their path
+          entryFileNames: ({ name }) => `esm/${name.startsWith('_virtual/') ? `helpers/${basename(name)}` : name}.js`,
+        },
+      },
+    },
+  }),
+  /** The self-contained file for a page without a build step. */
+  script: () => bundle('./src/define.ts', 'Esterway', scriptFile),
+  /** What `esterway/core` weighs with its dependency inside; only measured, never shipped. */
+  core: () => bundle('./src/core.ts', 'EsterwayCore', coreMeasured),
+  /** The demo pages as static files. */
+  demo: () => ({
+    ...site,
+    build: {
+      target: 'es2022',
+      outDir: at('./dist/demo'),
+      emptyOutDir: true,
+      rolldownOptions: {
+        input: readdirSync(at('./demo'), { recursive: true, encoding: 'utf8' })
+          .filter((file) => file.endsWith('.html'))
+          .map((file) => at(`./demo/${file}`)),
+      },
+    },
+  }),
+};
+
+function bundle(entry: string, name: string, file: string): UserConfig {
+  const { version } = JSON.parse(readFileSync(at('./package.json'), 'utf8')) as { version: string };
+  return {
+    ...shared,
+    publicDir: false,
+    plugins: file === scriptFile ? [sizeTable] : [],
+    build: {
+      target: 'es2022',
+      outDir: dirname(file),
+      emptyOutDir: true,
+      minify: true,
+      sourcemap: true,
+      reportCompressedSize: false,
+      license: { fileName: 'LICENSES.md' }, // minifying drops the notices of what is inside
+      lib: { entry: at(entry), name, formats: ['iife'], fileName: () => basename(file) },
+      rolldownOptions: {
+        output: { postBanner: `/*! Esterway ${version}, MIT. Holds Lit (BSD-3-Clause) and decimal.js (MIT): LICENSES.md */` },
+      },
+    },
+  };
+}
+
+const sizeTable: Plugin = { name: 'size-table', closeBundle: printSizes };
+
+async function tests(): Promise<ViteUserConfig> {
+  const { playwright } = await import('@vitest/browser-playwright'); // slow to load, and no build needs it
+  const elsewhere = ['tests/elements/**', 'tests/hostile/**', 'tests/journeys/**'];
+  return {
+    ...shared,
+    test: {
+      projects: [
+        {
+          extends: true,
+          test: {
+            name: 'unit',
+            environment: 'node',
+            include: ['tests/**/*.test.ts'],
+            exclude: ['**/node_modules/**', ...elsewhere],
+            sequence: { groupOrder: 0 },
+          },
+        },
+        {
+          extends: true,
+          resolve: {
+            alias: [
+              // @open-wc/testing asks for a path of another test runner's server, in more than one spelling
+              {
+                find: /^(?:\.\.\/)*\/?__web-dev-server__web-socket\.js$/,
+                replacement: at('./tests/tools/stubs/web-socket.js'),
+              },
+            ],
+          },
+          optimizeDeps: {
+            include: [...runtime, '@open-wc/testing', '@open-wc/testing/pure', 'chai-a11y-axe', 'axe-core', 'fast-check'],
+          },
+          test: {
+            name: 'browser',
+            include: ['tests/elements/**/*.test.ts', 'tests/hostile/**/*.test.ts'],
+            setupFiles: ['./tests/tools/browser-setup.ts'],
+            testTimeout: 20_000,
+            sequence: { groupOrder: 1 },
+            browser: {
+              enabled: true,
+              headless: true,
+              screenshotFailures: false,
+              provider: playwright({
+                contextOptions: pageDefaults,
+                launchOptions: { ...(await launchPath()), args: chromiumArgs },
+              }),
+              instances: [{ browser: 'chromium' }],
+            },
+          },
+        },
+        {
+          extends: true,
+          test: {
+            name: 'journeys',
+            environment: 'node',
+            include: ['tests/journeys/**/*.test.ts'],
+            globalSetup: ['./tests/tools/journeys-setup.ts'],
+            testTimeout: 60_000,
+            hookTimeout: 60_000,
+            pool: 'forks',
+            maxWorkers: 1,
+            fileParallelism: false,
+            sequence: { groupOrder: 2 },
+          },
+        },
+      ],
+    },
+  };
+}
+
+async function launchPath(): Promise<{ executablePath?: string }> {
+  const executablePath = await chromiumPath();
+  return executablePath ? { executablePath } : {};
+}
+
+export default defineConfig(async ({ mode, command }): Promise<ViteUserConfig> => {
+  if (mode === 'test' || mode === 'benchmark') return tests();
+  if (command === 'serve') return site;
+  const build = builds[mode];
+  if (!build) throw new Error(`Say which build: vite build --mode ${Object.keys(builds).join('|')}`);
+  return build();
+});
