@@ -2,7 +2,7 @@ import { constant } from '../formula/expression.js';
 import type { Expression } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Digits, QuantityDefinition } from '../formula/quantity.js';
-import { gramPerMole, milligramPerGram, percent } from '../formula/units.js';
+import { gramPerMole, milligramPerGram, millimolePerGram, percent } from '../formula/units.js';
 import { FATTY_ACID } from './fatty-acids.js';
 import { molarMassOf } from './molar-mass.js';
 import { ATOMIC_WEIGHTS, ISO_660, ISO_660_DIGITS, ISO_660_REFERENCE_ACIDS } from './sources.js';
@@ -34,6 +34,12 @@ export const acidMolarMass = quantity({
     oleic: exact('oleic'), palmitic: exact('palmitic'), lauric: exact('lauric'), erucic: exact('erucic'),
     linoleic: exact('linoleic'), stearic: exact('stearic'), other: otherAcidMolarMass,
   }),
+});
+
+/** Acid content of an oil that is nothing but the reference acid: no true result lies above. */
+export const greatestAcidContent = quantity({
+  key: 'greatestAcidContent', symbol: 'b_max', unit: millimolePerGram, cites: [ISO_660],
+  is: constant('100', percent).per(referenceAcidMolarMass).in(millimolePerGram),
 });
 
 /** Molar mass of KOH as the methods print it; used for acid values, never for a dose. */

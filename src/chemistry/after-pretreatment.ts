@@ -3,7 +3,7 @@ import type { Expression } from '../formula/expression.js';
 import { choice, quantity } from '../formula/quantity.js';
 import type { Choice, Quantity, QuantityDefinition } from '../formula/quantity.js';
 import { kilogram, mole } from '../formula/units.js';
-import { freeFattyAcidLike } from './acidity.js';
+import { acidMolarMass, freeFattyAcidLike } from './acidity.js';
 import type { BaseFeed } from './base-charge.js';
 import { PACES } from './esterification.js';
 import { oilMass, waterContent } from './oil.js';
@@ -48,13 +48,16 @@ export function afterPretreatment(through: readonly [Pass, Pass, Pass], acidAmou
       .plus(kilograms(waterLeft.times(M_WATER)))
       .plus(sulfuricLeft), { unit: kilogram });
 
+  const ester = make('ester', 'm_E', kilograms(acidAmount.minus(acidLeft).times(acidMolarMass.plus(M_METHYLENE))), { unit: kilogram });
+
   return {
     feed: {
       mass,
       acid: baseStepAcidFrom.of({ estimate: acidLeft, retest: retestContent.times(mass) }),
       sulfuricAcid: baseStepAcidFrom.of({ estimate: sulfuricLeft.per(M_SULFURIC).in(mole), retest: constant('0', mole) }),
       water: kilograms(waterLeft.times(M_WATER)),
+      ester,
     },
-    all: [passes, baseStepAcidFrom, acidLeft, ...ffaLeft, methanolLeft, waterLeft, sulfuricLeft, mass],
+    all: [passes, baseStepAcidFrom, acidLeft, ...ffaLeft, methanolLeft, waterLeft, sulfuricLeft, mass, ester],
   };
 }

@@ -33,6 +33,8 @@ export interface BaseFeed {
   readonly sulfuricAcid: Expression;
   /** Water in it, kg. */
   readonly water: Expression;
+  /** Ester in it, kg. */
+  readonly ester: Expression;
 }
 
 /**
@@ -87,13 +89,14 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   const esterEntrained = make('esterEntrained', 'm_ent', entrainedEster.times(soap), { cites: [PRACTICE] });
   const oilLost = make('oilLost', 'm_lost', acidToSoap.plus(esterEntrained), { cites: [PRACTICE, STOICHIOMETRY] });
 
-  const ester = make('ester', 'm_ester',
+  const esterMade = make('esterMade', 'm_E,made',
     constant('3').times(glycerideAmount).times(conversion).times(meanAcid.plus(M_METHYLENE)).in(kilogram));
+  const ester = make('ester', 'm_ester', esterMade.plus(feed.ester));
   const glycerol = make('glycerol', 'm_gly', glycerideAmount.times(conversion).times(M_GLYCEROL).in(kilogram));
 
   return [
     feedMass, acid, sulfuricAcid, basePure, acidPure, mineralPure, extraPure, baseProduct, extraProduct, catalystProduct,
     catalystVolume, perLitre, perKilogram, glycerideAmount, methanolNeeded, methanolFromCatalyst, methanol, methanolVolume,
-    catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, ester, glycerol,
+    catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
   ];
 }

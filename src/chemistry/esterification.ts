@@ -70,7 +70,7 @@ export function rateConstant(k60: Expression, acidLoad: Expression, waterPerAcid
     .per(constant('1').plus(waterPerAcid).power(waterExponent));
 }
 
-/** First order towards equilibrium: x(t) = x_eq (1 − exp(−k t / x_eq)). */
+/** First order towards equilibrium: x(t) = x_eq (1 − exp(−k t / x_eq)), written with 1/exp(…). */
 export function conversionAfter(atEquilibrium: Expression, k: Expression): Expression {
-  return atEquilibrium.times(constant('1').minus(exponential(constant('-1').times(k).times(pretreatmentTime).per(atEquilibrium))));
+  return atEquilibrium.times(constant('1').minus(constant('1').per(exponential(k.times(pretreatmentTime).per(atEquilibrium)))));
 }

@@ -3,7 +3,7 @@ import type { Expression } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Choice, Quantity } from '../formula/quantity.js';
 import { gramPerLitre, millimolePerGram } from '../formula/units.js';
-import { acidValueLike, acidValueOf, freeFattyAcidLike, freeFattyAcidOf, fromAcidValue, fromFreeFattyAcid } from './acidity.js';
+import { acidValueLike, acidValueOf, freeFattyAcidLike, freeFattyAcidOf, fromAcidValue, fromFreeFattyAcid, greatestAcidContent } from './acidity.js';
 import { ISO_660, PRACTICE } from './sources.js';
 import { sampleDensity, titrantMolarMass } from './titration.js';
 
@@ -41,12 +41,10 @@ export function acidity(prefix: '' | 'retest.', mean: Expression | undefined): A
       'certificate-acid-value': fromAcidValue(certificateAcidValue),
       'certificate-ffa': fromFreeFattyAcid(certificateFfa),
     }),
+    limits: [limit('atMost', greatestAcidContent, 'ffa-above-100', certificateAcidValue.key)],
   });
   const acidValue = quantity({ key: `${prefix}acidValue`, symbol: prefix ? 'AV_r' : 'AV', ...acidValueLike, is: acidValueOf(acidContent) });
-  const freeFattyAcid = quantity({
-    key: `${prefix}freeFattyAcid`, symbol: prefix ? 'FFA_r' : 'FFA', ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent),
-    limits: [limit('atMost', '100', 'ffa-above-100')],
-  });
+  const freeFattyAcid = quantity({ key: `${prefix}freeFattyAcid`, symbol: prefix ? 'FFA_r' : 'FFA', ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent) });
   return { acidContent, acidValue, freeFattyAcid, all: [from, certificateAcidValue, certificateFfa, acidContent, acidValue, freeFattyAcid] };
 }
 

@@ -58,6 +58,7 @@ function build(lot: RunPlan, retest: RunPlan): Sheet {
     acid: acidAmount,
     sulfuricAcid: constant('0', mole),
     water: oil.waterContent.times(oil.oilMass).in(kilogram),
+    ester: constant('0', kilogram),
   }, fats);
   const first = pretreatment.pretreatmentPass(1, acidAmount, fats, undefined);
   const second = pretreatment.pretreatmentPass(2, acidAmount, fats, first);
@@ -76,7 +77,7 @@ function build(lot: RunPlan, retest: RunPlan): Sheet {
 
 function runsOf(prefix: '' | 'retest.', plan: RunPlan): { mean: Expression | undefined; all: Quantity[] } {
   // a titration that has not begun still names its first run, so that what is missing can be said
-  const runs: TitrationRun[] = Array.from({ length: Math.max(1, plan.runs) }, (_, i) => titrationRun(runKey(prefix, i, '')));
+  const runs: TitrationRun[] = Array.from({ length: Math.max(1, plan.runs) }, (_, i) => titrationRun(runKey(prefix, i, ''), `${prefix && 'r'}${i + 1}`));
   const counted = runs.filter((_, index) => plan.counted.includes(index));
   return { mean: counted.length ? meanOf(counted) : undefined, all: runs.flatMap((run) => run.all) };
 }

@@ -112,9 +112,13 @@ export abstract class InfixNotation implements Notation<string> {
   }
 
   converted(of: Printed<string>, factor: Rational): Printed<string> {
-    const atom = (figure: bigint): Printed<string> => ({ out: figure.toString(), rank: RANK.atom });
-    const up = factor.over === 1n ? of : this.binary('product', of, atom(factor.over));
-    return factor.under === 1n ? up : this.binary('quotient', up, atom(factor.under));
+    const up = factor.over === 1n ? of : this.binary('product', of, this.factor(factor.over));
+    return factor.under === 1n ? up : this.binary('quotient', up, this.factor(factor.under));
+  }
+
+  /** The figure of a change of unit. */
+  protected factor(figure: bigint): Printed<string> {
+    return { out: figure.toString(), rank: RANK.atom };
   }
 
   protected function(name: string, ...args: readonly Printed<string>[]): Printed<string> {

@@ -1,8 +1,8 @@
 import { conversionFactor } from './balance.js';
 import { Decimal } from './decimal.js';
 import type { BinaryOp, Expression, NodeOf } from './expression.js';
-import { brokenLimit } from './quantity.js';
-import type { Quantity } from './quantity.js';
+import { Quantity, keeps } from './quantity.js';
+import type { Limit } from './quantity.js';
 import { Refused, isKnown, joinUnknown } from './reading.js';
 import type { Outcome, Unknown } from './reading.js';
 import { namesIn } from './sheet.js';
@@ -24,6 +24,8 @@ export interface Findings {
   /** @throws RangeError for a key that the plan does not hold. */
   outcome(key: string): Outcome;
   option(key: string): string | Unknown;
+  /** Keys of the quantities that have been computed so far, each after those its formula needed. */
+  touched(): readonly string[];
 }
 
 type Step = (run: Run) => Outcome;
@@ -64,7 +66,7 @@ export class Plan {
 
   /** Starts a reading of the givens. Never throws for bad figures: they are outcomes. */
   evaluate(givens: Givens): Findings {
-    return new Run(givens, this.#steps, this.#slot, this.choices, this.#choiceSlot);
+    return new Run(givens, this, this.#steps, this.#slot, this.#choiceSlot);
   }
 }
 
@@ -74,13 +76,13 @@ class Run implements Findings {
 
   constructor(
     readonly givens: Givens,
+    readonly plan: Plan,
     readonly steps: readonly Step[],
     readonly slotOf: ReadonlyMap<string, number>,
-    readonly choices: readonly string[],
     readonly choiceSlotOf: ReadonlyMap<string, number>,
   ) {
     this.#slots = new Array<Outcome | undefined>(steps.length);
-    this.#options = new Array<string | Unknown | undefined>(choices.length);
+    this.#options = new Array<string | Unknown | undefined>(plan.choices.length);
   }
 
   outcome(key: string): Outcome {
@@ -94,12 +96,16 @@ class Run implements Findings {
     return slot === undefined ? this.givens.option(key, this) : this.optionAt(slot);
   }
 
+  touched(): readonly string[] {
+    return this.plan.order.filter((_, slot) => this.#slots[slot] !== undefined);
+  }
+
   at(slot: number): Outcome {
     return (this.#slots[slot] ??= this.steps[slot]!(this));
   }
 
   optionAt(slot: number): string | Unknown {
-    return (this.#options[slot] ??= this.givens.option(this.choices[slot]!, this));
+    return (this.#options[slot] ??= this.givens.option(this.plan.choices[slot]!, this));
   }
 }
 
@@ -115,10 +121,25 @@ class Compiler {
     const { key } = quantity;
     const step: Step = quantity.is ? this.step(quantity.is, key) : (run) => finite(run.givens.input(key), key);
     if (!quantity.limits.length) return step;
+    const checks = quantity.limits.map((limit) => this.check(limit, quantity));
     return (run) => {
       const outcome = step(run);
-      const broken = isKnown(outcome) ? brokenLimit(quantity, outcome) : undefined;
-      return broken ? new Refused(broken) : outcome;
+      if (!isKnown(outcome)) return outcome;
+      for (const check of checks) {
+        const refused = check(outcome, run);
+        if (refused) return refused;
+      }
+      return outcome;
+    };
+  }
+
+  /** A bound that is itself not known refuses nothing. */
+  private check({ is, bound, code, at }: Limit, quantity: Quantity): (value: Decimal, run: Run) => Refused | undefined {
+    const boundIn: Step = bound instanceof Quantity ? this.step(bound, quantity.key) : () => bound;
+    return (value, run) => {
+      const limit = boundIn(run);
+      if (!isKnown(limit) || keeps(is, value, limit)) return undefined;
+      return refuse(code, at ?? quantity.key, { bound: limit.toString(), unit: quantity.unit.symbol });
     };
   }
 

@@ -2,21 +2,21 @@ import { decimal } from './decimal.js';
 import type { Decimal } from './decimal.js';
 import { Expression, operand } from './expression.js';
 import type { Operand } from './expression.js';
-import type { Problem } from './reading.js';
 import type { Source } from './source.js';
 import type { Unit } from './unit.js';
 
 /** A bound that a value must keep; a value beyond it is refused with `code`. */
 export interface Limit {
   readonly is: 'above' | 'atLeast' | 'below' | 'atMost';
-  readonly bound: Decimal;
+  /** A figure in the quantity's unit, or a quantity of the same unit. */
+  readonly bound: Decimal | Quantity;
   readonly code: string;
   /** Key of the input at whose field the problem stands; the quantity itself when left out. */
   readonly at: string | undefined;
 }
 
-export const limit = (is: Limit['is'], bound: string, code: string, at?: string): Limit => ({
-  is, bound: decimal(bound), code, at,
+export const limit = (is: Limit['is'], bound: string | Quantity, code: string, at?: string): Limit => ({
+  is, bound: typeof bound === 'string' ? decimal(bound) : bound, code, at,
 });
 
 /**
@@ -84,14 +84,17 @@ export class Choice<Option extends string = string> {
 export const choice = <const Option extends string>(key: string, options: readonly Option[]): Choice<Option> =>
   new Choice(key, options);
 
-/** The first limit that `value` breaks, as a problem. */
-export function brokenLimit(quantity: Quantity, value: Decimal): Problem | undefined {
-  for (const { is, bound, code, at } of quantity.limits) {
-    const order = value.cmp(bound);
-    const kept = is === 'above' ? order > 0 : is === 'atLeast' ? order >= 0 : is === 'below' ? order < 0 : order <= 0;
-    if (!kept) {
-      return { code, quantity: at ?? quantity.key, params: { bound: bound.toString(), unit: quantity.unit.symbol } };
-    }
+/** Whether `value` keeps a limit of the given kind. */
+export function keeps(is: Limit['is'], value: Decimal, bound: Decimal): boolean {
+  const order = value.cmp(bound);
+  switch (is) {
+    case 'above':
+      return order > 0;
+    case 'atLeast':
+      return order >= 0;
+    case 'below':
+      return order < 0;
+    case 'atMost':
+      return order <= 0;
   }
-  return undefined;
 }

@@ -50,9 +50,10 @@ export class Sheet {
   }
 }
 
-/** Keys of the quantities a formula names directly. */
+/** Keys of the quantities that a quantity's formula and limits name directly. */
 export function namesIn(quantity: Quantity): ReadonlySet<string> {
   const names = new Set<string>();
+  for (const { bound } of quantity.limits) if (bound instanceof Quantity) names.add(bound.key);
   if (quantity.is) walk(quantity.is, (node) => node.op === 'named' && names.add(node.key));
   return names;
 }
@@ -100,9 +101,9 @@ function cycles(sheet: Sheet): string[] {
 function unbalanced(sheet: Sheet): string[] {
   const faults: string[] = [];
   for (const quantity of sheet.quantities.values()) {
-    if (!quantity.is) continue;
     try {
-      proveUnit(quantity.is, quantity.unit, sheet.unitOf);
+      if (quantity.is) proveUnit(quantity.is, quantity.unit, sheet.unitOf);
+      for (const { bound } of quantity.limits) if (bound instanceof Quantity) proveUnit(bound, quantity.unit, sheet.unitOf);
     } catch (fault) {
       faults.push(`${quantity.key}: ${(fault as Error).message}`);
     }

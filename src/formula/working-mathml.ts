@@ -6,8 +6,9 @@ import type { Quantity } from './quantity.js';
 import type { Rational } from './rational.js';
 import { isKnown } from './reading.js';
 import type { Sheet } from './sheet.js';
-import { figureRank, settledBranch } from './working-text.js';
+import { factorText, figureRank, settledBranch } from './working-text.js';
 import type { WriteFigure } from './working-text.js';
+import { one } from './units.js';
 
 /** An element of MathML Core, as data: a tag and its contents. */
 export interface MathNode {
@@ -64,7 +65,7 @@ class WorkingMath implements Notation<MathNode> {
 
   constant({ value, unit, symbol }: Constant): Part {
     if (symbol && !this.withFigures) return { out: symbolMath(symbol), rank: RANK.atom };
-    return figurePart(this.figure(value, unit));
+    return figurePart(this.figure(value, this.withFigures ? unit : one));
   }
 
   named(key: string): Part {
@@ -98,7 +99,7 @@ class WorkingMath implements Notation<MathNode> {
   }
 
   converted(of: Part, factor: Rational): Part {
-    const atom = (value: bigint): Part => ({ out: mn(value.toString()), rank: RANK.atom });
+    const atom = (value: bigint): Part => figurePart(factorText(value, this.withFigures, this.figure));
     const up = factor.over === 1n ? of : this.binary('product', of, atom(factor.over));
     return factor.under === 1n ? up : this.binary('quotient', up, atom(factor.under));
   }

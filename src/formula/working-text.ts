@@ -1,4 +1,4 @@
-import type { Decimal } from './decimal.js';
+import { Decimal } from './decimal.js';
 import type { Constant, Expression, NodeOf } from './expression.js';
 import { InfixNotation, RANK, write } from './notation.js';
 import type { Printed } from './notation.js';
@@ -8,6 +8,7 @@ import { isKnown } from './reading.js';
 import type { Sheet } from './sheet.js';
 import { branch } from './trace.js';
 import type { Unit } from './unit.js';
+import { one, percent } from './units.js';
 
 /** Writes a figure with its unit, in the manner of the page (decimal mark, digits). */
 export type WriteFigure = (value: Decimal, unit: Unit, quantity?: Quantity) => string;
@@ -40,7 +41,7 @@ class WorkingText extends InfixNotation {
 
   override constant({ value, unit, symbol }: Constant): Printed<string> {
     if (symbol && !this.withFigures) return { out: symbol, rank: RANK.atom };
-    return numberPart(this.figure(value, unit));
+    return numberPart(this.figure(value, this.withFigures ? unit : one));
   }
 
   override named(key: string): Printed<string> {
@@ -48,6 +49,10 @@ class WorkingText extends InfixNotation {
     const outcome = this.withFigures ? this.findings.outcome(key) : undefined;
     if (!outcome || !isKnown(outcome)) return { out: quantity.symbol, rank: RANK.atom };
     return numberPart(this.figure(outcome, quantity.unit, quantity));
+  }
+
+  protected override factor(figure: bigint): Printed<string> {
+    return { out: factorText(figure, this.withFigures, this.figure), rank: RANK.atom };
   }
 
   override choice(by: string, cases: readonly (readonly [string, Printed<string>])[]): Printed<string> {
@@ -68,6 +73,13 @@ export function figureRank(text: string): number {
   if (/^[-−]/.test(text)) return RANK.choice;
   return text.includes(' ') ? RANK.power : RANK.atom;
 }
+
+/** A hundred comes from a per cent and is written as one beside figures with units: `9 kg / 90 % · 100 %`. */
+export function factorText(figure: bigint, withFigures: boolean, write: WriteFigure): string {
+  return withFigures && figure === 100n ? write(HUNDRED, percent) : figure.toString();
+}
+
+const HUNDRED = new Decimal(100);
 
 const numberPart = (text: string): Printed<string> => ({ out: text, rank: figureRank(text) });
 

@@ -116,8 +116,7 @@ class Grower implements RandomSheet {
   /** An expression of the shape that comes out in `unit`. */
   private grow(shape: Shape, unit: Unit, want: Want): Expression {
     if (shape.op === 'leaf') return this.leaf(shape, unit, want);
-    // whatever it is, it can be held to a small range
-    if (want === 'tame') return least(greatest(this.grow(shape, unit, 'any'), constant('-3', unit)), constant('3', unit));
+    if (want === 'tame') return this.tame(shape);
     const { op, pick, parts } = shape;
     const part = (at: number, its: Unit, wanted: Want = want): Expression => this.grow(parts[at % parts.length]!, its, wanted);
     const base = BASES[pick % BASES.length]!;
@@ -159,6 +158,26 @@ class Grower implements RandomSheet {
       }
       case 'threshold':
         return whereBelow(part(0, base, 'any'), part(1, base, 'any'), part(2, unit), part(3, unit));
+    }
+  }
+
+  /** A pure number from −3 to 3. */
+  private tame(shape: Branch): Expression {
+    const part = (at: number): Expression => this.grow(shape.parts[at % shape.parts.length]!, one, 'tame');
+    switch (shape.op) {
+      case 'sum':
+        return part(0).plus(part(1)).per('2');
+      case 'difference':
+        return part(0).minus(part(1)).per('2');
+      case 'product':
+        return part(0).times(part(1)).per('3');
+      case 'least':
+        return least(part(0), part(1));
+      case 'exponential':
+        return exponential(part(0)).per('7');
+      default:
+        // whatever it is, it can be held
+        return least(greatest(this.grow(shape, one, 'any'), '-3'), '3');
     }
   }
 

@@ -17,41 +17,34 @@ export type MeaningOf = Readonly<Record<string, Meaning>>;
 // comparisons are to be exact: by default figures count as equal when 12 digits agree
 const math: MathJsInstance = create(all!, { number: 'BigNumber', precision: 64, relTol: 1e-60, absTol: 0 });
 
-type Raw = ((args: ParsedNode[], library: unknown, scope: Map<string, unknown>) => unknown) & { rawArgs: true };
-
 /** Computes only the branch that is taken, as a spreadsheet does. */
-const lazyIf: Raw = Object.assign(
-  ([condition, then, otherwise]: ParsedNode[], _: unknown, scope: Map<string, unknown>): unknown =>
-    (condition!.evaluate(scope) ? then! : otherwise!).evaluate(scope),
-  { rawArgs: true as const },
-);
+const lazyIf = ([condition, then, otherwise]: ParsedNode[], _: unknown, scope: Map<string, unknown>): unknown =>
+  (condition!.evaluate(scope) ? then! : otherwise!).evaluate(scope);
 
-const FUNCTIONS = {
-  exp: (of: BigNumber) => math.exp(of),
-  ln: (of: BigNumber) => math.log(of),
-  min: (...all: BigNumber[]) => math.min(...all),
-  max: (...all: BigNumber[]) => math.max(...all),
-};
-const IN_CELLS = {
-  EXP: FUNCTIONS.exp, LN: FUNCTIONS.ln, MIN: FUNCTIONS.min, MAX: FUNCTIONS.max, IF: lazyIf,
-  NA: () => 'n/a',
+math.import({
+  IF: Object.assign(lazyIf, { rawArgs: true }),
   SAME: (left: unknown, right: unknown) => left === right,
-};
+  NA: () => 'n/a',
+  EXP: (of: BigNumber) => math.exp(of),
+  LN: (of: BigNumber) => math.log(of),
+  MIN: (...all: BigNumber[]) => math.min(...all),
+  MAX: (...all: BigNumber[]) => math.max(...all),
+  ln: (of: BigNumber) => math.log(of),
+});
 
-function computed(text: string, functions: object, meaning: MeaningOf): Wide | undefined {
-  const scope = new Map<string, unknown>(Object.entries(functions));
-  for (const [name, value] of Object.entries(meaning)) scope.set(name, typeof value === 'string' ? value : math.bignumber(value.toString()));
-  const result: unknown = math.evaluate(text, scope);
+function computed(text: string, meaning: MeaningOf): Wide | undefined {
+  const figures = Object.entries(meaning).map(([name, value]) => [name, typeof value === 'string' ? value : math.bignumber(value.toString())] as const);
+  const result: unknown = math.evaluate(text, new Map<string, unknown>(figures));
   return math.isBigNumber(result) && result.isFinite() ? new Wide(result.toString()) : undefined;
 }
 
 /** The figure of a cell, or undefined for an error. In a cell `=` compares; here it would set a variable. */
 export const readCell = (text: string, cells: MeaningOf): Wide | undefined =>
-  computed(text.replace(/(\w+)=("(?:[^"]|"")*")/g, 'SAME($1,$2)'), IN_CELLS, cells);
+  computed(text.replace(/(\w+)=("(?:[^"]|"")*")/g, 'SAME($1,$2)'), cells);
 
 /** The figure of a formula on one line, its signs brought to those of a programming language. */
 export const readText = (text: string, names: MeaningOf): Wide | undefined =>
-  computed(text.replace(/·/g, '*').replace(/−/g, '-').replace(/;/g, ','), FUNCTIONS, names);
+  computed(text.replace(/·/g, '*').replace(/−/g, '-').replace(/;/g, ','), names);
 
 /**
  * The figure of a formula in MathML, read as the eye reads it: an `mrow` groups nothing that is

@@ -1,8 +1,9 @@
-import type { Expression } from '../../src/formula/expression.js';
+import { conversionFactor } from '../../src/formula/balance.js';
+import type { BinaryOp, Expression } from '../../src/formula/expression.js';
 import type { Findings } from '../../src/formula/plan.js';
 import { isKnown } from '../../src/formula/reading.js';
 import type { Sheet } from '../../src/formula/sheet.js';
-import { branch, valueOf } from '../../src/formula/trace.js';
+import { branch } from '../../src/formula/trace.js';
 
 /** How far a computed figure may be from the true one, and how near it came to a corner. */
 export interface Rounding {
@@ -44,66 +45,89 @@ export class RoundingOf {
 
   private of(expression: Expression): Rounding {
     const { node } = expression;
-    if (node.op === 'named') return this.quantity(node.key);
-    if (node.op === 'choice') return this.of(branch(node, this.sheet, this.findings));
-    const value = valueOf(expression, this.sheet, this.findings).toNumber();
-    const round = ROUND * Math.abs(value);
-    const made = (error: number, ...from: readonly Rounding[]): Rounding => ({
-      value,
-      // below the range of this analysis nothing is known
-      error: Math.abs(value) < 1e-150 || Math.abs(value) > 1e150 || Number.isNaN(error) ? (value === 0 && error < 1e-150 ? error : Infinity) : error + round,
-      corner: Math.min(...from.map(({ corner }) => corner)),
-    });
     switch (node.op) {
+      case 'named':
+        return this.quantity(node.key);
       case 'constant':
-        return { value, error: 0, corner: Infinity };
-      case 'exponential': {
-        const of = this.of(node.of);
-        return made(Math.abs(value) * of.error, of);
-      }
-      case 'logarithm': {
-        const of = this.of(node.of);
-        return made(of.error / (of.value - of.error), of);
-      }
-      case 'converted': {
-        const of = this.of(node.of);
-        return made(Math.abs(of.value === 0 ? 0 : value / of.value) * of.error + round, of);
-      }
-      case 'power': {
-        const base = this.of(node.base);
-        const exponent = this.of(node.exponent);
-        if (base.value === 0) return made(base.error === 0 ? 0 : Infinity, base, exponent);
-        const relative = base.error / Math.abs(base.value);
-        const spread = 2 * Math.abs(exponent.value) * relative + Math.abs(Math.log(Math.abs(base.value))) * exponent.error;
-        return made(relative > 0.1 ? Infinity : Math.abs(value) * spread + 3 * round, base, exponent);
-      }
+        return { value: node.constant.value.toNumber(), error: 0, corner: Infinity };
+      case 'choice':
+        return this.of(branch(node, this.sheet, this.findings));
       case 'threshold': {
         const left = this.of(node.left);
         const right = this.of(node.right);
         const taken = this.of(branch(node, this.sheet, this.findings));
         const corner = apart(left, right);
         // rounding could decide which branch is taken
-        const tied = left.error + right.error > 0 && corner < 1e-20;
-        return { value, error: tied ? Infinity : taken.error, corner: Math.min(corner, left.corner, right.corner, taken.corner) };
+        const tied = left.error + right.error > 0 && corner < 1e-12;
+        return { ...taken, error: tied ? Infinity : taken.error, corner: Math.min(corner, left.corner, right.corner, taken.corner) };
       }
-    }
-    const left = this.of(node.left);
-    const right = this.of(node.right);
-    switch (node.op) {
-      case 'sum':
-      case 'difference':
-        return made(left.error + right.error, left, right);
-      case 'product':
-        return made(Math.abs(left.value) * right.error + Math.abs(right.value) * left.error + left.error * right.error, left, right);
-      case 'quotient': {
-        const under = Math.abs(right.value) - right.error;
-        return made(under > 0 ? (left.error + Math.abs(value) * right.error) / under : Infinity, left, right);
+      case 'exponential': {
+        const of = this.of(node.of);
+        const value = Math.exp(of.value);
+        return step(value, value * of.error, of);
       }
-      case 'least':
-      case 'greatest':
-        return { value, error: Math.max(left.error, right.error), corner: Math.min(apart(left, right), left.corner, right.corner) };
+      case 'logarithm': {
+        const of = this.of(node.of);
+        return step(Math.log(of.value), of.error / (of.value - of.error), of);
+      }
+      case 'converted': {
+        const of = this.of(node.of);
+        const { over, under } = conversionFactor(node, this.sheet.unitOf);
+        const factor = Number(over) / Number(under);
+        return step(of.value * factor, (of.error + ROUND * Math.abs(of.value)) * factor, of);
+      }
+      case 'power':
+        return power(this.of(node.base), this.of(node.exponent));
+      default:
+        return binary(node.op, this.of(node.left), this.of(node.right));
     }
   }
+}
+
+function binary(op: BinaryOp, left: Rounding, right: Rounding): Rounding {
+  switch (op) {
+    case 'sum':
+      return added(left.value + right.value, left, right);
+    case 'difference':
+      return added(left.value - right.value, left, right);
+    case 'product': {
+      const carried = Math.abs(left.value) * right.error + Math.abs(right.value) * left.error + left.error * right.error;
+      return step(left.value * right.value, carried, left, right);
+    }
+    case 'quotient': {
+      const value = left.value / right.value;
+      const under = Math.abs(right.value) - right.error;
+      return step(value, under > 0 ? (left.error + Math.abs(value) * right.error) / under : Infinity, left, right);
+    }
+    case 'least':
+    case 'greatest': {
+      const taken = (op === 'least') === left.value < right.value ? left : right;
+      const near = apart(left, right);
+      const error = near < 1e-12 ? Math.max(left.error, right.error) : taken.error;
+      return { value: taken.value, error, corner: Math.min(near, left.corner, right.corner) };
+    }
+  }
+}
+
+/** Where nearly all digits cancel, these short figures no longer know what is left. */
+function added(value: number, left: Rounding, right: Rounding): Rounding {
+  const size = Math.max(Math.abs(left.value), Math.abs(right.value));
+  return step(value, Math.abs(value) < 1e-9 * size ? Infinity : left.error + right.error, left, right);
+}
+
+function power(base: Rounding, exponent: Rounding): Rounding {
+  const value = base.value ** exponent.value;
+  if (base.value === 0) return step(value, base.error === 0 ? 0 : Infinity, base, exponent);
+  const relative = base.error / Math.abs(base.value);
+  const spread = 2 * Math.abs(exponent.value) * relative + Math.abs(Math.log(Math.abs(base.value))) * exponent.error;
+  return step(value, relative > 0.1 ? Infinity : Math.abs(value) * (spread + 3 * ROUND), base, exponent);
+}
+
+/** One more step, with its own rounding; beyond the range of these short figures nothing is known. */
+function step(value: number, carried: number, ...from: readonly Rounding[]): Rounding {
+  const size = Math.abs(value);
+  const known = Number.isFinite(carried) && (size === 0 ? carried === 0 : size > 1e-150 && size < 1e150);
+  return { value, error: known ? carried + ROUND * size : Infinity, corner: Math.min(...from.map(({ corner }) => corner)) };
 }
 
 const apart = (left: Rounding, right: Rounding): number => {

@@ -1,0 +1,96 @@
+import { source } from '../formula/source.js';
+import type { Source } from '../formula/source.js';
+import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, METHANOL_RATIO, NREL_PRETREATMENT, PRACTICE, WATER_INHIBITION } from '../chemistry/sources.js';
+import type { Figure } from './figure.js';
+
+/** A figure that stands where neither the lot nor the site has one, with where it comes from. */
+export type DefaultFigure = Extract<Figure, { text: string }> & { readonly source: Source };
+
+const given = (text: string, unit: string, from: Source = PRACTICE): DefaultFigure => ({ text, unit, source: from });
+
+const TRADE_LISTING = source('Trade listing of used cooking oil: saponification value 185–200', 'found');
+const USED_OIL_DENSITY = source('Used cooking oil, 0.91–0.93 g/mL at 15–20 °C', 'memory');
+const DIRECT_LIMITS = source('Kombe et al. 2013, Adv. Chem. Eng. Sci. 3:242: below 3 %; published limits run from 0.5 to 5 %', 'found');
+const TARGET = source('Canakci and Van Gerpen 2001, Trans. ASAE 44:1429: below 1 % before the base step', 'found');
+const ASSAYS = source('Commercial grades: KOH 85–90 %, NaOH 97–99 %, methoxides from 97 %', 'memory');
+const SOLUTIONS = source('Commercial methoxide solutions: NaOCH3 30 %, 0.97 g/mL; KOCH3 32 %, about 0.99 g/mL', 'memory');
+const SULFURIC = source('Sulfuric acid 96 %, 1.8355 g/mL at 20 °C', 'memory');
+const BAND = source('Ends of a band that holds the published points that carry enough conditions', 'derived');
+
+/** Every default figure of a site; each can be set in the site profile, and most in a lot. */
+export const DEFAULT_FIGURES: Readonly<Record<string, DefaultFigure>> = {
+  sampleDensity: given('0.917', 'g/mL', USED_OIL_DENSITY),
+  standardisationTemperature: given('20', '°C'),
+
+  oilTemperature: given('20', '°C'),
+  typicalOilDensity: given('920', 'kg/m³', USED_OIL_DENSITY),
+  saponificationValue: given('190', 'mg/g', TRADE_LISTING),
+  waterContent: given('0.10', '%'),
+  insolubles: given('0.05', '%'),
+
+  directLimit: given('3.0', '%', DIRECT_LIMITS),
+  pretreatmentLimit: given('40', '%'),
+  pretreatmentTarget: given('1.0', '%', TARGET),
+  waterLimitBase: given('0.10', '%'),
+  waterLimitAcid: given('0.50', '%'),
+  cleanOilFfa: given('0.5', '%'),
+
+  'KOH.assay': given('90', '%', ASSAYS),
+  'NaOH.assay': given('98', '%', ASSAYS),
+  'KOCH3.assay': given('97', '%', ASSAYS),
+  'NaOCH3.assay': given('98', '%', ASSAYS),
+  'KOCH3-solution.assay': given('32', '%', SOLUTIONS),
+  'NaOCH3-solution.assay': given('30', '%', SOLUTIONS),
+  'KOH.baseLoad': given('1.0', '%'),
+  'NaOH.baseLoad': given('0.6', '%'),
+  'KOCH3.baseLoad': given('0.65', '%'),
+  'NaOCH3.baseLoad': given('0.5', '%'),
+  'KOCH3-solution.baseLoad': given('0.65', '%'),
+  'NaOCH3-solution.baseLoad': given('0.5', '%'),
+  'KOCH3-solution.density': given('0.99', 'g/mL', SOLUTIONS),
+  'NaOCH3-solution.density': given('0.97', 'g/mL', SOLUTIONS),
+
+  methanolAssay: given('99.9', '%'),
+  methanolTemperature: given('20', '°C'),
+  methanolRatio: given('6', 'mol/mol', METHANOL_RATIO),
+  conversion: given('98', '%'),
+  entrainedEster: given('1.0', 'kg/kg'),
+
+  pretreatmentMethanolPerAcid: given('20', 'mol/mol', NREL_PRETREATMENT),
+  pretreatmentMethanolPerOil: given('6', 'mol/mol'),
+  pretreatmentMethanolShare: given('20', '%'),
+  pretreatmentAcidOfAcid: given('5', '%', NREL_PRETREATMENT),
+  pretreatmentAcidOfOil: given('1', '%'),
+  pretreatmentAcidShare: given('1', '%'),
+  pretreatmentTemperature: given('60', '°C'),
+  pretreatmentTime: given('60', 'min'),
+  sulfuricAssay: given('96', '%', SULFURIC),
+  sulfuricDensity: given('1.8355', 'g/mL', SULFURIC),
+  carryOver: given('10', '%'),
+
+  'esterification.equilibriumSlow': given('2', '', ESTERIFICATION_EQUILIBRIUM),
+  'esterification.equilibriumFast': given('8', '', BAND),
+  'esterification.rateSlow': given('0.032', '/min', ESTERIFICATION_RATE),
+  'esterification.rateFast': given('0.25', '/min', BAND),
+  'esterification.loadExponent': given('0.35', '', ESTERIFICATION_RATE),
+  'esterification.waterExponent': given('0.83', '', WATER_INHIBITION),
+  'esterification.activationEnergy': given('48000', 'J/mol', ESTERIFICATION_RATE),
+};
+
+/** The option each choice takes where neither the lot nor the site says. */
+export const DEFAULT_OPTIONS: Readonly<Record<string, string>> = {
+  acidKnownFrom: 'titration',
+  'retest.acidKnownFrom': 'titration',
+  sampleTakenBy: 'weighing',
+  blankPolicy: 'solvent-neutralised',
+  titrantAlkali: 'KOH',
+  titrantSolvent: 'alcoholic',
+  referenceAcid: 'oleic',
+  oilDensityBy: 'typical',
+  glyceridesBy: 'saponification-value',
+  fat: 'rapeseed',
+  catalyst: 'KOH',
+  pretreatmentMethanolBasis: 'by-acidity',
+  pretreatmentAcidBasis: 'by-acidity',
+  acidProofEquipment: 'yes',
+};

@@ -1,0 +1,94 @@
+import { passesNeeded } from '../decision/passes.js';
+import type { Findings, Givens } from '../formula/plan.js';
+import { Missing, Refused, isKnown } from '../formula/reading.js';
+import type { Outcome, Unknown } from '../formula/reading.js';
+import type { Sheet } from '../formula/sheet.js';
+import type { Unit } from '../formula/unit.js';
+import { TYPED_UNITS } from '../formula/units.js';
+import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from './defaults.js';
+import type { LotEntry, SiteProfile } from './entry.js';
+import { readFigure } from './figure.js';
+import type { Figure } from './figure.js';
+import { OPTION_BY_UNIT, fieldOf, runCell } from './keys.js';
+
+/** Where a given figure or option comes from. */
+export type Origin = 'entry' | 'site' | 'default' | 'none';
+
+/** Finds what a plan asks for: in the lot, else in the site profile, else among the defaults. */
+export class LotGivens implements Givens {
+  constructor(
+    private readonly sheet: Sheet,
+    private readonly entry: LotEntry,
+    private readonly site: SiteProfile,
+  ) {}
+
+  input(key: string): Outcome {
+    const field = fieldOf(key);
+    const { unit } = this.sheet.quantity(key);
+    const typed = this.typed(key, field);
+    if (typed) return readFigure(typed, unit, field);
+    const standing = this.site.figures[field] ?? DEFAULT_FIGURES[field];
+    if (standing) return readStanding(standing, unit, field);
+    // nobody has said otherwise: titrated at the temperature of standardisation
+    if (key === 'titrationTemperature') return this.input('standardisationTemperature');
+    return new Missing([field]);
+  }
+
+  option(key: string, findings: Findings): string | Unknown {
+    if (key === 'passes') {
+      return passesNeeded((pass) => findings.outcome(`pass${pass}.ffaLeft.slow`), findings.outcome('pretreatmentTarget'));
+    }
+    if (key === 'baseStepAcidFrom') return this.hasRetest() ? 'retest' : 'estimate';
+    const byUnit = OPTION_BY_UNIT[key];
+    if (byUnit) {
+      const figure = this.entry.figures[byUnit.field] ?? this.site.figures[byUnit.field];
+      if (!figure) return new Missing([byUnit.field]);
+      const unit = TYPED_UNITS.get(figure.unit);
+      return unit ? byUnit.of(unit) : new Refused({ code: 'unknown-unit', quantity: byUnit.field, params: { unit: figure.unit } });
+    }
+    const option = this.chosen(key);
+    if (key === 'blankPolicy' && option === 'solvent-neutralised' && this.blankTyped()) {
+      return new Refused({ code: 'blank-with-neutralised-solvent', quantity: 'blank' });
+    }
+    return option ?? new Missing([key]);
+  }
+
+  /** The option of a choice as given, whatever follows from it. */
+  chosen(key: string): string | undefined {
+    return this.entry.options[key] ?? this.site.options[key] ?? DEFAULT_OPTIONS[key];
+  }
+
+  origin(key: string): Origin {
+    const field = fieldOf(key);
+    if (this.typed(key, field) ?? this.entry.options[field]) return 'entry';
+    if (this.site.figures[field] ?? this.site.options[field]) return 'site';
+    return field in DEFAULT_FIGURES || field in DEFAULT_OPTIONS ? 'default' : 'none';
+  }
+
+  /** Whether the oil was titrated again after the acid step, or a value for it was given. */
+  hasRetest(): boolean {
+    const { figures, retestRuns } = this.entry;
+    if (this.chosen('retest.acidKnownFrom') === 'titration') return retestRuns.some(({ sample, start, end }) => sample && start && end);
+    return 'retest.certificateAcidValue' in figures || 'retest.certificateFfa' in figures;
+  }
+
+  private blankTyped(): boolean {
+    const outcome = this.input('blank');
+    return !(outcome instanceof Missing) && !(isKnown(outcome) && outcome.isZero());
+  }
+
+  private typed(key: string, field: string): Figure | undefined {
+    const run = runCell(key);
+    if (!run) return this.entry.figures[field];
+    return (run.retest ? this.entry.retestRuns : this.entry.runs)[run.index]?.[run.cell];
+  }
+}
+
+/** Site values and defaults are the same objects lot after lot, so each is read once. */
+function readStanding(figure: Figure, unit: Unit, field: string): Outcome {
+  let reading = STANDING.get(figure);
+  if (reading?.unit !== unit) STANDING.set(figure, (reading = { unit, outcome: readFigure(figure, unit, field) }));
+  return reading.outcome;
+}
+
+const STANDING = new WeakMap<Figure, { readonly unit: Unit; readonly outcome: Outcome }>();

@@ -1,0 +1,57 @@
+import { lotFormulas } from '../chemistry/lot-formulas.js';
+import type { Unit } from '../formula/unit.js';
+import { gramPerLitre, litre } from '../formula/units.js';
+import type { KnownKeys } from './entry.js';
+
+// The keys of an entry. A figure stands under the key of the quantity it is an input of, but for two
+// fields whose unit decides which quantity they give, and for the cells of a run.
+
+const FIELD_OF: Readonly<Record<string, string>> = {
+  weighedOil: 'oilAmount', oilVolumeGiven: 'oilAmount', oilAmountBy: 'oilAmount', oilMass: 'oilAmount', oilVolume: 'oilAmount',
+  titrantMolarity: 'titrantStrength', titrantMassStrength: 'titrantStrength', titrantStrengthBy: 'titrantStrength',
+};
+const CELL_OF: Readonly<Record<string, 'sample' | 'start' | 'end'>> = {
+  weighedMass: 'sample', sampleVolume: 'sample', sampleMass: 'sample', buretteStart: 'start', buretteEnd: 'end',
+};
+
+/** Where a run's cells stand: `retest.run2.sample`. */
+const RUN_KEY = /^((?:retest\.)?run\d+)\.(\w+)$/;
+
+/** The field at which a problem with a quantity stands, or where a missing one is typed. */
+export function fieldOf(key: string): string {
+  const run = RUN_KEY.exec(key);
+  if (run) return `${run[1]}.${CELL_OF[run[2] ?? ''] ?? run[2]}`;
+  return FIELD_OF[key] ?? key;
+}
+
+/** A quantity of a run, taken apart; undefined for any other key. */
+export function runCell(key: string): { retest: boolean; index: number; cell: 'sample' | 'start' | 'end' } | undefined {
+  const run = RUN_KEY.exec(key);
+  if (!run) return undefined;
+  const name = run[1] ?? '';
+  const cell = CELL_OF[run[2] ?? ''];
+  return cell === undefined ? undefined : { retest: name.startsWith('retest'), index: Number(name.replace(/\D/g, '')) - 1, cell };
+}
+
+/** The choices that the unit of a figure settles. */
+export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; of(unit: Unit): string }>> = {
+  oilAmountBy: { field: 'oilAmount', of: (unit) => (unit.sameDimension(litre) ? 'volume' : 'mass') },
+  titrantStrengthBy: { field: 'titrantStrength', of: (unit) => (unit.sameDimension(gramPerLitre) ? 'mass' : 'amount') },
+};
+
+/** The choices that are decided on results, not typed. */
+const DECIDED: ReadonlySet<string> = new Set(['passes', 'baseStepAcidFrom', ...Object.keys(OPTION_BY_UNIT)]);
+
+/** Keys that an entry or a profile may hold. */
+export const KNOWN_KEYS: KnownKeys = knownKeys();
+
+function knownKeys(): KnownKeys {
+  const sheet = lotFormulas({ runs: 0, counted: [] }, { runs: 0, counted: [] });
+  const figures = new Set<string>();
+  for (const [key, quantity] of sheet.quantities) if (!quantity.is && !RUN_KEY.test(key)) figures.add(fieldOf(key));
+  const options = new Map<string, readonly string[]>([['acidProofEquipment', ['yes', 'no']]]);
+  for (const [key, { options: known }] of sheet.choices) {
+    if (!DECIDED.has(key)) options.set(key, known);
+  }
+  return { figures, options };
+}

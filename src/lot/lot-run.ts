@@ -1,0 +1,34 @@
+import { lotFormulas } from '../chemistry/lot-formulas.js';
+import { Plan } from '../formula/plan.js';
+import type { Findings } from '../formula/plan.js';
+import type { Sheet } from '../formula/sheet.js';
+import type { LotEntry, SiteProfile } from './entry.js';
+import { LotGivens } from './givens.js';
+import { runPlan } from './runs.js';
+
+/** A lot under evaluation: its formulas, what was given, and what has been found. */
+export interface LotRun {
+  readonly sheet: Sheet;
+  readonly plan: Plan;
+  readonly givens: LotGivens;
+  readonly findings: Findings;
+}
+
+/** Puts a lot's givens to the plan for the wanted quantities; all of them when none are named. */
+export function lotRun(entry: LotEntry, site: SiteProfile, wanted?: readonly string[]): LotRun {
+  const sheet = lotFormulas(runPlan(entry.runs), runPlan(entry.retestRuns));
+  const plan = planFor(sheet, wanted);
+  const givens = new LotGivens(sheet, entry, site);
+  return { sheet, plan, givens, findings: plan.evaluate(givens) };
+}
+
+const plans = new WeakMap<Sheet, Map<string, Plan>>();
+
+function planFor(sheet: Sheet, wanted: readonly string[] | undefined): Plan {
+  let ofSheet = plans.get(sheet);
+  if (!ofSheet) plans.set(sheet, (ofSheet = new Map()));
+  const id = wanted ? wanted.join() : '*';
+  let plan = ofSheet.get(id);
+  if (!plan) ofSheet.set(id, (plan = new Plan(sheet, wanted ?? sheet.quantities.keys())));
+  return plan;
+}

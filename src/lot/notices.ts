@@ -1,0 +1,31 @@
+import { MOST_PASSES } from '../decision/passes.js';
+import { isKnown } from '../formula/reading.js';
+import type { LotEntry } from './entry.js';
+import type { Notice } from './lot-reading.js';
+import type { LotRun } from './lot-run.js';
+import { runState } from './runs.js';
+
+/** What a careful colleague would remark on a lot whose figures are all acceptable. */
+export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes: number | undefined): readonly Notice[] {
+  const notices: Notice[] = [];
+  if (givens.chosen('acidKnownFrom') === 'titration') {
+    const states = entry.runs.map(runState);
+    states.forEach((state, index) => {
+      if (state === 'incomplete' && states.includes('counted')) {
+        notices.push({ code: 'run-incomplete', quantity: `run${index + 1}.end`, params: { run: String(index + 1) } });
+      }
+    });
+    if (states.filter((state) => state === 'counted').length === 1) notices.push({ code: 'one-run', quantity: 'acidValue' });
+  }
+  if (passes === MOST_PASSES) {
+    const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
+    const target = findings.outcome('pretreatmentTarget');
+    if (isKnown(left) && isKnown(target) && left.gt(target)) {
+      notices.push({ code: 'target-not-reached', quantity: 'pretreatmentTarget', params: { left: left.toString(), target: target.toString(), passes: String(passes) } });
+    }
+  }
+  if (givens.chosen('glyceridesBy') === 'profile' && givens.chosen('fat') === 'coconut' && givens.chosen('referenceAcid') !== 'lauric') {
+    notices.push({ code: 'lauric-on-other-basis', quantity: 'referenceAcid' });
+  }
+  return notices;
+}

@@ -1,0 +1,129 @@
+import { directCharge, twoStepCharge } from '../decision/charge.js';
+import { MOST_PASSES } from '../decision/passes.js';
+import { decideRoute } from '../decision/route.js';
+import type { Route } from '../decision/route.js';
+import { shownText } from '../formula/digits.js';
+import { Refused, isKnown } from '../formula/reading.js';
+import type { Outcome, Problem } from '../formula/reading.js';
+import { FORMAT_VERSION, checkLotEntry, checkSiteProfile } from './entry.js';
+import type { Fault, LotEntry } from './entry.js';
+import { KNOWN_KEYS, fieldOf } from './keys.js';
+import type { LotFaults, LotReading, ReadingJson } from './lot-reading.js';
+import { lotRun } from './lot-run.js';
+import type { LotRun } from './lot-run.js';
+import { noticesOn } from './notices.js';
+import { runState } from './runs.js';
+
+/** What to read; everything when left out. */
+export interface ReadOptions {
+  /** Keys of the readings wanted; nothing else is computed but the route. For long lists of lots. */
+  readonly only?: readonly string[];
+}
+
+/**
+ * Reads a lot: acid value, FFA, the route with its reasons, and the charges of both routes. Pure:
+ * JSON in, JSON out, and never an exception for bad input. A document that cannot be read at all
+ * (unknown keys, a newer version) gives `faults`; a bad figure gives a reading with a `problem`,
+ * and everything that does not rest on it is still read.
+ *
+ * @param entry a {@link LotEntry}
+ * @param site a `SiteProfile`; the defaults stand where it says nothing
+ */
+export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSION }, options: ReadOptions = {}): LotReading | LotFaults {
+  const lot = checkLotEntry(entry, KNOWN_KEYS);
+  const profile = checkSiteProfile(site, KNOWN_KEYS);
+  if (isFaults(lot) || isFaults(profile)) {
+    const faults = [
+      ...(isFaults(lot) ? lot.map((fault) => ({ ...fault, in: 'entry' as const })) : []),
+      ...(isFaults(profile) ? profile.map((fault) => ({ ...fault, in: 'site' as const })) : []),
+    ];
+    return { version: FORMAT_VERSION, faults };
+  }
+  const { only } = options;
+  const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
+  const route = routeOf(run, lot);
+  const passes = only ? undefined : passesOf(run);
+  if (!only) compute(run, lot, passes);
+  const readings = readingsOf(run, only ?? run.findings.touched());
+  return {
+    version: FORMAT_VERSION,
+    readings,
+    runs: lot.runs.map(runState),
+    retestRuns: lot.retestRuns.map(runState),
+    route: only ? route : withTarget(route, run, passes),
+    charges: { direct: directCharge(), twoStep: twoStepCharge(passes ?? 1) },
+    problems: problemsIn(readings),
+    notices: only ? [] : noticesOn(lot, run, passes),
+  };
+}
+
+const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
+
+const ROUTE_KEYS = ['freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid'];
+
+function routeOf({ findings, givens }: LotRun, entry: LotEntry): Route {
+  return decideRoute({
+    ffa: findings.outcome('freeFattyAcid'),
+    directLimit: findings.outcome('directLimit'),
+    pretreatmentLimit: findings.outcome('pretreatmentLimit'),
+    water: 'waterContent' in entry.figures ? findings.outcome('waterContent') : undefined,
+    waterLimitBase: findings.outcome('waterLimitBase'),
+    waterLimitAcid: findings.outcome('waterLimitAcid'),
+    acidProofEquipment: givens.chosen('acidProofEquipment') === 'yes',
+  });
+}
+
+/** A two-step route that three passes do not bring to the target says so among its reasons. */
+function withTarget(route: Route, { findings }: LotRun, passes: number | undefined): Route {
+  if (route.verdict !== 'two-step' || passes !== MOST_PASSES) return route;
+  const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
+  const target = findings.outcome('pretreatmentTarget');
+  if (!isKnown(left) || !isKnown(target) || left.lte(target)) return route;
+  const params = { left: left.toString(), target: target.toString(), passes: String(passes) };
+  return { ...route, reasons: [...route.reasons, { code: 'pretreatment-misses-target', params }] };
+}
+
+function passesOf({ findings }: LotRun): number | undefined {
+  const passes = findings.option('passes');
+  return typeof passes === 'string' ? Number(passes) : undefined;
+}
+
+/** Results that nothing else in a plan asks for: the first pass is shown even where the charge is not known yet. */
+function compute({ plan, findings }: LotRun, entry: LotEntry, passes: number | undefined): void {
+  const shows = (key: string): boolean => {
+    const pass = /^pass(\d)\./.exec(key);
+    if (pass) return Number(pass[1]) <= (passes ?? 1);
+    const run = /^(retest\.)?run(\d+)\.(acidValue|freeFattyAcid)$/.exec(key);
+    if (run) return Number(run[2]) <= (run[1] ? entry.retestRuns : entry.runs).length;
+    if (key.startsWith('retest.')) return entry.retestRuns.length > 0 && RESULTS.test(key.slice('retest.'.length));
+    return RESULTS.test(key);
+  };
+  for (const key of plan.order) if (shows(key)) findings.outcome(key);
+}
+
+const RESULTS = /^(?:(?:direct|twoStep|pretreated)\..*|acidValue|freeFattyAcid|alkaliPerLitreOfOil|oilVolume|blendOil|waterContent|insolubles|pretreatmentTarget)$/;
+
+function readingsOf({ sheet, findings, givens }: LotRun, keys: readonly string[]): Record<string, ReadingJson> {
+  const readings: Record<string, ReadingJson> = {};
+  for (const key of keys) {
+    const { symbol, unit, digits, is } = sheet.quantity(key);
+    const outcome = findings.outcome(key);
+    const from = is ? 'formula' : givens.origin(key);
+    readings[key] = isKnown(outcome)
+      ? { symbol, unit: unit.symbol, from, value: outcome.toString(), shown: shownText(outcome, digits) }
+      : { symbol, unit: unit.symbol, from, ...unknownJson(outcome) };
+  }
+  return readings;
+}
+
+function unknownJson(outcome: Exclude<Outcome, { isZero(): boolean }>): Pick<ReadingJson, 'missing' | 'problem'> {
+  return outcome instanceof Refused ? { problem: atField(outcome.problem) } : { missing: [...new Set(outcome.missing.map(fieldOf))] };
+}
+
+const atField = (problem: Problem): Problem => ({ ...problem, quantity: fieldOf(problem.quantity) });
+
+function problemsIn(readings: Readonly<Record<string, ReadingJson>>): readonly Problem[] {
+  const found = new Map<string, Problem>();
+  for (const { problem } of Object.values(readings)) if (problem) found.set(`${problem.code} ${problem.quantity}`, problem);
+  return [...found.values()];
+}
