@@ -60,6 +60,7 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   const extraPure = make('extraPure', 'm_extra', acidPure.plus(mineralPure));
   const baseProduct = make('baseProduct', 'm_base/w', assayed(basePure));
   const extraProduct = make('extraProduct', 'm_extra/w', assayed(extraPure));
+  const mineralProduct = make('mineralProduct', 'm_mineral/w', assayed(mineralPure));
   const catalystProduct = make('catalyst', 'm_cat', assayed(basePure.plus(extraPure)));
   const density = (product: keyof typeof solutionDensity): Expression => catalystProduct.per(solutionDensity[product]).in(litre);
   const catalystVolume = make('catalystVolume', 'V_cat', catalyst.of({
@@ -95,7 +96,7 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   const glycerol = make('glycerol', 'm_gly', glycerideAmount.times(conversion).times(M_GLYCEROL).in(kilogram));
 
   return [
-    feedMass, acid, sulfuricAcid, basePure, acidPure, mineralPure, extraPure, baseProduct, extraProduct, catalystProduct,
+    feedMass, acid, sulfuricAcid, basePure, acidPure, mineralPure, extraPure, baseProduct, extraProduct, mineralProduct, catalystProduct,
     catalystVolume, perLitre, perKilogram, glycerideAmount, methanolNeeded, methanolFromCatalyst, methanol, methanolVolume,
     catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
   ];

@@ -75,10 +75,13 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
   const acidMass = make('acidMass', 'm_FFA', start.slow.times(referenceAcidMolarMass).in(kilogram));
   const ffaAtStart = make('ffaAtStart', 'FFA_0', acidMass.per(oilMass).in(percent), freeFattyAcidLike);
 
+  const methanolRule = make('methanolRule', 'R_rule', whereBelow(ffaAtStart, RICH_ACID, mol('40'), mol('20')), { unit: molePerMole, cites: [NREL_PRETREATMENT], digits: { decimals: 0 } });
+  const acidRule = make('acidRule', 'a_rule', whereBelow(ffaAtStart, RICH_ACID, pct('10'), pct('5')), { unit: percent, cites: [NREL_PRETREATMENT], digits: { decimals: 0 } });
+
   const methanolOfVolume = pretreatmentMethanolShare.times(oilVolume).times(methanolDensity).times(methanolAssay).in(kilogram);
   const perAcid = (moles: Expression): Expression => moles.times(start.slow).times(M_METHANOL).in(kilogram);
   const methanolPure = make('methanolPure', 'm_M', pretreatmentMethanolBasis.of({
-    'by-acidity': perAcid(whereBelow(ffaAtStart, RICH_ACID, mol('40'), mol('20'))),
+    'by-acidity': perAcid(methanolRule),
     'per-acid': perAcid(pretreatmentMethanolPerAcid),
     'per-oil': pretreatmentMethanolPerOil.times(glycerides.content).times(oilMass).times(M_METHANOL).in(kilogram),
     'oil-volume': methanolOfVolume,
@@ -87,7 +90,7 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
   const methanolVolume = make('methanolVolume', 'V_MeOH', methanol.per(methanolDensity).in(litre), { unit: litre });
 
   const sulfuricPure = make('sulfuricPure', 'm_S', pretreatmentAcidBasis.of({
-    'by-acidity': whereBelow(ffaAtStart, RICH_ACID, pct('10'), pct('5')).times(acidMass).in(kilogram),
+    'by-acidity': acidRule.times(acidMass).in(kilogram),
     'of-acid': pretreatmentAcidOfAcid.times(acidMass).in(kilogram),
     'of-oil': pretreatmentAcidOfOil.times(oilMass).in(kilogram),
     'oil-volume': pretreatmentAcidShare.times(oilVolume).times(sulfuricDensity).times(sulfuricAssay).in(kilogram),
@@ -131,7 +134,7 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
     waterCarried: { slow: slow.waterCarried, fast: fast.waterCarried },
     sulfuricCarried,
     all: [
-      acidMass, ffaAtStart, methanolPure, methanol, methanolVolume, sulfuricPure, sulfuric, sulfuricVolume, sulfuricPresent, sulfuricCarried,
+      acidMass, ffaAtStart, methanolRule, acidRule, methanolPure, methanol, methanolVolume, sulfuricPure, sulfuric, sulfuricVolume, sulfuricPresent, sulfuricCarried,
       ...slow.all, ...fast.all,
     ],
   };

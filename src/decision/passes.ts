@@ -1,5 +1,6 @@
 import { isKnown } from '../formula/reading.js';
 import type { Outcome, Unknown } from '../formula/reading.js';
+import { atOrBelow } from './compare.js';
 
 /** The most passes of the acid step that are ever planned. */
 export const MOST_PASSES = 3;
@@ -15,7 +16,7 @@ export function passesNeeded(ffaLeft: (pass: number) => Outcome, target: Outcome
   for (let pass = 1; pass < MOST_PASSES; pass++) {
     const left = ffaLeft(pass);
     if (!isKnown(left)) return left;
-    if (left.lte(target)) return String(pass);
+    if (atOrBelow(left, target)) return String(pass);
   }
   return String(MOST_PASSES);
 }

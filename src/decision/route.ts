@@ -1,6 +1,7 @@
 import { Decimal, decimal } from '../formula/decimal.js';
 import { isKnown } from '../formula/reading.js';
 import type { Outcome } from '../formula/reading.js';
+import { atOrBelow } from './compare.js';
 
 /**
  * `direct`: base step with extra catalyst; `two-step`: acid step first; `too-close`: within the
@@ -57,7 +58,7 @@ export function decideRoute(basis: RouteBasis): Route {
   }
   const guard = basis.u ? GUARD_FACTOR.times(basis.u) : new Decimal(0);
   const beyond = (limit: Decimal): 'below' | 'above' | 'close' =>
-    ffa.plus(guard).lte(limit) ? 'below' : ffa.minus(guard).gt(limit) ? 'above' : 'close';
+    atOrBelow(ffa.plus(guard), limit) ? 'below' : atOrBelow(ffa.minus(guard), limit) ? 'close' : 'above';
   const reasons: Reason[] = [];
   const say = (code: ReasonCode, params: Record<string, Decimal> = {}): void => {
     reasons.push({ code, params: Object.fromEntries(Object.entries(params).map(([name, value]) => [name, value.toString()])) });
@@ -71,7 +72,7 @@ export function decideRoute(basis: RouteBasis): Route {
   switch (beyond(directLimit)) {
     case 'below':
       say('at-or-below-direct-limit', { ffa, limit: directLimit });
-      if (ffa.lte(NEGLIGIBLE)) say('extra-negligible', { limit: NEGLIGIBLE });
+      if (atOrBelow(ffa, NEGLIGIBLE)) say('extra-negligible', { limit: NEGLIGIBLE });
       return result('direct');
     case 'close':
       say('within-guard-band', { ffa, limit: directLimit, guard });
@@ -98,6 +99,6 @@ function waterGate(basis: RouteBasis, route: Verdict, say: (code: ReasonCode, pa
   if (water === undefined) return say('water-not-measured');
   if (!isKnown(water)) return;
   const gate = route === 'direct' ? basis.waterLimitBase : route === 'two-step' ? basis.waterLimitAcid : undefined;
-  if (gate === undefined || !isKnown(gate) || water.lte(gate)) return;
+  if (gate === undefined || !isKnown(gate) || atOrBelow(water, gate)) return;
   say(route === 'direct' ? 'dry-before-base-step' : 'dry-before-acid-step', { water, limit: gate });
 }

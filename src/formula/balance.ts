@@ -44,6 +44,7 @@ export function balancedUnit(expression: Expression, unitOf: UnitOf): Unit {
     case 'converted': {
       const from = unit(node.of);
       if (!from.sameDimension(node.unit)) throw new UnitFault(`${from.symbol || 'a pure number'} cannot become ${node.unit.symbol || 'a pure number'}`);
+      if (!from.zero.equals(node.unit.zero)) throw new UnitFault(`${from.symbol} and ${node.unit.symbol} have different zeros`);
       return node.unit;
     }
     case 'power':

@@ -14,7 +14,7 @@ export const Decimal = Shared.clone({
 });
 export type Decimal = Shared;
 
-/** The most significant digits a figure may carry; more would be rounded on the way in. */
+/** The most significant digits a figure may carry; more would be lost with the first operation. */
 export const MOST_DIGITS = 34;
 
 const cache = new Map<string, Decimal>();

@@ -2,7 +2,7 @@ import { conversionFactor } from './balance.js';
 import { Decimal } from './decimal.js';
 import type { BinaryOp, Expression, NodeOf } from './expression.js';
 import type { Findings, Plan } from './plan.js';
-import { isKnown } from './reading.js';
+import { Refused, isKnown } from './reading.js';
 import type { Unknown } from './reading.js';
 import type { Sheet } from './sheet.js';
 import { branch, valueOf } from './trace.js';
@@ -13,7 +13,8 @@ import { branch, valueOf } from './trace.js';
  * automatic differentiation). At a corner (least, greatest, a threshold) it is the derivative of
  * the branch that was taken.
  *
- * @returns a figure for every input that the evaluated formulas touch, or why the quantity itself is not known.
+ * @returns a figure for every input that the evaluated formulas touch, or why the quantity itself is not known;
+ *   `no-slope` where the formula has a kink or a pole
  */
 export function sensitivities(plan: Plan, findings: Findings, key: string): ReadonlyMap<string, Decimal> | Unknown {
   const value = findings.outcome(key);
@@ -29,7 +30,8 @@ export function sensitivities(plan: Plan, findings: Findings, key: string): Read
     if (is) walker.spread(is, adjoint);
     else inputs.set(at, adjoint);
   }
-  return inputs;
+  const finite = [...inputs.values()].every((slope) => slope.isFinite());
+  return finite ? inputs : new Refused({ code: 'no-slope', quantity: key });
 }
 
 /** Derivative of one quantity with respect to one input; zero when it does not rest on it. */

@@ -6,6 +6,10 @@ import type { Digits } from './quantity.js';
  * (ISO 80000-1, rule B). The full value is always kept beside it.
  */
 export function shownText(value: Decimal, digits: Digits): string {
+  return withoutLoneSign(roundedText(value, digits));
+}
+
+function roundedText(value: Decimal, digits: Digits): string {
   if ('significant' in digits) return significantText(value, digits.significant);
   if ('decimals' in digits) return value.toFixed(digits.decimals, Decimal.ROUND_HALF_UP);
   const size = value.abs();
@@ -16,6 +20,11 @@ export function shownText(value: Decimal, digits: Digits): string {
 /** Plain decimal text of so many significant digits; whole digits are never rounded away. */
 function significantText(value: Decimal, significant: number): string {
   if (value.isZero()) return '0';
-  const decimals = Math.max(0, significant - 1 - value.e);
+  // 9.9996 becomes 10.00: the rounding may add a digit before the point
+  const { e } = value.toSignificantDigits(significant, Decimal.ROUND_HALF_UP);
+  const decimals = Math.max(0, significant - 1 - e);
   return value.toFixed(Math.min(decimals, 30), Decimal.ROUND_HALF_UP);
 }
+
+/** `-0.00` would be read as a misprint. */
+const withoutLoneSign = (text: string): string => text.replace(/^-(?=0(?:\.0*)?$)/, '');

@@ -111,13 +111,13 @@ export abstract class InfixNotation implements Notation<string> {
     return this.function(this.signs[name], of);
   }
 
-  converted(of: Printed<string>, factor: Rational): Printed<string> {
-    const up = factor.over === 1n ? of : this.binary('product', of, this.factor(factor.over));
-    return factor.under === 1n ? up : this.binary('quotient', up, this.factor(factor.under));
+  converted(of: Printed<string>, factor: Rational, unit: Unit): Printed<string> {
+    const up = factor.over === 1n ? of : this.binary('product', of, this.factor(factor.over, unit));
+    return factor.under === 1n ? up : this.binary('quotient', up, this.factor(factor.under, unit));
   }
 
-  /** The figure of a change of unit. */
-  protected factor(figure: bigint): Printed<string> {
+  /** The figure of a change to `_unit`. */
+  protected factor(figure: bigint, _unit: Unit): Printed<string> {
     return { out: figure.toString(), rank: RANK.atom };
   }
 

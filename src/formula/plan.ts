@@ -245,7 +245,7 @@ function raise(base: Decimal, exponent: Decimal, key: string): Outcome {
 
 /** A figure too large for decimal arithmetic is refused where it arises: an infinity must not pass for a figure. */
 const finite = (outcome: Outcome, key: string): Outcome =>
-  isKnown(outcome) && !outcome.isFinite() ? refuse('out-of-range', key) : outcome;
+  isKnown(outcome) && !outcome.isFinite() ? refuse('not-finite', key) : outcome;
 
 const refuse = (code: string, quantity: string, params?: Record<string, string>): Refused =>
   new Refused(params ? { code, quantity, params } : { code, quantity });

@@ -18,7 +18,8 @@ export class Rational {
 
   /** Reads `3`, `0.45359237`, `5/9` or `-1e-3`. */
   static of(text: string): Rational {
-    const [over, under] = text.split('/');
+    const [over, under, ...more] = text.split('/');
+    if (more.length) throw new SyntaxError(`not a fraction: ${text}`);
     const read = (part: string): Rational => {
       const match = /^(-?\d+)(?:\.(\d+))?(?:e(-?\d+))?$/.exec(part.trim());
       if (!match) throw new SyntaxError(`not a fraction: ${text}`);
@@ -58,7 +59,7 @@ export class Rational {
     return this.over === other.over && this.under === other.under;
   }
 
-  /** `value` times this fraction, with a single rounding at most. */
+  /** `value` times this fraction; exact but for the roundings of one product and one quotient. */
   scale(value: Decimal): Decimal {
     const product = this.over === 1n ? value : value.times(this.over.toString());
     return this.under === 1n ? product : product.div(this.under.toString());

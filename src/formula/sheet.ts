@@ -64,6 +64,9 @@ function unknownNames(sheet: Sheet): string[] {
     for (const name of namesIn(quantity)) {
       if (!sheet.quantities.has(name)) faults.push(`${quantity.key}: names ${name}, which is not in the sheet`);
     }
+    for (const { at } of quantity.limits) {
+      if (at !== undefined && !sheet.quantities.has(at)) faults.push(`${quantity.key}: its limit stands at ${at}, which is not in the sheet`);
+    }
     if (!quantity.is) continue;
     walk(quantity.is, (node) => {
       if (node.op !== 'choice') return;

@@ -52,9 +52,14 @@ export class Unit {
     return this.scale.per(to.scale);
   }
 
-  /** A figure in this unit expressed in `to`, its zero point counted (20 °C is 68 °F). */
+  /**
+   * A figure in this unit expressed in `to`, its zero point counted (20 °C is 68 °F).
+   *
+   * @throws RangeError for units of different dimensions
+   */
   convert(figure: Decimal, to: Unit): Decimal {
     if (this === to) return figure;
+    if (!this.sameDimension(to)) throw new RangeError(`${this.symbol} cannot become ${to.symbol}`);
     const ratio = this.ratioTo(to);
     const shift = this.zero.minus(to.zero).per(to.scale);
     if (shift.over === 0n) return ratio.scale(figure);

@@ -8,6 +8,7 @@ import { isKnown } from './reading.js';
 import type { Sheet } from './sheet.js';
 import { factorText, figureRank, settledBranch } from './working-text.js';
 import type { WriteFigure } from './working-text.js';
+import type { Unit } from './unit.js';
 import { one } from './units.js';
 
 /** An element of MathML Core, as data: a tag and its contents. */
@@ -98,8 +99,8 @@ class WorkingMath implements Notation<MathNode> {
     return this.function(FUNCTIONS[name], of);
   }
 
-  converted(of: Part, factor: Rational): Part {
-    const atom = (value: bigint): Part => figurePart(factorText(value, this.withFigures, this.figure));
+  converted(of: Part, factor: Rational, unit: Unit): Part {
+    const atom = (value: bigint): Part => figurePart(factorText(value, unit, this.withFigures, this.figure));
     const up = factor.over === 1n ? of : this.binary('product', of, atom(factor.over));
     return factor.under === 1n ? up : this.binary('quotient', up, atom(factor.under));
   }

@@ -51,8 +51,8 @@ class WorkingText extends InfixNotation {
     return numberPart(this.figure(outcome, quantity.unit, quantity));
   }
 
-  protected override factor(figure: bigint): Printed<string> {
-    return { out: factorText(figure, this.withFigures, this.figure), rank: RANK.atom };
+  protected override factor(figure: bigint, unit: Unit): Printed<string> {
+    return { out: factorText(figure, unit, this.withFigures, this.figure), rank: RANK.atom };
   }
 
   override choice(by: string, cases: readonly (readonly [string, Printed<string>])[]): Printed<string> {
@@ -74,9 +74,9 @@ export function figureRank(text: string): number {
   return text.includes(' ') ? RANK.power : RANK.atom;
 }
 
-/** A hundred comes from a per cent and is written as one beside figures with units: `9 kg / 90 % · 100 %`. */
-export function factorText(figure: bigint, withFigures: boolean, write: WriteFigure): string {
-  return withFigures && figure === 100n ? write(HUNDRED, percent) : figure.toString();
+/** A hundred between pure numbers comes from a per cent and is written as one beside figures with units: `9 kg / 90 % · 100 %`. */
+export function factorText(figure: bigint, unit: Unit, withFigures: boolean, write: WriteFigure): string {
+  return withFigures && figure === 100n && unit.isPure ? write(HUNDRED, percent) : figure.toString();
 }
 
 const HUNDRED = new Decimal(100);

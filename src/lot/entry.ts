@@ -58,11 +58,13 @@ const run = v.strictObject({
   sample: v.exactOptional(figure), start: v.exactOptional(figure), end: v.exactOptional(figure), struck: v.exactOptional(text),
 });
 const runs = v.pipe(v.array(run), v.maxLength(MOST_RUNS));
+/** A list is no record of keys, though it would pass for one. */
+const keyed = v.custom<Record<string, unknown>>((value) => !Array.isArray(value));
 const shared = {
   version: v.literal(FORMAT_VERSION),
   name: v.exactOptional(text),
-  figures: v.record(text, figure),
-  options: v.record(text, text),
+  figures: v.pipe(keyed, v.record(text, figure)),
+  options: v.pipe(keyed, v.record(text, text)),
 };
 const siteSchema = v.strictObject(shared);
 const lotSchema = v.strictObject({ ...shared, source: v.exactOptional(text), date: v.exactOptional(text), runs, retestRuns: runs });
@@ -88,11 +90,12 @@ function check<Schema extends typeof lotSchema | typeof siteSchema>(schema: Sche
   const version = (value as { version?: unknown }).version;
   if (version !== FORMAT_VERSION) {
     const newer = typeof version === 'number' && version > FORMAT_VERSION;
-    return [{ code: newer ? 'newer-version' : 'unknown-version', path: 'version', found: String(version) }];
+    return [{ code: newer ? 'newer-version' : 'unknown-version', path: 'version', found: typeof version === 'number' || typeof version === 'string' ? String(version) : typeof version }];
   }
   const parsed = v.safeParse(schema, { ...empty, ...value });
   if (!parsed.success) return parsed.issues.map(faultOf);
-  const faults = unknownKeys(parsed.output, keys);
+  // on the value as it came: the schema drops keys such as `__proto__` in silence
+  const faults = unknownKeys({ ...empty, ...value } as SiteProfile, keys);
   return faults.length ? faults : parsed.output;
 }
 

@@ -10,6 +10,7 @@ import type { LotEntry, SiteProfile } from './entry.js';
 import { readFigure } from './figure.js';
 import type { Figure } from './figure.js';
 import { OPTION_BY_UNIT, fieldOf, runCell } from './keys.js';
+import { runState } from './runs.js';
 
 /** Where a given figure or option comes from. */
 export type Origin = 'entry' | 'site' | 'default' | 'none';
@@ -68,7 +69,7 @@ export class LotGivens implements Givens {
   /** Whether the oil was titrated again after the acid step, or a value for it was given. */
   hasRetest(): boolean {
     const { figures, retestRuns } = this.entry;
-    if (this.chosen('retest.acidKnownFrom') === 'titration') return retestRuns.some(({ sample, start, end }) => sample && start && end);
+    if (this.chosen('retest.acidKnownFrom') === 'titration') return retestRuns.some((run) => runState(run) === 'counted');
     return 'retest.certificateAcidValue' in figures || 'retest.certificateFfa' in figures;
   }
 

@@ -1,3 +1,4 @@
+import { atOrBelow } from '../decision/compare.js';
 import { MOST_PASSES } from '../decision/passes.js';
 import { isKnown } from '../formula/reading.js';
 import type { LotEntry } from './entry.js';
@@ -20,7 +21,7 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
   if (passes === MOST_PASSES) {
     const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
     const target = findings.outcome('pretreatmentTarget');
-    if (isKnown(left) && isKnown(target) && left.gt(target)) {
+    if (isKnown(left) && isKnown(target) && !atOrBelow(left, target)) {
       notices.push({ code: 'target-not-reached', quantity: 'pretreatmentTarget', params: { left: left.toString(), target: target.toString(), passes: String(passes) } });
     }
   }

@@ -1,4 +1,5 @@
 import { directCharge, twoStepCharge } from '../decision/charge.js';
+import { atOrBelow } from '../decision/compare.js';
 import { MOST_PASSES } from '../decision/passes.js';
 import { decideRoute } from '../decision/route.js';
 import type { Route } from '../decision/route.js';
@@ -78,7 +79,7 @@ function withTarget(route: Route, { findings }: LotRun, passes: number | undefin
   if (route.verdict !== 'two-step' || passes !== MOST_PASSES) return route;
   const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
   const target = findings.outcome('pretreatmentTarget');
-  if (!isKnown(left) || !isKnown(target) || left.lte(target)) return route;
+  if (!isKnown(left) || !isKnown(target) || atOrBelow(left, target)) return route;
   const params = { left: left.toString(), target: target.toString(), passes: String(passes) };
   return { ...route, reasons: [...route.reasons, { code: 'pretreatment-misses-target', params }] };
 }

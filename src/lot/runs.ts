@@ -13,11 +13,12 @@ export function runState({ sample, start, end, struck }: RunEntry): RunState {
 /**
  * Which runs count. A run that is still being typed does not, so that the result of the others
  * stays; but when no run is complete the first unfinished one counts, so that what is missing can be said.
+ * Where every run is struck out it is the next one, not begun yet: a struck run gives no result.
  */
 export function runPlan(runs: readonly RunEntry[]): RunPlan {
   const states = runs.map(runState);
   const counted = states.flatMap((state, index) => (state === 'counted' ? [index] : []));
   if (counted.length) return { runs: runs.length, counted };
   const begun = states.findIndex((state) => state !== 'struck');
-  return { runs: runs.length, counted: begun < 0 ? [] : [begun] };
+  return begun < 0 ? { runs: runs.length + 1, counted: [runs.length] } : { runs: runs.length, counted: [begun] };
 }

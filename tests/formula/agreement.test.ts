@@ -3,7 +3,8 @@ import { describe, expect, it } from 'vitest';
 import { cellFormula } from '../../src/formula/cell-formula.js';
 import { Decimal } from '../../src/formula/decimal.js';
 import { sensitivities } from '../../src/formula/derivative.js';
-import { Expression, constant } from '../../src/formula/expression.js';
+import type { Expression} from '../../src/formula/expression.js';
+import { constant } from '../../src/formula/expression.js';
 import { Plan } from '../../src/formula/plan.js';
 import type { Findings } from '../../src/formula/plan.js';
 import { Quantity, quantity } from '../../src/formula/quantity.js';
@@ -65,7 +66,7 @@ function overSheets(check: (evaluated: Evaluated) => number): number {
 
 const address = (key: string): string => key.replace('input', 'B').replace('result', 'C').replace('route', 'D1').replace('grade', 'D2');
 
-describe('the interpreters agree on random sheets', () => {
+describe('the interpreters agree on random sheets', { timeout: 60_000 }, () => {
   it('leaves nearly every figure sure to thirty digits, so that agreement means something', () => {
     let sharp = 0;
     const sure = overSheets(({ sure, findings, rounding }) => {
@@ -94,27 +95,19 @@ describe('the interpreters agree on random sheets', () => {
     expect(compared).toBeGreaterThan(2 * RUNS.numRuns);
   });
 
-  it('evaluation and the text with its figures', () => {
+  it('evaluation and the line of text, with figures and with symbols', () => {
     const compared = overSheets((evaluated) => {
       const { sheet, sure, findings } = evaluated;
       for (const key of sure) {
-        const text = figuresText(sheet.quantity(key), sheet, findings, onlyDigits);
-        agree(evaluated, key, readText(text, {}), text);
+        const asked = [sheet.quantity(key), sheet, findings, onlyDigits] as const;
+        const figures = figuresText(...asked);
+        agree(evaluated, key, readText(figures, {}), figures);
+        const general = generalText(...asked);
+        agree(evaluated, key, readText(general, meanings(evaluated)), general);
       }
       return sure.length;
     });
     expect(compared).toBeGreaterThan(2 * RUNS.numRuns);
-  });
-
-  it('evaluation and the general text, its symbols looked up', () => {
-    overSheets((evaluated) => {
-      const { sheet, sure, findings } = evaluated;
-      for (const key of sure) {
-        const text = generalText(sheet.quantity(key), sheet, findings, onlyDigits);
-        agree(evaluated, key, readText(text, meanings(evaluated)), text);
-      }
-      return sure.length;
-    });
   });
 
   it('evaluation and MathML, with figures and with symbols', () => {
@@ -193,7 +186,7 @@ function meanings({ sheet, findings, symbols }: Evaluated): Record<string, Wide>
   return names;
 }
 
-describe('units of random sheets', () => {
+describe('units of random sheets', { timeout: 60_000 }, () => {
   it('refuses a sheet when the unit of one leaf is a thousand times as large', () => {
     let changed = 0;
     fc.assert(

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { derivative, sensitivities } from '../../src/formula/derivative.js';
-import { Decimal } from '../../src/formula/decimal.js';
+import type { Decimal } from '../../src/formula/decimal.js';
 import { exponential, greatest, least, logarithm, whereBelow } from '../../src/formula/expression.js';
 import type { Expression } from '../../src/formula/expression.js';
 import { choice, quantity } from '../../src/formula/quantity.js';

@@ -2,7 +2,7 @@ import { Decimal } from '../../src/formula/decimal.js';
 import type { Findings, Givens } from '../../src/formula/plan.js';
 import { Plan } from '../../src/formula/plan.js';
 import type { Quantity } from '../../src/formula/quantity.js';
-import { Choice } from '../../src/formula/quantity.js';
+import type { Choice } from '../../src/formula/quantity.js';
 import { isKnown, Missing, Refused } from '../../src/formula/reading.js';
 import type { Outcome } from '../../src/formula/reading.js';
 import { Sheet } from '../../src/formula/sheet.js';

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { Expression, constant, exponential, greatest, least, logarithm, whereBelow } from '../../src/formula/expression.js';
-import { Choice, Quantity, choice, quantity } from '../../src/formula/quantity.js';
+import type { Choice} from '../../src/formula/quantity.js';
+import { Quantity, choice, quantity } from '../../src/formula/quantity.js';
 import type { Unit } from '../../src/formula/unit.js';
 import { cubicMetre, gram, kelvin, kilogram, millilitre, millimolePerGram, milligramPerGram, molePerLitre, one, percent } from '../../src/formula/units.js';
 
@@ -91,7 +92,7 @@ const ROOTED: readonly (readonly [Unit, Unit])[] = [
   [cubicMetre.power(2), cubicMetre],
 ];
 const FACTORS = ['1000', '0.001', '0.01', '60', '0.45359237', '5/9', '3.785411784'] as const;
-const SCALED_ROUTES = ['acid', 'glycerol', 'blend'] as const;
+const ROUTES = ['acid', 'glycerol', 'blend'] as const;
 
 class Grower implements RandomSheet {
   readonly entries: (Quantity | Choice)[];
@@ -99,7 +100,7 @@ class Grower implements RandomSheet {
   readonly values: Record<string, string> = {};
   readonly options: Record<string, string>;
   readonly symbols: Record<string, string> = {};
-  readonly #choices = [choice('route', SCALED_ROUTES), choice('grade', ['A', 'b c'])] as const;
+  readonly #choices = [choice('route', ROUTES), choice('grade', ['A', 'b c'])] as const;
   #constants = 0;
 
   constructor([route, grade]: readonly [number, number]) {

@@ -2,8 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { balancedUnit } from '../../src/formula/balance.js';
 import { constant, exponential, greatest, least, logarithm, named, whereBelow } from '../../src/formula/expression.js';
 import type { Expression } from '../../src/formula/expression.js';
-import { Quantity, choice, limit, quantity } from '../../src/formula/quantity.js';
-import type { Choice } from '../../src/formula/quantity.js';
+import { choice, limit, quantity } from '../../src/formula/quantity.js';
+import type { Choice , Quantity} from '../../src/formula/quantity.js';
 import { Sheet, SheetFault, namesIn } from '../../src/formula/sheet.js';
 import type { Unit } from '../../src/formula/unit.js';
 import {

@@ -1,0 +1,329 @@
+import { css, html, nothing } from 'lit';
+import { state } from 'lit/decorators.js';
+import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
+import { fill } from '../../locales/en.js';
+import { SectionElement } from '../parts/section.js';
+
+type RouteName = 'direct' | 'twoStep';
+
+/**
+ * The charge of a lot: what to weigh, in order of addition, for either route, with base and extra
+ * catalyst apart, the cautions at the step they belong to, and the retest between the two steps.
+ *
+ * @element esterway-charge
+ * @attr {boolean} folded - folds the section to its one-line summary
+ * @attr {'metric' | 'us'} units - units in which amounts are shown
+ *
+ * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out
+ * @fires {EsterwayChangeEvent} esterway-change - a person changed the lot (only where the element holds it itself)
+ *
+ * @csspart section - the whole section
+ * @csspart heading - the button that folds it
+ * @csspart body - what is folded away
+ * @csspart step - a step with its amounts
+ * @csspart caution - the cautions of a step
+ * @csspart figure - a figure that opens its working
+ *
+ * @cssprop --esterway-amber - headings of steps and cautions
+ * @cssprop --esterway-pink-soft - behind the retest
+ */
+export class EsterwayCharge extends SectionElement {
+  static override styles = [
+    ...SectionElement.styles,
+    css`
+      .choose {
+        display: flex;
+        gap: 0;
+        margin-block: 8px 4px;
+      }
+      .choose label {
+        flex: 1 1 0;
+        position: relative;
+        display: flex;
+        align-items: center;
+        justify-content: center;
+        min-block-size: var(--_target);
+        border: 1px solid var(--_glass);
+        text-align: center;
+        cursor: pointer;
+      }
+      .choose label + label {
+        border-inline-start: 0;
+      }
+      .choose input {
+        position: absolute;
+        inset: 0;
+        opacity: 0;
+        cursor: pointer;
+      }
+      .choose label:has(:checked) {
+        background: var(--_faint);
+        box-shadow: inset 0 -3px var(--_pink);
+        font-weight: 650;
+      }
+      .choose label:has(:focus-visible) {
+        outline: 2px solid var(--_pink);
+        outline-offset: 1px;
+      }
+      ol {
+        counter-reset: line;
+      }
+      li {
+        counter-increment: line;
+        display: grid;
+        grid-template-columns: 1.4em 1fr auto;
+        gap: 0 6px;
+        padding-block: 6px;
+        border-block-end: 1px solid var(--_faint);
+      }
+      li::before {
+        content: counter(line);
+        color: var(--_quiet);
+      }
+      .mass {
+        text-align: end;
+        font-weight: 650;
+      }
+      .what {
+        overflow-wrap: anywhere;
+      }
+      .how {
+        grid-column: 2;
+        color: var(--_quiet);
+        font-size: 0.9em;
+      }
+      .volume {
+        grid-column: 3;
+        color: var(--_quiet);
+        font-size: 0.9em;
+        text-align: end;
+      }
+      .plain {
+        grid-column: 2 / -1;
+      }
+      dl {
+        display: grid;
+        grid-template-columns: 1fr auto;
+        gap: 4px 10px;
+        font-size: 0.94em;
+      }
+      dt {
+        color: var(--_quiet);
+      }
+      dd {
+        text-align: end;
+      }
+      .care ul {
+        margin-block-start: 3px;
+        font-size: 0.92em;
+      }
+      .care li {
+        display: list-item;
+        margin-inline-start: 1.1em;
+        padding: 1px 0;
+        border: 0;
+        list-style: disc;
+      }
+      .care li::before {
+        content: none;
+      }
+      @media (forced-colors: active) {
+        .choose label:has(:checked) {
+          outline: 2px solid Highlight;
+          outline-offset: -2px;
+        }
+      }
+      @media print {
+        li,
+        .care,
+        .gate {
+          break-inside: avoid;
+        }
+      }
+    `,
+  ];
+
+  /** The route looked at, where a person has chosen one; else the one recommended. */
+  @state() private chosen: RouteName | undefined;
+
+  private get recommended(): RouteName {
+    const route = this.lot?.route;
+    const verdict = route?.verdict === 'too-close' ? route.safe : route?.verdict;
+    return verdict === 'direct' || verdict === 'not-known' ? 'direct' : 'twoStep';
+  }
+
+  private get looked(): RouteName {
+    return this.chosen ?? this.recommended;
+  }
+
+  protected override get heading(): string {
+    return this.texts.sections.charge;
+  }
+
+  protected override get summary(): string {
+    const mass = this.amountWords('oilMass');
+    const volume = this.amountWords('oilVolume');
+    const temperature = this.amountWords('oilTemperature');
+    return mass && volume && temperature ? fill(this.texts.charge.batch, { mass, volume, temperature }) : '';
+  }
+
+  protected override body(): unknown {
+    const { texts, lot } = this;
+    if (!lot) return nothing;
+    const steps = lot.charges[this.looked];
+    return html`
+      <div class="choose no-print" role="radiogroup" aria-label=${texts.charge.choose}>
+        ${this.radio('direct', texts.charge.direct)} ${this.radio('twoStep', texts.charge.twoStep)}
+      </div>
+      ${this.looked === this.recommended || lot.route.verdict === 'not-known' ? nothing : html`<p class="gate small">${texts.charge.notThisRoute} ${texts.verdicts[lot.route.verdict]}.</p>`}
+      ${this.reading(`${this.looked}.catalyst`)?.value === undefined ? html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>` : nothing}
+      ${steps.map((step) => this.step(step, steps))} ${this.outcome()}
+    `;
+  }
+
+  private radio(route: RouteName, words: string): unknown {
+    return html`<label
+      ><input type="radio" name="route" .checked=${this.looked === route} @change=${() => (this.chosen = route)} /><span>${words}</span></label
+    >`;
+  }
+
+  private step(step: ChargeStep, all: readonly ChargeStep[]): unknown {
+    const { texts, looked } = this;
+    const passes = all.filter(({ step: kind }) => kind === 'acid').length;
+    const title = step.step === 'base' ? texts.charge.baseStep : passes > 1 ? fill(texts.charge.acidStepPass, { pass: String(step.pass), passes: String(passes) }) : texts.charge.acidStep;
+    const resting = step.step === 'base' && looked === 'twoStep' ? (this.hasRetest ? texts.charge.onRetest : texts.charge.onEstimate) : '';
+    const weighed = step.lines.filter(({ what }) => what !== 'retest');
+    const retest = step.lines.some(({ what }) => what === 'retest');
+    return html`
+      <section part="step" aria-label=${title}>
+        <h3>${title}${resting ? html` <span class="unit">${resting}</span>` : nothing}</h3>
+        <ol>
+          ${weighed.map((line) => this.line(line, step))}
+        </ol>
+        ${this.cautions(step)} ${retest ? this.retest() : nothing}
+      </section>
+    `;
+  }
+
+  private get hasRetest(): boolean {
+    return this.reading('retest.acidContent')?.value !== undefined;
+  }
+
+  private line(line: ChargeLine, step: ChargeStep): unknown {
+    if (!line.mass) return html`<li><span class="plain">${this.instruction(line)}</span></li>`;
+    const how = this.how(line, step);
+    const volume = line.volume && Number(this.reading(line.volume)?.value ?? 0) > 0 ? this.figure(line.volume) : nothing;
+    return html`<li>
+      <span class="what">${this.instruction(line, step)}</span><span class="mass">${this.figure(line.mass)}</span>
+      <span class="how">${how}</span><span class="volume">${volume}</span>
+    </li>`;
+  }
+
+  private instruction({ what }: ChargeLine, step?: ChargeStep): string {
+    const { forRun } = this.texts.charge;
+    const key = what === 'oil' && step?.step === 'base' ? 'oil-direct' : what;
+    return fill(forRun[key], {
+      temperature: this.amountWords('pretreatmentTemperature') ?? '–',
+      time: this.amountWords('pretreatmentTime') ?? '–',
+      assay: this.plain({ methanol: 'methanolAssay', 'sulfuric-acid': 'sulfuricAssay', catalyst: 'catalystAssay' }[what as string] ?? ''),
+      catalyst: this.catalystName,
+    });
+  }
+
+  private get catalystName(): string {
+    const name = this.optionText('catalyst');
+    return name.charAt(0).toLocaleUpperCase(this.languageTag) + name.slice(1);
+  }
+
+  private plain(key: string): string {
+    const shown = this.reading(key)?.shown;
+    return shown === undefined ? '–' : this.number(shown.replace(/\.0+$/, ''));
+  }
+
+  /** What an amount is counted on. */
+  private how({ what }: ChargeLine, step: ChargeStep): unknown {
+    const { charge } = this.texts;
+    if (what === 'catalyst') return this.catalystParts();
+    if (what === 'methanol' && step.step === 'base') {
+      const credit = Number(this.reading(`${this.looked}.methanolFromCatalyst`)?.value ?? 0) > 0;
+      return html`${fill(charge.methanolBasis.base, { ratio: this.plain('methanolRatio') })}
+      ${credit ? html`<br />${fill(charge.methanolCredit, { mass: this.amountWords(`${this.looked}.methanolFromCatalyst`) ?? '' })}` : nothing}`;
+    }
+    if (what === 'methanol') {
+      const basis = this.option('pretreatmentMethanolBasis') as keyof typeof charge.methanolBasis;
+      const typed = { 'per-acid': 'pretreatmentMethanolPerAcid', 'per-oil': 'pretreatmentMethanolPerOil', 'oil-volume': 'pretreatmentMethanolShare' }[basis as string];
+      const ratio = typed ? this.plain(typed) : this.plain(`pass${step.pass}.methanolRule`);
+      return fill(charge.methanolBasis[basis], { ratio });
+    }
+    if (what === 'sulfuric-acid') {
+      const basis = this.option('pretreatmentAcidBasis') as keyof typeof charge.acidBasis;
+      const typed = { 'of-acid': 'pretreatmentAcidOfAcid', 'of-oil': 'pretreatmentAcidOfOil', 'oil-volume': 'pretreatmentAcidShare' }[basis as string];
+      return fill(charge.acidBasis[basis], { share: typed ? this.plain(typed) : this.plain(`pass${step.pass}.acidRule`) });
+    }
+    return nothing;
+  }
+
+  private catalystParts(): unknown {
+    const { charge } = this.texts;
+    const { looked } = this;
+    const base = this.amountWords(`${looked}.baseProduct`);
+    const extra = this.amountWords(`${looked}.extraProduct`);
+    if (!base || !extra) return nothing;
+    const mineral = Number(this.reading(`${looked}.mineralPure`)?.value ?? 0) > 0;
+    const per = { perLitre: this.plain(`${looked}.catalystPerLitre`), perKilogram: this.plain(`${looked}.catalystPerKilogram`) };
+    return html`${fill(charge.parts, { base, extra })}
+    ${mineral ? html`<br />${fill(charge.mineral, { mass: this.amountWords(`${looked}.mineralProduct`) ?? '' })}` : nothing}
+    <br />${fill(charge.perLitre, per)}`;
+  }
+
+  private cautions(step: ChargeStep): unknown {
+    const { cautions } = this.texts;
+    return html`<div class="care" part="caution" role="note">
+      <b>${cautions.title}</b>
+      <ul>
+        ${step.cautions.map((code) => html`<li>${cautions[code]}</li>`)}
+      </ul>
+    </div>`;
+  }
+
+  /** Between the two steps: what to expect, and the titration that replaces the expectation. */
+  private retest(): unknown {
+    const { charge } = this.texts;
+    const low = this.reading('pretreated.ffaLeft.fast')?.shown;
+    const high = this.reading('pretreated.ffaLeft.slow')?.shown;
+    return html`
+      <div class="gate">
+        <b>${charge.forRun.retest}</b>
+        ${low !== undefined && high !== undefined ? html`<p>${fill(charge.expected, { low: this.number(low), high: this.number(high) })}</p>` : nothing}
+        <esterway-titration bare retest exportparts="figure, result"></esterway-titration>
+      </div>
+    `;
+  }
+
+  private outcome(): unknown {
+    const { charge } = this.texts;
+    const { looked } = this;
+    if (this.reading(`${looked}.soap`)?.value === undefined) return nothing;
+    return html`
+      <h3>${charge.outcome}</h3>
+      <dl>
+        <dt>${charge.waterOf}</dt>
+        <dd>${this.figure(`${looked}.waterShare`)}</dd>
+        <dt>${charge.soapOf}</dt>
+        <dd>${this.figure(`${looked}.soap`)}</dd>
+        <dt>${charge.lostOf}</dt>
+        <dd>${this.figure(`${looked}.oilLost`)}</dd>
+        <dt>${fill(charge.esterOf, { conversion: this.plain('conversion') })}</dt>
+        <dd>${this.figure(`${looked}.ester`)}</dd>
+        <dt>${charge.glycerolOf}</dt>
+        <dd>${this.figure(`${looked}.glycerol`)}</dd>
+      </dl>
+    `;
+  }
+}
+
+declare global {
+  interface HTMLElementTagNameMap {
+    'esterway-charge': EsterwayCharge;
+  }
+}

@@ -1,0 +1,177 @@
+import { css, html } from 'lit';
+import { query, state } from 'lit/decorators.js';
+import { fill } from '../../locales/en.js';
+import { nextLot } from '../../lot/edit.js';
+import { LotElement } from '../parts/base.js';
+import { EsterwayOpenEvent, EsterwayUndoEvent } from '../parts/events.js';
+import { groupsFields } from '../parts/focus-order.js';
+import { buttons, boxes, tokens } from '../parts/styles.js';
+import type { EsterwayWorking } from '../working/working.js';
+
+/**
+ * The whole job in one narrow column: lot, titration, route, charge, working, site values. Wide, it
+ * sets them side by side.
+ *
+ * @element esterway-panel
+ * @attr {'metric' | 'us'} units - units in which amounts are shown
+ *
+ * @fires {EsterwayChangeEvent} esterway-change - a person changed the lot; it carries the entry and the reading
+ * @fires {EsterwaySiteChangeEvent} esterway-site-change - a person changed a site value; keep it and set it again next time
+ * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out; the panel opens it
+ *
+ * @slot - more actions, beside the panel's own
+ *
+ * @csspart actions - the row of actions
+ * @csspart action - an action
+ * @csspart section - a section
+ * @csspart figure - a figure that opens its working
+ *
+ * @cssprop --esterway-paper - background
+ * @cssprop --esterway-ink - text
+ * @cssprop --esterway-quiet - labels and units
+ * @cssprop --esterway-rule - lines between sections
+ * @cssprop --esterway-faint - faint lines and backgrounds
+ * @cssprop --esterway-glass - lines of fields, the burette, buttons
+ * @cssprop --esterway-amber - limits, headings of steps, cautions
+ * @cssprop --esterway-oil - the oil in the burette
+ * @cssprop --esterway-pink - what is live or asks for attention
+ * @cssprop --esterway-pink-soft - behind what asks for attention
+ * @cssprop --esterway-margin - the margin line
+ * @cssprop --esterway-font - font family
+ * @cssprop --esterway-font-size - size of plain text; everything else follows
+ */
+export class EsterwayPanel extends LotElement {
+  static override styles = [
+    tokens,
+    buttons,
+    boxes,
+    css`
+      :host {
+        container-type: inline-size;
+        background: var(--_paper);
+        border: 1px solid var(--_rule);
+        border-radius: 3px;
+      }
+      .columns > * {
+        border-block-end: 1px solid var(--_rule);
+      }
+      .actions {
+        display: flex;
+        flex-wrap: wrap;
+        gap: 8px;
+        padding: 10px 14px 12px 38px;
+        padding-inline: 38px 14px;
+      }
+      .said {
+        padding-inline: 38px 14px;
+        color: var(--_quiet);
+        font-size: 0.92em;
+      }
+      .fault {
+        margin: 12px;
+      }
+      @container (min-width: 700px) {
+        .columns {
+          columns: 2;
+          column-gap: 0;
+          column-rule: 1px solid var(--_rule);
+        }
+        .columns > * {
+          break-inside: avoid;
+        }
+      }
+      @container (min-width: 1060px) {
+        .columns {
+          columns: 3;
+        }
+      }
+      @media print {
+        :host {
+          border: 0;
+        }
+        .columns {
+          columns: 1;
+        }
+        .columns > * {
+          break-inside: auto;
+        }
+      }
+    `,
+  ];
+
+  @query('esterway-working') private readonly working!: EsterwayWorking | null;
+  /** What was just done, for those who do not see it happen. */
+  @state() private said = '';
+
+  constructor() {
+    super();
+    groupsFields(this);
+    this.addEventListener(EsterwayOpenEvent.type, this.onOpen);
+  }
+
+  protected override render(): unknown {
+    const { texts, desk } = this;
+    return html`
+      <div role="region" aria-label=${texts.panel.label}>
+        ${'faults' in desk.reading ? this.faults(desk.reading.faults) : this.sections()}
+        <p class="said no-print" role="status">${this.said}</p>
+        <div class="actions no-print" part="actions">
+          <button class="action main" part="action" type="button" @click=${this.onPrint}>${texts.panel.print}</button>
+          <button class="action" part="action" type="button" @click=${this.onNewLot}>${texts.panel.newLot}</button>
+          <button class="action" part="action" type="button" ?disabled=${!desk.canUndo} @click=${this.onUndo}>${texts.panel.undo}</button>
+          <slot></slot>
+        </div>
+      </div>
+    `;
+  }
+
+  private sections(): unknown {
+    const parts = 'section, figure';
+    return html`
+      <div class="columns">
+        <esterway-lot exportparts=${parts}></esterway-lot>
+        <esterway-titration exportparts=${parts}></esterway-titration>
+        <esterway-route exportparts=${parts}></esterway-route>
+        <esterway-charge exportparts=${parts}></esterway-charge>
+        <esterway-working class="no-print" exportparts=${parts}></esterway-working>
+        <esterway-site-values class="no-print" folded exportparts=${parts}></esterway-site-values>
+      </div>
+    `;
+  }
+
+  private faults(faults: readonly { readonly code: string; readonly path: string; readonly found?: string }[]): unknown {
+    const words = this.texts.faults as Readonly<Record<string, string>>;
+    return html`<div class="gate fault" role="alert">
+      <b>${this.texts.faults.title}</b>
+      ${faults.map(({ code, path, found = '' }) => html`<p>${fill(words[code] ?? code, { path, found })}</p>`)}
+    </div>`;
+  }
+
+  private readonly onOpen = (event: EsterwayOpenEvent): void => {
+    const { working } = this;
+    if (!working) return;
+    working.folded = false;
+    working.of = event.key;
+    void working.updateComplete.then(() => working.showOpened());
+  };
+
+  private onPrint(): void {
+    window.print();
+  }
+
+  private onNewLot(): void {
+    this.edit({ kind: 'replace', entry: nextLot(this.desk.entry) });
+    this.said = this.texts.panel.newLotDone;
+  }
+
+  private onUndo(): void {
+    this.dispatchEvent(new EsterwayUndoEvent());
+    this.said = this.texts.panel.undone;
+  }
+}
+
+declare global {
+  interface HTMLElementTagNameMap {
+    'esterway-panel': EsterwayPanel;
+  }
+}

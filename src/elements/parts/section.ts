@@ -1,0 +1,280 @@
+import { css, html, nothing } from 'lit';
+import type { TemplateResult } from 'lit';
+import { property } from 'lit/decorators.js';
+import { amountIn } from '../../exchange/amount.js';
+import { fieldText, showNumber } from '../../exchange/number-format.js';
+import { Decimal } from '../../formula/decimal.js';
+import type { Problem } from '../../formula/reading.js';
+import { fill } from '../../locales/en.js';
+import { fieldName } from '../../locales/quantity-name.js';
+import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
+import type { Figure } from '../../lot/figure.js';
+import { LotElement } from './base.js';
+import { EsterwayEditEvent, EsterwayOpenEvent } from './events.js';
+import type { FigureInputEvent } from './figure-field.js';
+import { groupsFields } from './focus-order.js';
+import type { OptionInputEvent } from './option-field.js';
+import { boxes, buttons, tokens } from './styles.js';
+
+/** A section of the panel: a heading that folds it to one line, and what all sections write in the same way. */
+export abstract class SectionElement extends LotElement {
+  static override styles = [
+    tokens,
+    buttons,
+    boxes,
+    css`
+      :host {
+        background: var(--_paper);
+        container-type: inline-size;
+      }
+      .section {
+        position: relative;
+        padding: 4px 14px 14px 38px;
+        padding-inline: 38px 14px;
+      }
+      .section::before {
+        content: '';
+        position: absolute;
+        inset-block: 0;
+        inset-inline-start: 26px;
+        border-inline-start: 1px solid var(--_margin);
+      }
+      .fold {
+        display: flex;
+        flex-wrap: wrap;
+        align-items: baseline;
+        column-gap: 10px;
+        inline-size: calc(100% + 38px);
+        min-block-size: var(--_target);
+        margin-inline-start: -38px;
+        padding: 10px 0 6px;
+        background: none;
+        border: 0;
+        text-align: start;
+      }
+      .mark {
+        flex: none;
+        inline-size: 26px;
+        margin-inline-end: 2px;
+        text-align: center;
+        color: var(--_quiet);
+        transition: rotate 0.12s;
+      }
+      .fold[aria-expanded='false'] .mark {
+        rotate: -90deg;
+      }
+      h2 {
+        font: inherit;
+      }
+      h2 b {
+        font-weight: 650;
+      }
+      h3 {
+        margin-block: 12px 2px;
+        font-size: 1em;
+        font-weight: 650;
+        color: var(--_amber);
+      }
+      .summary {
+        flex: 1 1 8em;
+        color: var(--_quiet);
+        font-size: 0.9em;
+        text-align: end;
+        overflow-wrap: anywhere;
+      }
+      .body[hidden] {
+        display: none;
+      }
+      .fields {
+        display: grid;
+        grid-template-columns: repeat(auto-fill, minmax(min(100%, 7.6em), 1fr));
+        gap: 8px 12px;
+        align-items: start;
+      }
+      .fields > .wide {
+        grid-column: 1 / -1;
+      }
+      .unit {
+        color: var(--_quiet);
+        font-weight: 400;
+        font-size: 0.88em;
+      }
+      .figure {
+        white-space: nowrap;
+      }
+      @media (prefers-reduced-motion: reduce) {
+        .mark {
+          transition: none;
+        }
+      }
+      @media print {
+        .body[hidden] {
+          display: block;
+        }
+        .mark {
+          visibility: hidden;
+        }
+        .fold {
+          min-block-size: 0;
+        }
+      }
+    `,
+  ];
+
+  /** Folded to its heading and a one-line summary. */
+  @property({ type: Boolean, reflect: true }) folded = false;
+
+  constructor() {
+    super();
+    groupsFields(this);
+  }
+
+  /** The heading's words. */
+  protected abstract get heading(): string;
+  /** What the section knows, on one line. */
+  protected abstract get summary(): string;
+  /** What is folded away. */
+  protected abstract body(): unknown;
+
+  protected override render(): unknown {
+    return html`
+      <section class="section" part="section" aria-labelledby="heading">
+        <h2>
+          <button class="fold" part="heading" type="button" aria-expanded=${this.folded ? 'false' : 'true'} aria-controls="body" @click=${this.onFold}>
+            <span class="mark" aria-hidden="true">▾</span><b id="heading">${this.heading}</b>
+            <span class="summary">${this.summary}</span>
+          </button>
+        </h2>
+        <div class="body" id="body" part="body" ?hidden=${this.folded}>${this.body()}</div>
+      </section>
+    `;
+  }
+
+  private onFold(): void {
+    this.folded = !this.folded;
+  }
+
+  // -- fields ---------------------------------------------------------------
+
+  /** A field for a figure of the lot. */
+  protected figureField(key: string, units: readonly string[], label = this.fieldLabel(key)): TemplateResult {
+    const { entry } = this.desk;
+    return html`<esterway-figure
+      exportparts="line: field-line, input: field-input, problem"
+      .label=${label}
+      .figure=${entry.figures[key]}
+      .standing=${this.standing(key)}
+      .units=${units}
+      .problem=${this.problemAt(key)}
+      @figure-input=${(event: FigureInputEvent) => this.edit({ kind: 'figure', key, figure: event.figure })}
+    ></esterway-figure>`;
+  }
+
+  /** A field for an option of the lot. */
+  protected optionField(key: string, wide = false): TemplateResult {
+    return html`<esterway-option
+      class=${wide ? 'wide' : ''}
+      exportparts="line: field-line, input: field-input"
+      .label=${(this.texts.choices as Readonly<Record<string, string>>)[key] ?? key}
+      .options=${this.optionWords(key)}
+      .value=${this.option(key)}
+      .problem=${this.problemAt(key)}
+      @option-input=${(event: OptionInputEvent) => this.edit({ kind: 'option', key, option: event.option })}
+    ></esterway-option>`;
+  }
+
+  protected editSite(edit: ConstructorParameters<typeof EsterwayEditEvent>[0]): void {
+    this.dispatchEvent(new EsterwayEditEvent(edit, true));
+  }
+
+  protected fieldLabel(key: string): string {
+    return (this.texts.fields as Readonly<Record<string, string>>)[key] ?? fieldName(key, this.texts);
+  }
+
+  protected optionWords(key: string): readonly (readonly [string, string])[] {
+    const all = this.texts.options as Readonly<Record<string, Readonly<Record<string, string>>>>;
+    return Object.entries(all[key] ?? all[key.replace('retest.', '')] ?? {});
+  }
+
+  /** The option in force: the lot's, else the site's, else the usual one. */
+  protected option(key: string): string {
+    const { entry, site } = this.desk;
+    return entry.options[key] ?? site.options[key] ?? DEFAULT_OPTIONS[key] ?? '';
+  }
+
+  /** The words of the option in force. */
+  protected optionText(key: string): string {
+    const option = this.option(key);
+    return this.optionWords(key).find(([value]) => value === option)?.[1] ?? option;
+  }
+
+  /** What stands while the lot does not say: the site's figure, else the usual one. */
+  protected standing(key: string): Figure | undefined {
+    return this.desk.site.figures[key] ?? DEFAULT_FIGURES[key];
+  }
+
+  // -- sentences ------------------------------------------------------------
+
+  /** The problem that stands at a field, as a sentence. */
+  protected problemAt(field: string): string | undefined {
+    const problem = this.lot?.problems.find(({ quantity }) => quantity === field);
+    return problem && this.problemText(problem);
+  }
+
+  protected problemText({ code, params }: Problem): string {
+    const sentences = this.texts.problems as Readonly<Record<string, string>>;
+    const bound = params?.['bound'];
+    return fill(sentences[code] ?? this.texts.problems.other, {
+      code, ...params, ...(bound !== undefined && { bound: this.number(roundText(bound)) }),
+    });
+  }
+
+  /** Why a figure is not known, as a sentence. */
+  protected whyUnknown(key: string): string {
+    const reading = this.reading(key);
+    const { result } = this.texts;
+    if (reading?.problem) return fill(result.blocked, { field: this.fieldLabelIn(reading.problem.quantity) });
+    if (reading?.missing?.length) return fill(result.needs, { fields: reading.missing.map((field) => this.fieldLabelIn(field)).join(', ') });
+    return result.notKnown;
+  }
+
+  private fieldLabelIn(field: string): string {
+    return fieldName(field, this.texts);
+  }
+
+  /** Canonical decimal text in the page's language. */
+  protected number(text: string): string {
+    return showNumber(text, this.languageTag);
+  }
+
+  protected editable(text: string): string {
+    return fieldText(text, this.languageTag);
+  }
+
+  // -- figures --------------------------------------------------------------
+
+  /** A known amount as plain words, e.g. `172.8 kg`; undefined while it is not known. */
+  protected amountWords(key: string): string | undefined {
+    const reading = this.reading(key);
+    if (reading?.value === undefined || reading.shown === undefined) return undefined;
+    const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
+    return unit ? `${this.number(text)} ${unit}` : this.number(text);
+  }
+
+  /** A figure that opens its working when pressed; a dash with the reason while it is not known. */
+  protected figure(key: string): TemplateResult {
+    const reading = this.reading(key);
+    if (reading?.value === undefined || reading.shown === undefined) {
+      return html`<span class="figure quiet" title=${this.whyUnknown(key)}>–<span class="unseen">${this.whyUnknown(key)}</span></span>`;
+    }
+    const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
+    return html`<button class="open figure" part="figure" type="button" title=${this.texts.result.openWorking} @click=${() => this.open(key)}>${this.number(text)}${unit ? html` <span class="unit">${unit}</span>` : nothing}</button>`;
+  }
+
+  protected open(key: string): void {
+    this.dispatchEvent(new EsterwayOpenEvent(key));
+  }
+}
+
+/** Bounds can be results with 34 digits; a sentence needs four. */
+const roundText = (text: string): string => new Decimal(text).toSignificantDigits(4).toString();

@@ -1,0 +1,194 @@
+import { css, html, nothing } from 'lit';
+import type { Reason } from '../../decision/route.js';
+import { Decimal } from '../../formula/decimal.js';
+import { shownText } from '../../formula/digits.js';
+import { fill } from '../../locales/en.js';
+import { SectionElement } from '../parts/section.js';
+import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
+
+/** Shares in a sentence: two decimals, so that none looks equal to a limit that it misses. */
+const SHARE_DIGITS = { bands: [{ below: '10', decimals: 2 }, { decimals: 1 }] } as const;
+
+/**
+ * The route of a lot: the verdict in one sentence with its reasons, beside it the burette scale with
+ * the result and the site's limits, and the other ways on one line each.
+ *
+ * @element esterway-route
+ * @attr {boolean} folded - folds the section to its one-line summary
+ * @attr {'metric' | 'us'} units - units in which amounts are shown
+ *
+ * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out
+ *
+ * @csspart section - the whole section
+ * @csspart heading - the button that folds it
+ * @csspart body - what is folded away
+ * @csspart verdict - the sentence that says the route
+ * @csspart scale - the burette scale
+ * @csspart figure - a figure that opens its working
+ *
+ * @cssprop --esterway-oil - the oil in the burette
+ * @cssprop --esterway-glass - the glass and its graduation
+ * @cssprop --esterway-amber - the limits
+ * @cssprop --esterway-pink - the meniscus
+ */
+export class EsterwayRoute extends SectionElement {
+  static override styles = [
+    ...SectionElement.styles,
+    buretteStyles,
+    css`
+      .route {
+        display: grid;
+        grid-template-columns: 100px 1fr;
+        gap: 14px;
+      }
+      .verdict {
+        margin-block: 2px 6px;
+        font-size: 1.22em;
+        font-weight: 650;
+        line-height: 1.2;
+        hyphens: auto;
+      }
+      .why {
+        margin-block-end: 5px;
+        font-size: 0.94em;
+      }
+      .other {
+        display: flex;
+        flex-wrap: wrap;
+        justify-content: space-between;
+        gap: 0 10px;
+        padding-block: 6px;
+        border-block-start: 1px solid var(--_rule);
+        font-size: 0.92em;
+      }
+      .other > :last-child {
+        color: var(--_quiet);
+        text-align: end;
+      }
+      details {
+        font-size: 0.92em;
+        border-block-start: 1px solid var(--_rule);
+      }
+      summary {
+        display: flex;
+        justify-content: space-between;
+        align-items: center;
+        min-block-size: var(--_target);
+        cursor: pointer;
+      }
+      li {
+        padding-block: 2px;
+        color: var(--_quiet);
+      }
+      @container (max-width: 290px) {
+        .route {
+          grid-template-columns: 86px 1fr;
+          gap: 8px;
+        }
+        .burette {
+          inline-size: 86px;
+        }
+      }
+    `,
+  ];
+
+  protected override get heading(): string {
+    return this.texts.sections.route;
+  }
+
+  protected override get summary(): string {
+    return this.folded ? this.verdict : '';
+  }
+
+  private get verdict(): string {
+    return this.texts.verdicts[this.lot?.route.verdict ?? 'not-known'];
+  }
+
+  protected override body(): unknown {
+    const route = this.lot?.route;
+    const safe = route?.safe;
+    return html`
+      <div class="route">
+        ${this.scale()}
+        <div role="status">
+          <p class="verdict" part="verdict">${this.verdict}</p>
+          ${safe ? html`<p class="why"><b>${this.texts.verdicts[safe]}</b></p>` : nothing}
+          ${route?.reasons.map((reason) => html`<p class="why">${this.reason(reason)}</p>`)}
+          ${route?.verdict === 'not-known' ? html`<p class="why quiet">${this.whyUnknown('freeFattyAcid')}</p>` : nothing}
+        </div>
+      </div>
+      ${this.others()}
+      <details class="no-print">
+        <summary>${this.texts.route.published} <span class="quiet">${this.texts.route.publishedRange}</span></summary>
+        <ul>
+          ${this.texts.route.publishedList.map((line) => html`<li>${line}</li>`)}
+        </ul>
+      </details>
+    `;
+  }
+
+  private reason({ code, params }: Reason): string {
+    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : this.share(value)] as const);
+    const water = this.reading('waterContent')?.shown;
+    return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });
+  }
+
+  private share(value: string): string {
+    return this.number(shownText(new Decimal(value), SHARE_DIGITS));
+  }
+
+  private scale(): unknown {
+    const { texts } = this;
+    const figure = (key: string): number | undefined => {
+      const value = this.reading(key)?.value;
+      return value === undefined ? undefined : Number(value);
+    };
+    const ffa = figure('freeFattyAcid');
+    const directLimit = figure('directLimit') ?? 0;
+    const words = {
+      ffa: this.amountPlain('freeFattyAcid'),
+      limit: this.amountPlain('directLimit'),
+      most: this.number(String(scaleOf(ffa, directLimit).most)),
+    };
+    return buretteScale({
+      ffa,
+      directLimit,
+      pretreatmentLimit: figure('pretreatmentLimit') ?? 100,
+      directMark: texts.route.directMark,
+      pretreatmentMark: texts.route.pretreatmentMark,
+      label: fill(ffa === undefined ? texts.route.scaleEmpty : texts.route.scale, words),
+      write: (value) => this.number(String(Math.round(value * 10) / 10)),
+    });
+  }
+
+  private amountPlain(key: string): string {
+    return this.number(this.reading(key)?.shown ?? '–');
+  }
+
+  /** The ways not taken, with what they would cost. */
+  private others(): unknown {
+    const { texts, lot } = this;
+    const verdict = lot?.route.verdict;
+    if (!lot || verdict === 'not-known' || !this.reading('oilMass')?.value) return nothing;
+    const { route } = texts;
+    const acidSteps = lot.charges.twoStep.filter(({ step }) => step === 'acid').length;
+    const mustBlend = Number(this.reading('blendOil')?.value ?? 0) > 0;
+    return html`
+      ${verdict === 'direct'
+        ? html`<p class="other"><span>${route.twoStepAllTheSame}</span><span>${fill(acidSteps === 1 ? route.onePass : route.passes, { passes: String(acidSteps) })}</span></p>`
+        : html`<p class="other"><span>${route.directAllTheSame}</span><span>${this.figure('direct.soap')} ${texts.charge.soapOf}</span></p>`}
+      ${mustBlend
+        ? html`<p class="other">
+            <span>${fill(route.blend, { limit: this.amountPlain('directLimit') })}</span>
+            <span>${this.figure('blendOil')} ${fill(route.blendWith, { ffa: this.amountPlain('cleanOilFfa') })}</span>
+          </p>`
+        : nothing}
+    `;
+  }
+}
+
+declare global {
+  interface HTMLElementTagNameMap {
+    'esterway-route': EsterwayRoute;
+  }
+}

@@ -1,0 +1,249 @@
+import { css, html, nothing } from 'lit';
+import { property } from 'lit/decorators.js';
+import type { RunList } from '../../lot/edit.js';
+import { fill } from '../../locales/en.js';
+import { SectionElement } from '../parts/section.js';
+import { RunsTable } from './runs-table.js';
+
+/** Units offered for each figure of the bench. */
+const STRENGTH_UNITS = ['mol/L', 'g/L'];
+const TEMPERATURE_UNITS = { metric: ['°C', '°F'], us: ['°F', '°C'] } as const;
+
+/**
+ * The titration of a lot: how it was done, the runs, and the acid value and free fatty acid that
+ * follow. A form field: its value is the free fatty acid in per cent, as decimal text with a point.
+ *
+ * @element esterway-titration
+ * @attr {boolean} folded - folds the section to its one-line summary
+ * @attr {boolean} bare - leaves the heading out
+ * @attr {boolean} retest - the titration after the acid step, in place of that of the oil as it came
+ * @attr {'metric' | 'us'} units - units in which amounts are shown
+ * @attr {string} name - name of the form field
+ *
+ * @fires {EsterwayChangeEvent} esterway-change - a person changed the lot (only where the element holds it itself)
+ * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out
+ *
+ * @csspart section - the whole section
+ * @csspart heading - the button that folds it
+ * @csspart body - what is folded away
+ * @csspart result - the two results
+ * @csspart figure - a figure that opens its working
+ * @csspart field-line - the ruled line of a field
+ * @csspart field-input - the input of a field
+ *
+ * @cssprop --esterway-paper - background
+ * @cssprop --esterway-ink - text
+ * @cssprop --esterway-quiet - labels and units
+ * @cssprop --esterway-glass - lines of fields and buttons
+ * @cssprop --esterway-pink - what is live or asks for attention
+ * @cssprop --esterway-amber - headings of steps and cautions
+ * @cssprop --esterway-font - font family
+ * @cssprop --esterway-font-size - size of plain text; everything else follows
+ */
+export class EsterwayTitration extends SectionElement {
+  static readonly formAssociated = true;
+  static override shadowRootOptions: ShadowRootInit = { mode: 'open', delegatesFocus: true };
+  static override styles = [
+    ...SectionElement.styles,
+    RunsTable.styles,
+    css`
+      .result {
+        display: grid;
+        grid-template-columns: 1fr 1fr;
+        gap: 0 12px;
+        margin-block-start: 12px;
+      }
+      .result > div {
+        border-block-start: 1.5px solid var(--_ink);
+        padding-block-start: 4px;
+      }
+      .value {
+        font-size: 1.65em;
+        font-weight: 600;
+        line-height: 1.15;
+      }
+      .value .unit {
+        font-size: 0.55em;
+      }
+      .kind {
+        color: var(--_quiet);
+        font-size: 0.9em;
+      }
+      .note {
+        margin-block-start: 6px;
+        color: var(--_quiet);
+        font-size: 0.92em;
+      }
+      details {
+        margin-block-start: 6px;
+      }
+      summary {
+        display: flex;
+        align-items: center;
+        min-block-size: var(--_target);
+        cursor: pointer;
+        color: var(--_quiet);
+        font-size: 0.92em;
+      }
+      summary::before {
+        content: '▸ ';
+        white-space: pre;
+      }
+      details[open] > summary::before {
+        content: '▾ ';
+      }
+    `,
+  ];
+
+  @property({ type: Boolean, reflect: true }) bare = false;
+  @property({ type: Boolean, reflect: true }) retest = false;
+
+  readonly #internals: ElementInternals | undefined;
+  readonly #table = new RunsTable(this, {
+    desk: () => this.desk,
+    texts: () => this.texts,
+    tag: () => this.languageTag,
+    figure: (key) => this.figure(key),
+    problemAt: (field) => this.problemAt(field),
+    edit: (edit) => this.edit(edit),
+  });
+
+  constructor() {
+    super();
+    // absent where the class is only imported, as on a server
+    this.#internals = typeof this.attachInternals === 'function' ? this.attachInternals() : undefined;
+  }
+
+  /** Free fatty acid in per cent as reported, decimal text; empty while it is not known. */
+  get value(): string {
+    return this.reading(`${this.keyPrefix}freeFattyAcid`)?.shown ?? '';
+  }
+
+  /** The form this field belongs to. */
+  get form(): HTMLFormElement | null {
+    return this.#internals?.form ?? null;
+  }
+
+  formResetCallback(): void {
+    if (this.holdsLot) this.holder.clear();
+  }
+
+  private get keyPrefix(): '' | 'retest.' {
+    return this.retest ? 'retest.' : '';
+  }
+
+  private get list(): RunList {
+    return this.retest ? 'retestRuns' : 'runs';
+  }
+
+  protected override get heading(): string {
+    return this.retest ? this.texts.charge.retestTitle : this.texts.sections.titration;
+  }
+
+  protected override get summary(): string {
+    const ffa = this.amountWords(`${this.keyPrefix}freeFattyAcid`);
+    const acidValue = this.amountWords(`${this.keyPrefix}acidValue`);
+    const strength = this.retest ? undefined : this.amountWords('titrantMolarity') ?? this.amountWords('titrantMassStrength');
+    if (this.folded) return ffa && acidValue ? `AV ${acidValue} · FFA ${ffa}` : this.texts.result.notKnown;
+    return strength ? `${this.optionText('titrantAlkali')} ${strength}` : '';
+  }
+
+  protected override render(): unknown {
+    return this.bare ? html`<div part="body">${this.body()}</div>` : super.render();
+  }
+
+  protected override body(): unknown {
+    const from = this.option(`${this.keyPrefix}acidKnownFrom`);
+    return html`
+      <div class="fields">
+        ${this.optionField(`${this.keyPrefix}acidKnownFrom`, true)}
+        ${from === 'certificate-acid-value' ? this.figureField(`${this.keyPrefix}certificateAcidValue`, ['mg/g']) : nothing}
+        ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
+        ${from === 'titration' && !this.retest ? this.method() : nothing}
+      </div>
+      ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
+      ${this.results()} ${this.retest ? nothing : this.more(from)}
+    `;
+  }
+
+  private method(): unknown {
+    const blankMatters = this.option('blankPolicy') === 'blank-subtracted' || 'blank' in this.desk.entry.figures;
+    return html`
+      ${this.optionField('titrantAlkali')} ${this.figureField('titrantStrength', STRENGTH_UNITS)} ${this.optionField('blankPolicy')}
+      ${blankMatters ? this.figureField('blank', ['mL']) : nothing} ${this.optionField('sampleTakenBy')}
+      ${this.option('sampleTakenBy') === 'volume' ? this.figureField('sampleDensity', ['g/mL', 'kg/m³']) : nothing}
+    `;
+  }
+
+  private more(from: string): unknown {
+    const temperatures = TEMPERATURE_UNITS[this.desk.units];
+    return html`
+      <details class="no-print">
+        <summary>${this.texts.field.more}</summary>
+        <div class="fields">
+          ${this.optionField('referenceAcid')}
+          ${this.option('referenceAcid') === 'other' ? this.figureField('otherAcidMolarMass', ['g/mol']) : nothing}
+          ${from === 'titration'
+            ? html`${this.optionField('titrantSolvent')} ${this.figureField('titrationTemperature', temperatures)}
+              ${this.figureField('standardisationTemperature', temperatures)}`
+            : nothing}
+        </div>
+      </details>
+    `;
+  }
+
+  private results(): unknown {
+    const { texts, keyPrefix: prefix } = this;
+    const acid = this.optionText('referenceAcid');
+    return html`
+      <div class="result" part="result" role="status">
+        <div>
+          <div class="value">${this.figure(`${prefix}acidValue`)}</div>
+          <div class="kind">${texts.result.acidValue}</div>
+        </div>
+        <div>
+          <div class="value">${this.figure(`${prefix}freeFattyAcid`)}</div>
+          <div class="kind">${fill(texts.result.ffa, { acid })}</div>
+        </div>
+      </div>
+      <p class="note">${this.remark()}</p>
+      ${prefix || !this.reading('alkaliPerLitreOfOil')?.value
+        ? nothing
+        : html`<p class="note">${this.figure('alkaliPerLitreOfOil')} ${fill(texts.result.alkali, { alkali: this.optionText('titrantAlkali') })}</p>`}
+      ${this.lot?.notices.some(({ code }) => code === 'lauric-on-other-basis') && !prefix ? html`<p class="gate">${texts.result.lauric}</p>` : nothing}
+    `;
+  }
+
+  /** How the result came about, or what it still waits for. */
+  private remark(): string {
+    const { texts, keyPrefix: prefix } = this;
+    const key = `${prefix}acidValue`;
+    if (this.reading(key)?.value === undefined) {
+      if (this.retest && !this.desk.entry.retestRuns.length) return texts.charge.retestNone;
+      return this.whyUnknown(key);
+    }
+    if (this.option(`${prefix}acidKnownFrom`) !== 'titration') return texts.result.certificate;
+    const states = this.lot?.[this.list] ?? [];
+    const runs = states.filter((state) => state === 'counted').length;
+    const incomplete = states.indexOf('incomplete');
+    return [
+      runs === 1 ? texts.result.oneRun : fill(texts.result.mean, { runs: String(runs) }),
+      incomplete >= 0 && runs ? fill(texts.result.incomplete, { run: String(incomplete + 1) }) : '',
+    ].join(' ').trim();
+  }
+
+  protected override updated(): void {
+    this.#internals?.setFormValue(this.value || null, JSON.stringify(this.desk.entry));
+    const anchor = this.shadowRoot?.querySelector<HTMLElement>('esterway-figure');
+    const problem = this.lot?.problems[0];
+    if (problem) this.#internals?.setValidity({ customError: true }, this.problemText(problem), anchor ?? undefined);
+    else if (!this.value && this.hasAttribute('required')) this.#internals?.setValidity({ valueMissing: true }, this.whyUnknown(`${this.keyPrefix}acidValue`), anchor ?? undefined);
+    else this.#internals?.setValidity({});
+  }
+}
+
+declare global {
+  interface HTMLElementTagNameMap {
+    'esterway-titration': EsterwayTitration;
+  }
+}
