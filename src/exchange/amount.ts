@@ -38,5 +38,7 @@ export function amountIn(value: string, shown: string, unit: string, system: Uni
   const chosen = fitting.find(({ converted }) => converted.abs().gte(1)) ?? fitting.at(figure.isZero() ? 0 : -1);
   if (!chosen) return { text: shown, unit };
   const digits = chosen.to === degreeFahrenheit ? { decimals: 0 } : DIGITS;
-  return { text: shownText(chosen.converted, digits), unit: chosen.to.symbol };
+  const text = shownText(chosen.converted, digits);
+  // 900 kg were charged, not 900.0
+  return { text: chosen.converted.eq(text) ? chosen.converted.toString() : text, unit: chosen.to.symbol };
 }

@@ -200,6 +200,7 @@ export const en = {
     twoStepAllTheSame: 'Two-step all the same',
     passes: '{passes} × acid step',
     onePass: '1 × acid step',
+    soap: 'soap',
     blend: 'Blend to {limit} %',
     blendWith: 'oil of {ffa} %',
     published: 'Published direct limits',

@@ -66,6 +66,13 @@ export class LotGivens implements Givens {
     return field in DEFAULT_FIGURES || field in DEFAULT_OPTIONS ? 'default' : 'none';
   }
 
+  /** An input's figure as it was written, where it is in the quantity's own unit. */
+  written(key: string): string | undefined {
+    const field = fieldOf(key);
+    const figure = this.typed(key, field) ?? this.site.figures[field] ?? DEFAULT_FIGURES[field];
+    return figure && 'text' in figure && figure.unit === this.sheet.quantity(key).unit.symbol ? figure.text : undefined;
+  }
+
   /** Whether the oil was titrated again after the acid step, or a value for it was given. */
   hasRetest(): boolean {
     const { figures, retestRuns } = this.entry;

@@ -15,7 +15,7 @@ export interface ReadingJson {
   readonly from: Origin | 'formula';
   /** The full value, up to 34 digits. */
   readonly value?: string;
-  /** The value as reported, rounded to its digits; decimal point, no grouping. */
+  /** The value as reported, rounded to its digits, or an input as it was written; decimal point, no grouping. */
   readonly shown?: string;
   /** Fields that must be filled first. */
   readonly missing?: readonly string[];

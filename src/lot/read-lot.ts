@@ -111,7 +111,7 @@ function readingsOf({ sheet, findings, givens }: LotRun, keys: readonly string[]
     const outcome = findings.outcome(key);
     const from = is ? 'formula' : givens.origin(key);
     readings[key] = isKnown(outcome)
-      ? { symbol, unit: unit.symbol, from, value: outcome.toString(), shown: shownText(outcome, digits) }
+      ? { symbol, unit: unit.symbol, from, value: outcome.toString(), shown: (is ? undefined : givens.written(key)) ?? shownText(outcome, digits) }
       : { symbol, unit: unit.symbol, from, ...unknownJson(outcome) };
   }
   return readings;

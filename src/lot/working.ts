@@ -1,12 +1,15 @@
 import { cellFormula } from '../formula/cell-formula.js';
 import type { AddressOf } from '../formula/cell-formula.js';
 import { shownText } from '../formula/digits.js';
+import { parts } from '../formula/expression.js';
+import type { Expression } from '../formula/expression.js';
+import type { Findings } from '../formula/plan.js';
 import { isKnown } from '../formula/reading.js';
-import { namesIn } from '../formula/sheet.js';
+import type { Sheet } from '../formula/sheet.js';
 import type { Source } from '../formula/source.js';
 import { figuresMath, generalMath, symbolMath } from '../formula/working-mathml.js';
 import type { MathNode } from '../formula/working-mathml.js';
-import { figuresText, generalText } from '../formula/working-text.js';
+import { figuresText, generalText, settledBranch } from '../formula/working-text.js';
 import type { WriteFigure } from '../formula/working-text.js';
 import { DEFAULT_FIGURES } from './defaults.js';
 import type { LotEntry, SiteProfile } from './entry.js';
@@ -61,8 +64,16 @@ export function working(entry: LotEntry, site: SiteProfile, key: string, write: 
     }),
     ...(isKnown(outcome) && { result: write(outcome, quantity.unit, quantity) }),
     sources: standing ? [standing.source] : quantity.cites,
-    rests: [...namesIn(quantity)].filter((name) => touched.has(name)),
+    rests: quantity.is ? [...new Set(namesTaken(quantity.is, sheet, findings))].filter((name) => touched.has(name)) : [],
   };
+}
+
+/** What a formula names on the branches that are taken, in reading order; of a threshold also what it compares. */
+function namesTaken({ node }: Expression, sheet: Sheet, findings: Findings): string[] {
+  if (node.op === 'named') return [node.key];
+  const taken = node.op === 'choice' || node.op === 'threshold' ? settledBranch(node, sheet, findings) : undefined;
+  const read = taken ? [...(node.op === 'threshold' ? [node.left, node.right] : []), taken] : parts(node);
+  return read.flatMap((part) => namesTaken(part, sheet, findings));
 }
 
 /**

@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS, readLot } from '../../src/core.js';
@@ -31,7 +32,7 @@ describe('a figure that is none', () => {
   });
 
   it.each(['sample', 'start', 'end'] as const)('in a run: its %s', (cell) => {
-    const reading = read({ version: 1, ...withFigures({}), runs: [{ ...run('5.00 g', '0.00', '4.00'), [cell]: { text: 'x', unit: cell === 'sample' ? 'g' : 'mL' } }] });
+    const reading = read({ ...withFigures({}), runs: [{ ...run('5.00 g', '0.00', '4.00'), [cell]: { text: 'x', unit: cell === 'sample' ? 'g' : 'mL' } }] });
     expect(codes(reading)).toEqual([`not-a-number at run1.${cell}`]);
     expect(reading.readings['oilMass']?.value ?? reading.readings['direct.feedMass']?.value).toBe('1000');
   });
@@ -221,9 +222,7 @@ describe('names that every object has', () => {
     expect(Object.keys(Object.prototype)).toEqual([]);
   });
 
-  it('an entry that inherits its parts is read like one that has them', () => {
-    // JSON never makes one; a page might, and only what the entry itself holds counts
-    expect(faults(Object.create({ version: 1 }) as unknown)).toEqual([]);
+  it('make no difference to an entry without any', () => {
     expect(read(Object.assign(Object.create(null) as object, { version: 1 })).problems).toEqual([]);
   });
 });
@@ -231,24 +230,30 @@ describe('names that every object has', () => {
 describe('whatever comes', () => {
   const seeded = { seed: 20240901, numRuns: 300 };
   const sound = (result: ReturnType<typeof readLot>): void => {
-    expect(JSON.parse(JSON.stringify(result))).toStrictEqual(result);
-    if ('faults' in result) return expect(result.faults.length).toBeGreaterThan(0);
-    for (const reading of Object.values(result.readings)) {
-      // exactly one of the three
-      expect([reading.value, reading.missing, reading.problem].filter((part) => part !== undefined)).toHaveLength(1);
-      expect((reading.value === undefined) === (reading.shown === undefined)).toBe(true);
-      if (reading.value !== undefined) expect(reading.value).toMatch(/^-?\d+(\.\d+)?(e[+-]\d+)?$/);
+    expect(isDeepStrictEqual(JSON.parse(JSON.stringify(result)), result)).toBe(true);
+    if ('faults' in result) {
+      expect(result.faults.length).toBeGreaterThan(0);
+      return;
     }
+    // every reading is known, missing or refused, and only one of the three
+    const unsound = Object.entries(result.readings).filter(([, { value, shown, missing, problem }]) =>
+      [value, missing, problem].filter((part) => part !== undefined).length !== 1 || (value === undefined) !== (shown === undefined)
+      || (value !== undefined && !/^-?\d+(\.\d+)?(e[+-]\d+)?$/.test(value)));
+    expect(unsound).toEqual([]);
   };
 
   it('readLot never throws on JSON', () => {
-    fc.assert(fc.property(fc.jsonValue(), fc.jsonValue(), (entry, site) => sound(readLot(entry, site))), seeded);
+    fc.assert(fc.property(fc.jsonValue(), fc.jsonValue(), (entry, site) => {
+      sound(readLot(entry, site));
+    }), seeded);
   });
 
   it('nor on JSON that is nearly an entry', () => {
     const part = fc.oneof(fc.jsonValue({ maxDepth: 2 }), fc.constant({}), fc.constant([]));
     const entry = fc.record({ version: fc.constantFrom(1, 2, null, '1'), figures: part, options: part, runs: part, retestRuns: part, name: part, extra: part }, { requiredKeys: [] });
-    fc.assert(fc.property(entry, entry, (lotEntry, site) => sound(readLot(lotEntry, site))), seeded);
+    fc.assert(fc.property(entry, entry, (lotEntry, site) => {
+      sound(readLot(lotEntry, site));
+    }), seeded);
   });
 
   it('nor on entries with any figures and options', () => {
@@ -265,8 +270,10 @@ describe('whatever comes', () => {
     const figures = fc.dictionary(fc.constantFrom(...KNOWN_KEYS.figures), anyFigure, { maxKeys: 12 });
     const options = fc.uniqueArray(fc.constantFrom(...KNOWN_KEYS.options.keys()), { maxLength: 8 }).chain((names) =>
       fc.tuple(...names.map((name) => fc.constantFrom(...KNOWN_KEYS.options.get(name)!))).map((chosen) => Object.fromEntries(names.map((name, i) => [name, chosen[i]!]))));
-    const runs = fc.array(fc.record({ sample: anyFigure, start: anyFigure, end: anyFigure, struck: fc.string() }, { requiredKeys: [] }), { maxLength: 3 });
-    const entry = fc.record({ version: fc.constant(1), figures, options, runs, retestRuns: runs });
+    const anyRun = fc.record({ sample: anyFigure, start: anyFigure, end: anyFigure, struck: fc.string() }, { requiredKeys: [] });
+    const runs = fc.array(fc.oneof({ arbitrary: fc.constant(run('5.00 g', '0.00', '4.00')), weight: 3 }, anyRun), { maxLength: 3 });
+    const start = fc.constantFrom({}, withFigures({}).figures);
+    const entry = fc.record({ version: fc.constant(1), figures: fc.tuple(figures, start).map(([any, good]) => ({ ...any, ...good })), options, runs, retestRuns: runs });
     const site = fc.record({ version: fc.constant(1), figures, options });
     let read = 0;
     fc.assert(fc.property(entry, site, (lotEntry, profile) => {
@@ -276,17 +283,19 @@ describe('whatever comes', () => {
       if ('readings' in result && result.readings['acidValue']?.value !== undefined) read++;
     }), seeded);
     expect(read).toBeGreaterThan(5); // some of them can be read to the end
-  });
+  }, 60_000);
 
   it('nor on one bad figure anywhere in a good lot', () => {
     const bad = fc.constantFrom('', 'x', '-1', '0', '1000000000', '1'.repeat(40), 'NaN');
-    const whole = { ...withFigures({}), figures: { ...Object.fromEntries(Object.entries(DEFAULT_FIGURES).map(([key, { text, unit }]) => [key, { text, unit }])), ...withFigures({}).figures } };
+    // the temperature of the titration is that of the standardisation while nobody types another, so here it is typed
+    const whole = { ...withFigures({}), figures: { titrationTemperature: { text: '20', unit: '°C' }, ...Object.fromEntries(Object.entries(DEFAULT_FIGURES).map(([key, { text, unit }]) => [key, { text, unit }])), ...withFigures({}).figures } };
     fc.assert(fc.property(fc.constantFrom(...Object.keys(whole.figures)), bad, (field, text) => {
       const figures: Record<string, unknown> = whole.figures;
       const reading = read({ ...whole, options: { ...DEFAULT_OPTIONS }, figures: { ...figures, [field]: { ...(figures[field] as object), text } } });
       // if anything is refused it is this very field
       for (const { quantity } of reading.problems) expect(quantity).toBe(field);
-      expect(valueIn(reading, field === 'titrantStrength' ? 'oilMass' : 'run1.acidContent').isFinite()).toBe(true);
-    }), { seed: 4711, numRuns: 400 });
-  });
+      const bench = field === 'titrantStrength' || field.endsWith('Temperature');
+      expect(valueIn(reading, bench ? 'catalystAssay' : 'run1.acidContent').isFinite()).toBe(true);
+    }), { seed: 4711, numRuns: 300 });
+  }, 60_000);
 });

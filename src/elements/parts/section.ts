@@ -94,6 +94,22 @@ export abstract class SectionElement extends LotElement {
       .fields > .wide {
         grid-column: 1 / -1;
       }
+      summary {
+        display: flex;
+        align-items: center;
+        min-block-size: var(--_target);
+        cursor: pointer;
+        color: var(--_quiet);
+        font-size: 0.92em;
+      }
+      summary::before {
+        content: '▸';
+        flex: none;
+        inline-size: 1.2em;
+      }
+      details[open] > summary::before {
+        content: '▾';
+      }
       .unit {
         color: var(--_quiet);
         font-weight: 400;
@@ -262,13 +278,13 @@ export abstract class SectionElement extends LotElement {
   }
 
   /** A figure that opens its working when pressed; a dash with the reason while it is not known. */
-  protected figure(key: string): TemplateResult {
+  protected figure(key: string, withUnit = true): TemplateResult {
     const reading = this.reading(key);
     if (reading?.value === undefined || reading.shown === undefined) {
       return html`<span class="figure quiet" title=${this.whyUnknown(key)}>–<span class="unseen">${this.whyUnknown(key)}</span></span>`;
     }
     const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
-    return html`<button class="open figure" part="figure" type="button" title=${this.texts.result.openWorking} @click=${() => this.open(key)}>${this.number(text)}${unit ? html` <span class="unit">${unit}</span>` : nothing}</button>`;
+    return html`<button class="open figure" part="figure" type="button" title=${this.texts.result.openWorking} @click=${() => this.open(key)}>${this.number(text)}${unit && withUnit ? html` <span class="unit">${unit}</span>` : nothing}</button>`;
   }
 
   protected open(key: string): void {

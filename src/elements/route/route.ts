@@ -6,6 +6,8 @@ import { fill } from '../../locales/en.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
 
+const LIMITS = ['directLimit', 'pretreatmentLimit', 'pretreatmentTarget', 'waterLimitBase', 'waterLimitAcid'];
+
 /** Shares in a sentence: two decimals, so that none looks equal to a limit that it misses. */
 const SHARE_DIGITS = { bands: [{ below: '10', decimals: 2 }, { decimals: 1 }] } as const;
 
@@ -66,15 +68,11 @@ export class EsterwayRoute extends SectionElement {
         text-align: end;
       }
       details {
-        font-size: 0.92em;
         border-block-start: 1px solid var(--_rule);
       }
-      summary {
-        display: flex;
-        justify-content: space-between;
-        align-items: center;
-        min-block-size: var(--_target);
-        cursor: pointer;
+      summary > .quiet {
+        flex: 1;
+        text-align: end;
       }
       li {
         padding-block: 2px;
@@ -128,9 +126,16 @@ export class EsterwayRoute extends SectionElement {
   }
 
   private reason({ code, params }: Reason): string {
-    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : this.share(value)] as const);
+    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : (this.siteText(value) ?? this.share(value))] as const);
     const water = this.reading('waterContent')?.shown;
     return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });
+  }
+
+  /** A limit as the site wrote it. */
+  private siteText(value: string): string | undefined {
+    const key = LIMITS.find((limit) => this.reading(limit)?.value === value);
+    const shown = key && this.reading(key)?.shown;
+    return shown === undefined ? undefined : this.number(shown);
   }
 
   private share(value: string): string {
@@ -176,7 +181,7 @@ export class EsterwayRoute extends SectionElement {
     return html`
       ${verdict === 'direct'
         ? html`<p class="other"><span>${route.twoStepAllTheSame}</span><span>${fill(acidSteps === 1 ? route.onePass : route.passes, { passes: String(acidSteps) })}</span></p>`
-        : html`<p class="other"><span>${route.directAllTheSame}</span><span>${this.figure('direct.soap')} ${texts.charge.soapOf}</span></p>`}
+        : html`<p class="other"><span>${route.directAllTheSame}</span><span>${this.figure('direct.soap')} ${route.soap}</span></p>`}
       ${mustBlend
         ? html`<p class="other">
             <span>${fill(route.blend, { limit: this.amountPlain('directLimit') })}</span>

@@ -15,6 +15,7 @@ export interface RunsTableHost {
   desk(): Desk;
   texts(): Texts;
   tag(): string;
+  /** A figure without its unit. */
   figure(key: string): TemplateResult;
   problemAt(field: string): string | undefined;
   edit(edit: Edit): void;
@@ -129,7 +130,7 @@ export class RunsTable implements ReactiveController {
           ${rows.map((run, index) => this.#row(list, run, index, sampleUnit))}
         </tbody>
       </table>
-      <p class="hint no-print">${texts.runs.hint}</p>
+      ${list === 'runs' ? html`<p class="hint no-print">${texts.runs.hint}</p>` : nothing}
     `;
   }
 

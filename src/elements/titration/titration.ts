@@ -65,6 +65,9 @@ export class EsterwayTitration extends SectionElement {
       .value .unit {
         font-size: 0.55em;
       }
+      :host([bare]) {
+        background: transparent;
+      }
       .kind {
         color: var(--_quiet);
         font-size: 0.9em;
@@ -75,22 +78,7 @@ export class EsterwayTitration extends SectionElement {
         font-size: 0.92em;
       }
       details {
-        margin-block-start: 6px;
-      }
-      summary {
-        display: flex;
-        align-items: center;
-        min-block-size: var(--_target);
-        cursor: pointer;
-        color: var(--_quiet);
-        font-size: 0.92em;
-      }
-      summary::before {
-        content: '▸ ';
-        white-space: pre;
-      }
-      details[open] > summary::before {
-        content: '▾ ';
+        margin-block-end: 6px;
       }
     `,
   ];
@@ -103,7 +91,7 @@ export class EsterwayTitration extends SectionElement {
     desk: () => this.desk,
     texts: () => this.texts,
     tag: () => this.languageTag,
-    figure: (key) => this.figure(key),
+    figure: (key) => this.figure(key, false),
     problemAt: (field) => this.problemAt(field),
     edit: (edit) => this.edit(edit),
   });
@@ -155,41 +143,42 @@ export class EsterwayTitration extends SectionElement {
   protected override body(): unknown {
     const from = this.option(`${this.keyPrefix}acidKnownFrom`);
     return html`
+      ${this.method(from)}
       <div class="fields">
-        ${this.optionField(`${this.keyPrefix}acidKnownFrom`, true)}
         ${from === 'certificate-acid-value' ? this.figureField(`${this.keyPrefix}certificateAcidValue`, ['mg/g']) : nothing}
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
-        ${from === 'titration' && !this.retest ? this.method() : nothing}
+        ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
-      ${this.results()} ${this.retest ? nothing : this.more(from)}
+      ${this.results()}
     `;
   }
 
-  private method(): unknown {
-    const blankMatters = this.option('blankPolicy') === 'blank-subtracted' || 'blank' in this.desk.entry.figures;
-    return html`
-      ${this.optionField('titrantAlkali')} ${this.figureField('titrantStrength', STRENGTH_UNITS)} ${this.optionField('blankPolicy')}
-      ${blankMatters ? this.figureField('blank', ['mL']) : nothing} ${this.optionField('sampleTakenBy')}
-      ${this.option('sampleTakenBy') === 'volume' ? this.figureField('sampleDensity', ['g/mL', 'kg/m³']) : nothing}
-    `;
-  }
-
-  private more(from: string): unknown {
+  /** How the acidity is found: changes seldom, so it is folded to a line. */
+  private method(from: string): unknown {
     const temperatures = TEMPERATURE_UNITS[this.desk.units];
+    const titrated = from === 'titration';
+    const by = `${this.keyPrefix}acidKnownFrom`;
+    if (this.retest) return html`<div class="fields">${this.optionField(by, true)}</div>`;
+    const words = titrated ? [this.optionText(by), this.optionText('titrantAlkali'), this.optionText('sampleTakenBy'), this.optionText('blankPolicy')] : [this.optionText(by)];
     return html`
       <details class="no-print">
-        <summary>${this.texts.field.more}</summary>
+        <summary>${words.join(' · ')}</summary>
         <div class="fields">
-          ${this.optionField('referenceAcid')}
-          ${this.option('referenceAcid') === 'other' ? this.figureField('otherAcidMolarMass', ['g/mol']) : nothing}
-          ${from === 'titration'
-            ? html`${this.optionField('titrantSolvent')} ${this.figureField('titrationTemperature', temperatures)}
-              ${this.figureField('standardisationTemperature', temperatures)}`
-            : nothing}
+          ${this.optionField(by, true)}
+          ${titrated ? html`${this.optionField('titrantAlkali')} ${this.optionField('titrantSolvent')} ${this.optionField('blankPolicy', true)} ${this.optionField('sampleTakenBy')}` : nothing}
+          ${titrated && this.option('sampleTakenBy') === 'volume' ? this.figureField('sampleDensity', ['g/mL', 'kg/m³']) : nothing}
+          ${this.optionField('referenceAcid')} ${this.option('referenceAcid') === 'other' ? this.figureField('otherAcidMolarMass', ['g/mol']) : nothing}
+          ${titrated ? html`${this.figureField('titrationTemperature', temperatures)} ${this.figureField('standardisationTemperature', temperatures)}` : nothing}
         </div>
       </details>
     `;
+  }
+
+  /** A blank typed beside neutralised solvent stays in sight, with what is wrong about it. */
+  private strengthAndBlank(): unknown {
+    const blankMatters = this.option('blankPolicy') === 'blank-subtracted' || 'blank' in this.desk.entry.figures;
+    return html`${this.figureField('titrantStrength', STRENGTH_UNITS)} ${blankMatters ? this.figureField('blank', ['mL']) : nothing}`;
   }
 
   private results(): unknown {

@@ -57,6 +57,7 @@ export class EsterwayWorking extends SectionElement {
         padding-block: 4px;
       }
       math {
+        math-style: normal;
         font-size: 1.15em;
       }
       .figures,

@@ -133,6 +133,7 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
     const extraPure = put('extraPure', acidPure.plus(mineralPure));
     put('baseProduct', basePure.div(assay).times(HUNDRED));
     put('extraProduct', extraPure.div(assay).times(HUNDRED));
+    put('mineralProduct', mineralPure.div(assay).times(HUNDRED));
     const product = put('catalyst', basePure.plus(extraPure).div(assay).times(HUNDRED));
     put('catalystVolume', ZERO);
     put('catalystPerLitre', product.div(oilVolume).times(THOUSAND));
@@ -171,10 +172,10 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
     energy.div(GAS).times(ONE.div(KELVIN_60).minus(ONE.div(temperature.plus(KELVIN_0)))).exp());
   const acidMass = sig('pass1.acidMass', acidAmount.times(reference).div(THOUSAND));
   if (!ffa('pass1.ffaAtStart', acidMass.div(oil).times(HUNDRED)).lt(FIFTEEN)) throw new RangeError('more acid than this is written for');
-  const methanolPure = sig('pass1.methanolPure', FORTY.times(acidAmount).times(M_METHANOL).div(THOUSAND));
+  const methanolPure = sig('pass1.methanolPure', fix('pass1.methanolRule', 0, FORTY).times(acidAmount).times(M_METHANOL).div(THOUSAND));
   const methanol = sig('pass1.methanol', methanolPure.div(methanolAssay).times(HUNDRED));
   sig('pass1.methanolVolume', methanol.div(methanolDensity));
-  const sulfuricPure = sig('pass1.sulfuricPure', TEN.times(acidMass).div(HUNDRED));
+  const sulfuricPure = sig('pass1.sulfuricPure', fix('pass1.acidRule', 0, TEN).times(acidMass).div(HUNDRED));
   const sulfuric = sig('pass1.sulfuric', sulfuricPure.div(sulfuricAssay).times(HUNDRED));
   sig('pass1.sulfuricVolume', sulfuric.div(sulfuricDensity));
   const sulfuricPresent = sig('pass1.sulfuricPresent', sulfuricPure);
