@@ -1,4 +1,4 @@
-import { readdirSync, readFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { basename, dirname } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { Plugin, UserConfig } from 'vite';
@@ -31,6 +31,31 @@ const shared: UserConfig = {
   },
 };
 
+/** The page without a build and what it loads: handed out as they lie. */
+const plainFiles: Readonly<Record<string, string>> = {
+  ...Object.fromEntries(['script.html', 'script.css', 'base.css', 'icon.svg'].map((file) => [file, at(`./demo/${file}`)])),
+  'esterway.min.js': scriptFile,
+};
+
+const asTheyLie: Plugin = {
+  name: 'as-they-lie',
+  configureServer({ middlewares }) {
+    const types: Readonly<Record<string, string>> = { 'script.html': 'text/html', 'esterway.min.js': 'text/javascript' };
+    middlewares.use((request, response, next) => {
+      const name = (request.url ?? '').slice(1).replace(/[?#].*/, '');
+      const [file, type] = [plainFiles[name], types[name]];
+      if (!file || !type || !existsSync(file)) return next();
+      response.setHeader('Content-Type', `${type}; charset=utf-8`).end(readFileSync(file));
+    });
+  },
+  generateBundle() {
+    for (const [fileName, file] of Object.entries(plainFiles)) {
+      if (existsSync(file)) this.emitFile({ type: 'asset', fileName, source: readFileSync(file) });
+      else this.warn(`${fileName} is not built yet: the page without a build will say so. Run "npm run build" first.`);
+    }
+  },
+};
+
 /** `npm start`: the pages of demo/. */
 const site: UserConfig = {
   ...shared,
@@ -38,6 +63,7 @@ const site: UserConfig = {
   appType: 'mpa',
   base: './',
   publicDir: false,
+  plugins: [asTheyLie],
   server: { host: 'localhost', fs: { allow: [at('.')] } },
   optimizeDeps: { include: runtime },
 };
@@ -81,7 +107,7 @@ const builds: Record<string, () => UserConfig> = {
       emptyOutDir: true,
       rolldownOptions: {
         input: readdirSync(at('./demo'), { recursive: true, encoding: 'utf8' })
-          .filter((file) => file.endsWith('.html'))
+          .filter((file) => file.endsWith('.html') && !(file in plainFiles))
           .map((file) => at(`./demo/${file}`)),
       },
     },
@@ -98,7 +124,9 @@ function bundle(entry: string, name: string, file: string): UserConfig {
       target: 'es2022',
       outDir: dirname(file),
       emptyOutDir: true,
-      minify: true,
+      // a hundredth smaller than the default minifier's output, which counts against the budgets
+      minify: 'terser',
+      terserOptions: { ecma: 2020, compress: { passes: 3 } },
       sourcemap: true,
       reportCompressedSize: false,
       license: { fileName: 'LICENSES.md' }, // minifying drops the notices of what is inside

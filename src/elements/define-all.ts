@@ -29,6 +29,7 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
  */
 export function defineEsterway(registry: CustomElementRegistry = customElements): void {
   const taken = ELEMENTS.filter(([tag]) => registry.get(tag));
+  // eslint-disable-next-line no-console -- whoever runs the page wants to know
   if (taken.length) console.warn(`Esterway: ${taken.map(([tag]) => `<${tag}>`).join(', ')} already registered; the first copy stays.`);
   for (const [tag, element] of ELEMENTS) if (!registry.get(tag)) registry.define(tag, element);
 }

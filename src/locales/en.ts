@@ -226,14 +226,14 @@ export const en = {
     onRetest: 'on the retest',
     total: 'in all',
     forRun: {
-      oil: 'Oil, warmed to {temperature}',
+      oil: 'Oil, dry, not yet heated',
       'oil-direct': 'Oil, dry and warm, 55–65 °C',
       'pretreated-oil': 'Pretreated oil, upper layer drawn off',
       methanol: 'Methanol {assay} %',
       'sulfuric-acid': 'Sulfuric acid {assay} %',
       catalyst: '{catalyst} {assay} %',
       'mix-methoxide': 'Dissolve the catalyst in the methanol, then stir the mixture into the warm oil. Hold at 55–65 °C, 30–60 min (common practice).',
-      settle: 'Hold at {temperature} for {time}, stirred and closed. Settle, draw off the methanol layer.',
+      settle: 'Only now warm to {temperature}; hold for {time}, stirred and closed. Settle, draw off the methanol layer.',
       retest: 'Titrate the oil again before the base step.',
     },
     methanolBasis: {
@@ -263,11 +263,11 @@ export const en = {
     retestTitle: 'Retest after the acid step',
     retestNone: 'Until it is titrated, the base step stands on the cautious end of the estimate.',
     waiting: 'The charge needs the amount of oil and the acidity.',
-    notThisRoute: 'This site has chosen the other route for this lot.',
+    notThisRoute: 'This is not the route that follows for this lot.',
   },
   cautions: {
     title: 'Care.',
-    methanol: 'Methanol is toxic by breath, skin and mouth, and burns with a flame you cannot see: no ignition sources, ventilation, gloves and goggles.',
+    methanol: 'Methanol is toxic if swallowed, inhaled or on the skin, and burns with a flame you cannot see: no ignition sources, ventilation, gloves and goggles.',
     'caustic-into-methanol': 'Caustic slowly into methanol, never methanol onto caustic: it heats and can boil over.',
     'acid-into-oil': 'Concentrated acid slowly into the oil or methanol, stirred and cool, never the reverse.',
     'closed-vessel': 'Above 60 °C methanol nearly boils: closed vessel with a condenser or vent, never sealed tight.',
@@ -315,5 +315,6 @@ type Widened<T> = T extends string ? string : T extends readonly (infer Item)[] 
 
 /** Puts figures and words into a sentence. */
 export function fill(text: string, params: Readonly<Record<string, string>>): string {
-  return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole);
+  // a per cent sign never stands alone at the start of a line
+  return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole).replaceAll(' %', '\u00a0%');
 }

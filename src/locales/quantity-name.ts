@@ -4,7 +4,7 @@ import type { Texts } from './en.js';
 type Words = Readonly<Record<string, string>>;
 
 /** `retest.run1.titre`, `pass2.conversion.slow`, `direct.catalyst`: where, and which run or pass, and what. */
-const KEY = /^(retest\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.))?(.+?)(\.slow|\.fast)?$/;
+const KEY = /^(retest\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
 /** A site value that each catalyst product has for itself: `KOH.assay`. */
 const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density)$/;
 

@@ -29,11 +29,11 @@ export function applyEdit(entry: LotEntry, edit: Edit): LotEntry {
     case 'option':
       return withSampleUnits({ ...entry, options: withKey(entry.options, edit.key, edit.option) }, edit);
     case 'text':
-      return withKey(entry, edit.key, edit.text || undefined) as LotEntry;
+      return withKey(entry, edit.key, edit.text || undefined);
     case 'cells':
       return { ...entry, [edit.list]: edit.cells.reduce(withCell, entry[edit.list]) };
     case 'strike': {
-      const runs = entry[edit.list].map((run, index) => (index === edit.index ? (withKey(run, 'struck', edit.reason) as RunEntry) : run));
+      const runs = entry[edit.list].map((run, index) => (index === edit.index ? withKey(run, 'struck', edit.reason) : run));
       return { ...entry, [edit.list]: runs };
     }
     case 'replace':
@@ -70,7 +70,7 @@ function withSampleUnits(entry: LotEntry, edit: Extract<Edit, { kind: 'option' }
 function withCell(runs: readonly RunEntry[], { index, cell, figure }: CellEdit): readonly RunEntry[] {
   const filled = [...runs];
   while (filled.length <= index) filled.push({});
-  filled[index] = withKey(filled[index] ?? {}, cell, figure) as RunEntry;
+  filled[index] = withKey(filled[index] ?? {}, cell, figure);
   while (filled.length && Object.keys(filled.at(-1) ?? {}).length === 0) filled.pop();
   return filled;
 }

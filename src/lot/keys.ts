@@ -1,7 +1,7 @@
 import { lotFormulas } from '../chemistry/lot-formulas.js';
 import type { Unit } from '../formula/unit.js';
 import { gramPerLitre, litre } from '../formula/units.js';
-import type { KnownKeys } from './entry.js';
+import type { KnownKeys } from './check.js';
 
 // The keys of an entry. A figure stands under the key of the quantity it is an input of, but for two
 // fields whose unit decides which quantity they give, and for the cells of a run.

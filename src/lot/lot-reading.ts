@@ -1,7 +1,7 @@
 import type { ChargeStep } from '../decision/charge.js';
 import type { Route } from '../decision/route.js';
 import type { Problem } from '../formula/reading.js';
-import type { Fault } from './entry.js';
+import type { Fault } from './check.js';
 import type { Origin } from './givens.js';
 import type { RunState } from './runs.js';
 

@@ -10,6 +10,8 @@ export const fieldStyles = css`
     line-height: 1.3;
   }
   .line {
+    /* the target is the input, without the line under it */
+    box-sizing: content-box;
     display: flex;
     align-items: stretch;
     border-block-end: 1.5px solid var(--_glass);

@@ -1,4 +1,5 @@
 import { LitElement, html, nothing } from 'lit';
+import type { PropertyValues } from 'lit';
 import { property, query, state } from 'lit/decorators.js';
 import { decimalMark, fieldText, showNumber } from '../../exchange/number-format.js';
 import { readNumber } from '../../exchange/number-text.js';
@@ -53,8 +54,9 @@ export class FigureField extends LitElement {
   #sent: Figure | undefined;
   readonly #language = new LanguageController(this);
 
-  protected override willUpdate(): void {
-    if (this.draft !== undefined && !sameFigure(this.figure, this.#sent)) this.draft = undefined;
+  protected override willUpdate(changed: PropertyValues<this>): void {
+    // this field renders before the section hands the figure sent back: only a figure that has come can differ from it
+    if (changed.has('figure') && !sameFigure(this.figure, this.#sent)) this.draft = undefined;
   }
 
   override render() {

@@ -6,7 +6,7 @@ import { fieldText, showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import type { Problem } from '../../formula/reading.js';
 import { fill } from '../../locales/en.js';
-import { fieldName } from '../../locales/quantity-name.js';
+import { fieldLabel, fieldName } from '../../locales/quantity-name.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { Figure } from '../../lot/figure.js';
 import { LotElement } from './base.js';
@@ -67,7 +67,9 @@ export abstract class SectionElement extends LotElement {
         font: inherit;
       }
       h2 b {
+        min-inline-size: 0;
         font-weight: 650;
+        overflow-wrap: anywhere;
       }
       h3 {
         margin-block: 12px 2px;
@@ -204,7 +206,7 @@ export abstract class SectionElement extends LotElement {
   }
 
   protected fieldLabel(key: string): string {
-    return (this.texts.fields as Readonly<Record<string, string>>)[key] ?? fieldName(key, this.texts);
+    return fieldLabel(key, this.texts);
   }
 
   protected optionWords(key: string): readonly (readonly [string, string])[] {
@@ -274,7 +276,7 @@ export abstract class SectionElement extends LotElement {
     const reading = this.reading(key);
     if (reading?.value === undefined || reading.shown === undefined) return undefined;
     const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
-    return unit ? `${this.number(text)} ${unit}` : this.number(text);
+    return unit ? `${this.number(text)}\u00a0${unit}` : this.number(text);
   }
 
   /** A figure that opens its working when pressed; a dash with the reason while it is not known. */

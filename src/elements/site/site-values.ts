@@ -2,7 +2,7 @@ import { css, html } from 'lit';
 import type { TemplateResult } from 'lit';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import { fill } from '../../locales/en.js';
-import { fieldName } from '../../locales/quantity-name.js';
+import { fieldLabel } from '../../locales/quantity-name.js';
 import type { FigureInputEvent } from '../parts/figure-field.js';
 import type { OptionInputEvent } from '../parts/option-field.js';
 import { SectionElement } from '../parts/section.js';
@@ -110,7 +110,7 @@ export class EsterwaySiteValues extends SectionElement {
     const note = usual && fill(texts.site.source, { title: usual.source.title, mark: texts.marks[usual.source.mark] });
     return html`<esterway-figure
       exportparts="line: field-line, input: field-input"
-      .label=${fieldName(key, texts)}
+      .label=${fieldLabel(key, texts)}
       .figure=${this.desk.site.figures[key]}
       .standing=${usual}
       .units=${usual ? [usual.unit] : (UNIT_OF[key] ?? [''])}

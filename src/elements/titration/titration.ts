@@ -132,7 +132,7 @@ export class EsterwayTitration extends SectionElement {
     const ffa = this.amountWords(`${this.keyPrefix}freeFattyAcid`);
     const acidValue = this.amountWords(`${this.keyPrefix}acidValue`);
     const strength = this.retest ? undefined : this.amountWords('titrantMolarity') ?? this.amountWords('titrantMassStrength');
-    if (this.folded) return ffa && acidValue ? `AV ${acidValue} · FFA ${ffa}` : this.texts.result.notKnown;
+    if (this.folded) return ffa && acidValue ? `${this.texts.runs.acidValue} ${acidValue} · FFA ${ffa}` : this.texts.result.notKnown;
     return strength ? `${this.optionText('titrantAlkali')} ${strength}` : '';
   }
 

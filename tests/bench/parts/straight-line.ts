@@ -27,14 +27,16 @@ const KOH_BY_METHOD = D('56.1');
 const [ALCOHOLIC, OIL_SLOPE, METHANOL_AT_20, METHANOL_SLOPE] = [D('0.0011'), D('0.64'), D('0.7913'), D('0.00094')];
 const [GAS, KELVIN_60, KELVIN_0, FIFTEEN, TWENTY, FORTY] = [D('8.314462618'), D('333.15'), D('273.15'), D('15'), D('20'), D('40')];
 
+/** A figure as it is written, parsed. */
+const F = (text: string): { text: string; value: Decimal } => ({ text, value: D(text) });
 // the default figures are parsed once, as readLot does
 const SITE = {
-  sampleDensity: D('0.917'), standardisationTemperature: D('20'), oilTemperature: D('20'), typicalOilDensity: D('920'),
-  saponificationValue: D('190'), insolubles: D('0.05'), directLimit: D('3.0'), pretreatmentLimit: D('40'), pretreatmentTarget: D('1.0'),
-  waterLimitBase: D('0.10'), waterLimitAcid: D('0.50'), cleanOilFfa: D('0.5'), assay: D('90'), baseLoad: D('1.0'), methanolAssay: D('99.9'),
-  methanolTemperature: D('20'), methanolRatio: D('6'), conversion: D('98'), entrainedEster: D('1.0'), pretreatmentTemperature: D('60'),
-  pretreatmentTime: D('60'), sulfuricAssay: D('96'), sulfuricDensity: D('1.8355'), carryOver: D('10'), loadExponent: D('0.35'),
-  waterExponent: D('0.83'), activationEnergy: D('48000'), equilibriumSlow: D('2'), equilibriumFast: D('8'), rateSlow: D('0.032'), rateFast: D('0.25'),
+  sampleDensity: F('0.917'), standardisationTemperature: F('20'), oilTemperature: F('20'), typicalOilDensity: F('920'),
+  saponificationValue: F('190'), insolubles: F('0.05'), directLimit: F('3.0'), pretreatmentLimit: F('40'), pretreatmentTarget: F('1.0'),
+  waterLimitBase: F('0.10'), waterLimitAcid: F('0.50'), cleanOilFfa: F('0.5'), assay: F('90'), baseLoad: F('1.0'), methanolAssay: F('99.9'),
+  methanolTemperature: F('20'), methanolRatio: F('6'), conversion: F('98'), entrainedEster: F('1.0'), pretreatmentTemperature: F('60'),
+  pretreatmentTime: F('60'), sulfuricAssay: F('96'), sulfuricDensity: F('1.8355'), carryOver: F('10'), loadExponent: F('0.35'),
+  waterExponent: F('0.83'), activationEnergy: F('48000'), equilibriumSlow: F('2'), equilibriumFast: F('8'), rateSlow: F('0.032'), rateFast: F('0.25'),
 };
 
 /** @throws where the lot is not the case that this is written for. */
@@ -43,6 +45,11 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const text = (figure: { text: string } | { typed: string } | undefined): string => {
     if (!figure || !('text' in figure)) throw new RangeError('a figure that is not there');
     return figure.text;
+  };
+  /** An input, shown as it was written. */
+  const given = (key: string, { text: shown, value }: { text: string; value: Decimal }): Decimal => {
+    out[key] = { value: value.toString(), shown };
+    return value;
   };
   const fix = (key: string, decimals: number, value: Decimal): Decimal => {
     out[key] = { value: value.toString(), shown: shownText(value, { decimals }) };
@@ -56,10 +63,10 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const av = (key: string, value: Decimal): Decimal => fix(key, value.abs().lt(ONE) ? 2 : value.abs().lt(HUNDRED) ? 1 : 0, value);
 
   // titration
-  const sampleDensity = fix('sampleDensity', 3, SITE.sampleDensity);
-  const c = sig('titrantConcentration', sig('titrantMolarity', D(text(typed.titrantStrength))));
+  const sampleDensity = given('sampleDensity', SITE.sampleDensity);
+  const c = sig('titrantConcentration', given('titrantMolarity', F(text(typed.titrantStrength))));
   const titrantMolarMass = fix('titrantMolarMass', 3, M_KOH);
-  const t0 = fix('standardisationTemperature', 1, SITE.standardisationTemperature);
+  const t0 = given('standardisationTemperature', SITE.standardisationTemperature);
   const t = fix('titrationTemperature', 1, t0);
   const expansion = sig('titrantExpansion', ALCOHOLIC);
   const volumeFactor = fix('volumeFactor', 5, ONE.minus(expansion.times(t.minus(t0))));
@@ -70,9 +77,9 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const run = (number: 1 | 2): Decimal => {
     const { sample, start, end } = runs[number - 1]!;
     const key = `run${number}.`;
-    const mass = sig(`${key}sampleMass`, sig(`${key}weighedMass`, D(text(sample))));
-    const from = fix(`${key}buretteStart`, 2, D(text(start)));
-    const titre = fix(`${key}titre`, 2, fix(`${key}buretteEnd`, 2, D(text(end))).minus(from));
+    const mass = sig(`${key}sampleMass`, given(`${key}weighedMass`, F(text(sample))));
+    const from = given(`${key}buretteStart`, F(text(start)));
+    const titre = fix(`${key}titre`, 2, given(`${key}buretteEnd`, F(text(end))).minus(from));
     const net = fix(`${key}netTitre`, 3, fix(`${key}correctedTitre`, 3, titre.times(volumeFactor)).minus(blank));
     const content = sig(`${key}acidContent`, c.times(net).div(mass));
     if (net.lte(ZERO) || content.gt(greatest)) throw new RangeError('a run that is refused');
@@ -86,14 +93,14 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   sig('alkaliPerLitreOfOil', b.times(sampleDensity).times(titrantMolarMass), 3);
 
   // oil
-  const oilTemperature = fix('oilTemperature', 1, SITE.oilTemperature);
-  const density15 = fix('oilDensity15', 1, sig('typicalOilDensity', SITE.typicalOilDensity));
+  const oilTemperature = given('oilTemperature', SITE.oilTemperature);
+  const density15 = fix('oilDensity15', 1, given('typicalOilDensity', SITE.typicalOilDensity));
   const density = fix('oilDensity', 1, density15.minus(OIL_SLOPE.times(oilTemperature.minus(FIFTEEN))));
-  const oil = sig('oilMass', sig('weighedOil', D(text(typed.oilAmount))));
+  const oil = sig('oilMass', given('weighedOil', F(text(typed.oilAmount))));
   const oilVolume = sig('oilVolume', oil.div(density).times(THOUSAND));
-  const water = fix('waterContent', 2, D(text(typed.waterContent)));
-  const insolubles = fix('insolubles', 2, SITE.insolubles);
-  const saponification = fix('saponificationValue', 1, SITE.saponificationValue);
+  const water = given('waterContent', F(text(typed.waterContent)));
+  const insolubles = given('insolubles', SITE.insolubles);
+  const saponification = given('saponificationValue', SITE.saponificationValue);
   const share = sig('glycerideShare', HUNDRED.minus(acidMolarMass.times(b).div(TEN)).minus(water).minus(insolubles));
   const content = sig('glycerideContent', saponification.minus(M_KOH.times(b)).div(THREE.times(M_KOH)));
   const glyceride = fix('glycerideMolarMass', 1, share.div(content).times(TEN));
@@ -101,24 +108,24 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const acidAmount = sig('acidAmount', b.times(oil));
 
   // catalyst, methanol and what the site says
-  const assay = fix('catalystAssay', 1, fix('KOH.assay', 1, SITE.assay));
-  const baseLoad = fix('catalystBaseLoad', 2, fix('KOH.baseLoad', 2, SITE.baseLoad));
+  const assay = fix('catalystAssay', 1, given('KOH.assay', SITE.assay));
+  const baseLoad = fix('catalystBaseLoad', 2, given('KOH.baseLoad', SITE.baseLoad));
   const catalystMass = fix('catalystMolarMass', 3, M_KOH);
   const methanolInRest = sig('methanolInRest', ZERO);
   const waterInRest = sig('waterInRest', HUNDRED);
   const waterPerCatalyst = fix('waterPerCatalyst', 0, ONE);
   const soapGain = fix('soapGain', 3, SOAP_GAIN);
-  const methanolAssay = fix('methanolAssay', 1, SITE.methanolAssay);
-  const methanolDensity = fix('methanolDensity', 4, METHANOL_AT_20.minus(METHANOL_SLOPE.times(fix('methanolTemperature', 1, SITE.methanolTemperature).minus(TWENTY))));
-  const ratio = sig('methanolRatio', SITE.methanolRatio, 3);
-  const conversion = fix('conversion', 1, SITE.conversion);
-  const entrainment = sig('entrainedEster', SITE.entrainedEster);
-  const directLimit = fix('directLimit', 2, SITE.directLimit);
-  ffa('pretreatmentLimit', SITE.pretreatmentLimit);
-  const target = ffa('pretreatmentTarget', SITE.pretreatmentTarget);
-  ffa('waterLimitBase', SITE.waterLimitBase);
-  ffa('waterLimitAcid', SITE.waterLimitAcid);
-  const cleanOil = ffa('cleanOilFfa', SITE.cleanOilFfa);
+  const methanolAssay = given('methanolAssay', SITE.methanolAssay);
+  const methanolDensity = fix('methanolDensity', 4, METHANOL_AT_20.minus(METHANOL_SLOPE.times(given('methanolTemperature', SITE.methanolTemperature).minus(TWENTY))));
+  const ratio = given('methanolRatio', SITE.methanolRatio);
+  const conversion = given('conversion', SITE.conversion);
+  const entrainment = given('entrainedEster', SITE.entrainedEster);
+  const directLimit = given('directLimit', SITE.directLimit);
+  given('pretreatmentLimit', SITE.pretreatmentLimit);
+  const target = given('pretreatmentTarget', SITE.pretreatmentTarget);
+  given('waterLimitBase', SITE.waterLimitBase);
+  given('waterLimitAcid', SITE.waterLimitAcid);
+  const cleanOil = given('cleanOilFfa', SITE.cleanOilFfa);
   sig('blendOil', oil.times(freeFattyAcid.minus(directLimit)).div(directLimit.minus(cleanOil)));
   const glycerideAmount = content.times(oil);
 
@@ -160,14 +167,14 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   base('direct', { mass: oil, acid: acidAmount, sulfuric: ZERO, water: water.times(oil).div(HUNDRED), ester: ZERO });
 
   // acid step
-  const temperature = fix('pretreatmentTemperature', 1, SITE.pretreatmentTemperature);
-  const time = fix('pretreatmentTime', 0, SITE.pretreatmentTime);
-  const sulfuricAssay = sig('sulfuricAssay', SITE.sulfuricAssay);
-  const sulfuricDensity = fix('sulfuricDensity', 3, SITE.sulfuricDensity);
-  const carryOver = sig('carryOver', SITE.carryOver);
-  const loadExponent = sig('esterification.loadExponent', SITE.loadExponent);
-  const waterExponent = sig('esterification.waterExponent', SITE.waterExponent);
-  const energy = sig('esterification.activationEnergy', SITE.activationEnergy, 5);
+  const temperature = given('pretreatmentTemperature', SITE.pretreatmentTemperature);
+  const time = given('pretreatmentTime', SITE.pretreatmentTime);
+  const sulfuricAssay = given('sulfuricAssay', SITE.sulfuricAssay);
+  const sulfuricDensity = given('sulfuricDensity', SITE.sulfuricDensity);
+  const carryOver = given('carryOver', SITE.carryOver);
+  const loadExponent = given('esterification.loadExponent', SITE.loadExponent);
+  const waterExponent = given('esterification.waterExponent', SITE.waterExponent);
+  const energy = given('esterification.activationEnergy', SITE.activationEnergy);
   const temperatureFactor = sig('esterification.temperatureFactor',
     energy.div(GAS).times(ONE.div(KELVIN_60).minus(ONE.div(temperature.plus(KELVIN_0)))).exp());
   const acidMass = sig('pass1.acidMass', acidAmount.times(reference).div(THOUSAND));
@@ -204,8 +211,8 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
       water: put('waterCarried', carryOver.times(waterPresent.plus(turned)).div(HUNDRED)),
     };
   };
-  const slow = band('slow', sig('esterification.equilibriumSlow', SITE.equilibriumSlow), sig('esterification.rateSlow', SITE.rateSlow));
-  const fast = band('fast', sig('esterification.equilibriumFast', SITE.equilibriumFast), sig('esterification.rateFast', SITE.rateFast));
+  const slow = band('slow', given('esterification.equilibriumSlow', SITE.equilibriumSlow), given('esterification.rateSlow', SITE.rateSlow));
+  const fast = band('fast', given('esterification.equilibriumFast', SITE.equilibriumFast), given('esterification.rateFast', SITE.rateFast));
   if (slow.leftFfa.gt(target)) throw new RangeError('more passes than this is written for');
 
   const left = sig('pretreated.acidLeft', slow.left);
