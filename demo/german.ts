@@ -17,11 +17,11 @@ export const german: Readonly<Record<string, string>> = {
   hint: 'Antippen legt eine Lieferung auf den Arbeitsplatz. Alle Angaben dieser Seite sind erfunden.',
   notice: 'Trockner 2 steht bis Donnerstag',
   'notice.text':
-    'Nasse Partien warten in Tank 4, der noch 3,5 t fasst. Bitte den Wassergehalt jeder Lieferung messen, bevor sie '
+    'Nasse Partien warten in Tank 4, der noch 3,5\u00a0t fasst. Bitte den Wassergehalt jeder Lieferung messen, bevor sie '
     + 'abgepumpt wird, nicht nur bei Verdacht.',
   notes: 'Schichtbuch',
-  'note.titrant': 'KOH neu angesetzt und eingestellt: 0,1003 mol/L. Die alte Flasche ist leer und gespült.',
-  'note.stalls': 'Die Fässer von den Imbissständen riechen sauer und fließen zäh. Vor der Probe auf 35 °C erwärmt.',
+  'note.titrant': 'KOH neu angesetzt und eingestellt: 0,1003\u00a0mol/L. Die alte Flasche ist leer und gespült.',
+  'note.stalls': 'Die Fässer von den Imbissständen riechen sauer und fließen zäh. Vor der Probe auf 35\u00a0°C erwärmt.',
   'note.drums':
     'Der Zettel der Fässer ohne Etikett kann nicht stimmen. Neue Probe gezogen; bis dahin die alten Angaben behalten.',
   'note.expected': 'Erwartet: Kantinentour West, acht Fässer. Tor 2.',

@@ -62,10 +62,9 @@ export function equilibriumConversion(k: Expression, methanolPerAcid: Expression
   return constant('2').times(k).times(methanolPerAcid).per(sum.plus(root));
 }
 
-/** Rate constant from that at 60 °C and 5 % acid on FFA: k = k60 · f_T · (a/5 %)^n · (1 + W)^−m. */
-export function rateConstant(k60: Expression, acidLoad: Expression, waterPerAcid: Expression): Expression {
-  return k60
-    .times(temperatureFactor)
+/** What turns a rate constant at 60 °C and 5 % acid into that of the step: f_T · (a/5 %)^n · (1 + W)^−m. */
+export function rateFactorOf(acidLoad: Expression, waterPerAcid: Expression): Expression {
+  return temperatureFactor
     .times(acidLoad.per(constant('5', percent)).power(loadExponent))
     .per(constant('1').plus(waterPerAcid).power(waterExponent));
 }

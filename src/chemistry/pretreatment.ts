@@ -2,14 +2,15 @@ import { constant, whereBelow } from '../formula/expression.js';
 import type { Expression, Operand } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Quantity, QuantityDefinition } from '../formula/quantity.js';
+import type { Unit } from '../formula/unit.js';
 import { gramPerMillilitre, kilogram, litre, mole, molePerMole, one, perMinute, percent } from '../formula/units.js';
 import { freeFattyAcidLike, referenceAcidMolarMass } from './acidity.js';
-import { conversionAfter, equilibrium, equilibriumConversion, rateAt60, rateConstant } from './esterification.js';
+import { conversionAfter, equilibrium, equilibriumConversion, rateAt60, rateFactorOf } from './esterification.js';
 import type { Pace } from './esterification.js';
 import type { Glycerides } from './glycerides.js';
 import { methanolAssay, methanolDensity } from './methanol.js';
 import { oilMass, oilVolume, waterContent } from './oil.js';
-import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, NREL_PRETREATMENT, PRACTICE, STOICHIOMETRY } from './sources.js';
+import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, NREL_PRETREATMENT, PRACTICE, STOICHIOMETRY, WATER_INHIBITION } from './sources.js';
 import { M_METHANOL, M_WATER } from './substances.js';
 
 /** What the methanol of the acid step is counted on. `by-acidity`: 40 mol a mol of acid below 15 % FFA, else 20. */
@@ -103,17 +104,26 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
   const rest = (product: Expression, assay: Expression): Expression => product.times(constant('100', percent).minus(assay)).in(kilogram);
   const freshWater = rest(methanol, methanolAssay).plus(rest(sulfuric, sulfuricAssay)).per(M_WATER).in(mole);
 
-  const band = (pace: Pace) => {
-    const end = (name: string, symbol: string, is: Operand, more: Partial<QuantityDefinition>): Quantity => make(`${name}.${pace}`, symbol, is, more);
+  // what the acid meets; in the first pass it is the same at both ends of the band, so it is worked out once
+  const conditions = (pace: Pace, suffix: string) => {
+    const of = (name: string, symbol: string, is: Operand, unit: Unit, cites = [STOICHIOMETRY]): Quantity => make(name + suffix, symbol, is, { unit, cites });
     const waterBefore = before ? before.waterCarried[pace] : waterContent.times(oilMass).per(M_WATER).in(mole);
     const fresh = methanolPure.per(M_METHANOL).in(mole);
-    const methanolPresent = end('methanolPresent', 'n_M', before ? fresh.plus(before.methanolCarried[pace]) : fresh, { unit: mole });
-    const waterPresent = end('waterPresent', 'n_W', freshWater.plus(waterBefore), { unit: mole });
-    const methanolPerAcid = end('methanolPerAcid', 'R', methanolPresent.per(start[pace]), { unit: molePerMole });
-    const waterPerAcid = end('waterPerAcid', 'W', waterPresent.per(start[pace]), { unit: molePerMole });
-    const load = end('acidLoad', 'a', sulfuricPresent.per(start[pace].times(referenceAcidMolarMass)).in(percent), { unit: percent });
+    const methanolPresent = of('methanolPresent', 'n_M', before ? fresh.plus(before.methanolCarried[pace]) : fresh, mole);
+    const waterPresent = of('waterPresent', 'n_W', freshWater.plus(waterBefore), mole);
+    const methanolPerAcid = of('methanolPerAcid', 'R', methanolPresent.per(start[pace]), molePerMole);
+    const waterPerAcid = of('waterPerAcid', 'W', waterPresent.per(start[pace]), molePerMole);
+    const acidLoad = of('acidLoad', 'a', sulfuricPresent.per(start[pace].times(referenceAcidMolarMass)).in(percent), percent);
+    const rateFactor = of('rateFactor', 'f_k', rateFactorOf(acidLoad, waterPerAcid), one, [ESTERIFICATION_RATE, WATER_INHIBITION]);
+    return { methanolPresent, waterPresent, methanolPerAcid, waterPerAcid, rateFactor, all: [methanolPresent, waterPresent, methanolPerAcid, waterPerAcid, acidLoad, rateFactor] };
+  };
+  const atSlow = conditions('slow', before ? '.slow' : '');
+  const atFast = before ? conditions('fast', '.fast') : atSlow;
+
+  const band = (pace: Pace, { methanolPresent, waterPresent, methanolPerAcid, waterPerAcid, rateFactor }: typeof atSlow) => {
+    const end = (name: string, symbol: string, is: Operand, more: Partial<QuantityDefinition>): Quantity => make(`${name}.${pace}`, symbol, is, more);
     const limitOfIt = end('equilibrium', 'x_eq', equilibriumConversion(equilibrium[pace], methanolPerAcid, waterPerAcid), { unit: one, cites: [ESTERIFICATION_EQUILIBRIUM] });
-    const k = end('rate', 'k', rateConstant(rateAt60[pace], load, waterPerAcid), { unit: perMinute, cites: [ESTERIFICATION_RATE] });
+    const k = end('rate', 'k', rateAt60[pace].times(rateFactor), { unit: perMinute, cites: [ESTERIFICATION_RATE] });
     const reached = end('conversion', 'x', conversionAfter(limitOfIt, k), { unit: one, cites: [ESTERIFICATION_RATE, ESTERIFICATION_EQUILIBRIUM] });
     const turned = end('esterified', 'n_est', reached.times(start[pace]), { unit: mole });
     const acidLeft = end('acidLeft', 'n_left', start[pace].minus(turned), { unit: mole });
@@ -122,11 +132,11 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
     const waterCarried = end('waterCarried', 'n_W,left', carryOver.times(waterPresent.plus(turned)).in(mole), { unit: mole, cites: [PRACTICE] });
     return {
       acidLeft, ffaLeft, methanolCarried, waterCarried,
-      all: [methanolPresent, waterPresent, methanolPerAcid, waterPerAcid, load, limitOfIt, k, reached, turned, acidLeft, ffaLeft, methanolCarried, waterCarried],
+      all: [limitOfIt, k, reached, turned, acidLeft, ffaLeft, methanolCarried, waterCarried],
     };
   };
-  const slow = band('slow');
-  const fast = band('fast');
+  const slow = band('slow', atSlow);
+  const fast = band('fast', atFast);
   return {
     acid: { slow: slow.acidLeft, fast: fast.acidLeft },
     ffa: { slow: slow.ffaLeft, fast: fast.ffaLeft },
@@ -135,7 +145,7 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
     sulfuricCarried,
     all: [
       acidMass, ffaAtStart, methanolRule, acidRule, methanolPure, methanol, methanolVolume, sulfuricPure, sulfuric, sulfuricVolume, sulfuricPresent, sulfuricCarried,
-      ...slow.all, ...fast.all,
+      ...atSlow.all, ...(before ? atFast.all : []), ...slow.all, ...fast.all,
     ],
   };
 }

@@ -143,6 +143,7 @@ export const deQuantities: QuantityTexts = {
   acidLoad: 'Schwefelsäure auf freie Säure',
   equilibrium: 'Umsatz im Gleichgewicht',
   rate: 'Ratenkonstante',
+  rateFactor: 'Faktor der Rate',
   'pass.conversion': 'Umsatz',
   esterified: 'veresterte Säure',
   acidLeft: 'restliche freie Säure',

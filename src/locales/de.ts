@@ -119,7 +119,7 @@ export const de: Texts = {
     negative: 'Der Wert kann nicht negativ sein. Das Minuszeichen entfernen.',
     'out-of-range': 'Außerhalb des Möglichen: Die Grenze liegt bei {bound} {unit}. Zahl und Einheit prüfen.',
     'above-100-percent': 'Mehr als 100 %. Zahl und Einheit prüfen.',
-    'end-below-start': 'Das Ende liegt unter dem Anfang. Eine Bürette zählt nach unten: beide Werte prüfen, auch auf Vertauschung.',
+    'end-below-start': 'Das Ende liegt unter dem Start. Eine Bürette zählt nach unten: beide Werte prüfen, auch auf Vertauschung.',
     'titre-not-above-blank': 'Der Verbrauch liegt nicht über dem Blindwert, es ergäbe sich keine Säure. Beide Ablesungen und den Blindwert prüfen.',
     'ffa-above-100': 'Das ergibt mehr als 100 % freie Fettsäuren. Probe und Ablesungen prüfen, ebenso, ob der Gehalt der Maßlösung in mol/L oder g/L gilt.',
     'blank-with-neutralised-solvent': 'Neutralisiertes Lösemittel hat keinen Blindwert: Wird dennoch einer abgezogen, fällt der Säuregehalt zu niedrig aus. Den Blindwert leeren oder „Blindwert abgezogen“ wählen.',

@@ -145,6 +145,7 @@ export const enQuantities = {
   acidLoad: 'sulfuric acid on the free acid',
   equilibrium: 'conversion at equilibrium',
   rate: 'rate constant',
+  rateFactor: 'factor of the rate',
   'pass.conversion': 'conversion',
   esterified: 'acid esterified',
   acidLeft: 'free acid left',

@@ -77,7 +77,7 @@ describe('a lot worked by hand', () => {
       'pass1.sulfuric': '2.379375', // 2.2842 / 0.96
       'pass1.sulfuricVolume': '1.296309', // 2.379375 / 1.8355
       // (103.92 · 0.001 + 2.379375 · 0.04 + 1000 · 0.001) · 1000 / 18.015 / 81
-      'pass1.waterPerAcid.slow': '0.821740',
+      'pass1.waterPerAcid': '0.821740',
       'pass1.equilibrium.slow': '0.977466', // s = 2 · 41 + 0.821740; 2 · 2 · 40 / (s + √(s² − 4 · 1 · 2 · 40))
       'pass1.rate.slow': '0.024792', // 0.032 · 2^0.35 / 1.821740^0.83
       'pass1.conversion.slow': '0.764066', // 0.977466 · (1 − exp(−0.024792 · 60 / 0.977466))

@@ -38,7 +38,7 @@ describe('the working of a figure', () => {
   });
 
   it.each([
-    'pass1.acidMass', 'pass1.methanolPure', 'pass1.methanol', 'pass1.sulfuric', 'pass1.sulfuricVolume', 'pass1.waterPresent.slow', 'pass1.acidLoad.slow',
+    'pass1.acidMass', 'pass1.methanolPure', 'pass1.methanol', 'pass1.sulfuric', 'pass1.sulfuricVolume', 'pass1.waterPresent', 'pass1.acidLoad', 'pass1.rateFactor',
     'pass1.equilibrium.slow', 'pass1.rate.slow', 'pass1.conversion.slow', 'pass1.ffaLeft.slow', 'pass1.equilibrium.fast', 'pass2.methanolPresent.slow',
     'esterification.temperatureFactor', 'pretreated.mass', 'twoStep.catalyst', 'twoStep.catalystVolume', 'twoStep.mineralPure', 'twoStep.methanol', 'profileAcidMolarMass',
   ])('%s of the two-step route too', (key) => {

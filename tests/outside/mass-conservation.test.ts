@@ -117,7 +117,11 @@ function baseStep(readings: Readings, route: 'direct' | 'twoStep', feed: Stock, 
 function acidPass(readings: Readings, pass: number, pace: 'slow' | 'fast', esterBefore: Wide): Wide {
   const { triglyceride, freeAcid, esterOfFreeAcid, methanol, water, sulfuricAcid } = SPECIES;
   const get = (name: string): Wide => readings.get(`pass${pass}.${name}.${pace}`);
+  // in the first pass both ends of the band meet the same
+  const present = (name: string) => (pass === 1 ? readings.get(`pass1.${name}`) : get(name));
   const before = (name: string): Wide => readings.get(`pass${pass - 1}.${name}.${pace}`);
+  /** What the acid meets is the same at both ends of the first pass. */
+  const present = (name: string): Wide => readings.get(pass === 1 ? `pass1.${name}` : `pass${pass}.${name}.${pace}`);
   const gramsOf = (atoms: Atoms): Wide => readings.stock().add(wide(1), atoms).mass;
 
   let feed = readings.oil();
@@ -141,15 +145,15 @@ function acidPass(readings: Readings, pass: number, pace: 'slow' | 'fast', ester
     .add(readings.get('direct.glycerideAmount'), triglyceride)
     .add(get('acidLeft'), freeAcid)
     .add(ester, esterOfFreeAcid)
-    .add(get('methanolPresent').minus(get('esterified')), methanol)
-    .add(get('waterPresent').plus(get('esterified')), water)
+    .add(present('methanolPresent').minus(get('esterified')), methanol)
+    .add(present('waterPresent').plus(get('esterified')), water)
     .add(readings.moles(`pass${pass}.sulfuricPresent`, sulfuricAcid), sulfuricAcid)
     .addInert(readings.insolubles));
 
   // the layer drawn off and what stays are the whole of it
   const stays = readings.share('carryOver');
-  expectSame(get('methanolCarried'), get('methanolPresent').minus(get('esterified')).times(stays));
-  expectSame(get('waterCarried'), get('waterPresent').plus(get('esterified')).times(stays));
+  expectSame(get('methanolCarried'), present('methanolPresent').minus(get('esterified')).times(stays));
+  expectSame(get('waterCarried'), present('waterPresent').plus(get('esterified')).times(stays));
   expectSame(readings.grams(`pass${pass}.sulfuricCarried`), readings.grams(`pass${pass}.sulfuricPresent`).times(stays));
   return ester;
 }

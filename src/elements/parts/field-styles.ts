@@ -101,5 +101,8 @@ export const fieldStyles = css`
     select {
       appearance: none;
     }
+    ::-webkit-calendar-picker-indicator {
+      display: none;
+    }
   }
 `;

@@ -151,6 +151,11 @@ export const buttons = css`
   .open:hover {
     text-decoration-style: solid;
   }
+  @media print {
+    .open {
+      text-decoration: none;
+    }
+  }
   @media (forced-colors: active) {
     .action.main {
       border-width: 2px;

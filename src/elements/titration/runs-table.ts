@@ -80,6 +80,12 @@ export class RunsTable implements ReactiveController {
       color: var(--_pink);
       font-size: 0.92em;
     }
+    @media print {
+      .run {
+        min-block-size: 0;
+        text-decoration: none;
+      }
+    }
     .strike {
       display: flex;
       flex-wrap: wrap;

@@ -190,17 +190,19 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const freshWater = methanol.times(HUNDRED.minus(methanolAssay)).div(HUNDRED)
     .plus(sulfuric.times(HUNDRED.minus(sulfuricAssay)).div(HUNDRED)).div(M_WATER).times(THOUSAND);
 
+  const methanolPresent = sig('pass1.methanolPresent', methanolPure.div(M_METHANOL).times(THOUSAND));
+  const waterPresent = sig('pass1.waterPresent', freshWater.plus(water.times(oil).div(M_WATER).times(TEN)));
+  const R = sig('pass1.methanolPerAcid', methanolPresent.div(acidAmount));
+  const W = sig('pass1.waterPerAcid', waterPresent.div(acidAmount));
+  const load = sig('pass1.acidLoad', sulfuricPresent.div(acidAmount.times(reference)).times(HUNDRED_THOUSAND));
+  const rateFactor = sig('pass1.rateFactor', temperatureFactor.times(load.div(FIVE).pow(loadExponent)).div(ONE.plus(W).pow(waterExponent)));
+
   const band = (pace: string, K: Decimal, k60: Decimal): { left: Decimal; leftFfa: Decimal; methanol: Decimal; water: Decimal } => {
     const put = (name: string, value: Decimal): Decimal => sig(`pass1.${name}.${pace}`, value);
-    const methanolPresent = put('methanolPresent', methanolPure.div(M_METHANOL).times(THOUSAND));
-    const waterPresent = put('waterPresent', freshWater.plus(water.times(oil).div(M_WATER).times(TEN)));
-    const R = put('methanolPerAcid', methanolPresent.div(acidAmount));
-    const W = put('waterPerAcid', waterPresent.div(acidAmount));
-    const load = put('acidLoad', sulfuricPresent.div(acidAmount.times(reference)).times(HUNDRED_THOUSAND));
     const sum = K.times(ONE.plus(R)).plus(W);
     const root = sum.pow(TWO).minus(FOUR.times(K.minus(ONE)).times(K).times(R)).sqrt();
     const limit = put('equilibrium', TWO.times(K).times(R).div(sum.plus(root)));
-    const k = put('rate', k60.times(temperatureFactor).times(load.div(FIVE).pow(loadExponent)).div(ONE.plus(W).pow(waterExponent)));
+    const k = put('rate', k60.times(rateFactor));
     const reached = put('conversion', limit.times(ONE.minus(ONE.div(k.times(time).div(limit).exp()))));
     const turned = put('esterified', reached.times(acidAmount));
     const left = put('acidLeft', acidAmount.minus(turned));
