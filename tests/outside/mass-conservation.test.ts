@@ -117,8 +117,6 @@ function baseStep(readings: Readings, route: 'direct' | 'twoStep', feed: Stock, 
 function acidPass(readings: Readings, pass: number, pace: 'slow' | 'fast', esterBefore: Wide): Wide {
   const { triglyceride, freeAcid, esterOfFreeAcid, methanol, water, sulfuricAcid } = SPECIES;
   const get = (name: string): Wide => readings.get(`pass${pass}.${name}.${pace}`);
-  // in the first pass both ends of the band meet the same
-  const present = (name: string) => (pass === 1 ? readings.get(`pass1.${name}`) : get(name));
   const before = (name: string): Wide => readings.get(`pass${pass - 1}.${name}.${pace}`);
   /** What the acid meets is the same at both ends of the first pass. */
   const present = (name: string): Wide => readings.get(pass === 1 ? `pass1.${name}` : `pass${pass}.${name}.${pace}`);
