@@ -6,6 +6,18 @@ import { SectionElement } from '../parts/section.js';
 
 type RouteName = 'direct' | 'twoStep';
 
+/** The figure that each typed basis of the acid step counts on. */
+const METHANOL_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
+  'per-acid': { key: 'pretreatmentMethanolPerAcid', unit: 'mol/mol' },
+  'per-oil': { key: 'pretreatmentMethanolPerOil', unit: 'mol/mol' },
+  'oil-volume': { key: 'pretreatmentMethanolShare', unit: '%' },
+};
+const ACID_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
+  'of-acid': { key: 'pretreatmentAcidOfAcid', unit: '%' },
+  'of-oil': { key: 'pretreatmentAcidOfOil', unit: '%' },
+  'oil-volume': { key: 'pretreatmentAcidShare', unit: '%' },
+};
+
 /**
  * The charge of a lot: what to weigh, in order of addition, for either route, with base and extra
  * catalyst apart, the cautions at the step they belong to, and the retest between the two steps.
@@ -177,7 +189,36 @@ export class EsterwayCharge extends SectionElement {
       </div>
       ${this.looked === this.recommended || lot.route.verdict === 'not-known' ? nothing : html`<p class="gate small">${texts.charge.notThisRoute} ${texts.verdicts[lot.route.verdict]}.</p>`}
       ${this.reading(`${this.looked}.catalyst`)?.value === undefined ? html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>` : nothing}
-      ${steps.map((step) => this.step(step, steps))} ${this.outcome()}
+      ${this.reagents()} ${steps.map((step) => this.step(step, steps))} ${this.outcome()}
+    `;
+  }
+
+  /** What the charge is worked out with: the site's, unless this lot is charged otherwise. */
+  private reagents(): unknown {
+    const acidStep = this.looked === 'twoStep';
+    const temperatures = this.desk.units === 'us' ? ['°F', '°C'] : ['°C', '°F'];
+    const words = [this.optionText('catalyst'), fill(this.texts.charge.methanolBasis.base, { ratio: this.plain('methanolRatio') })];
+    return html`
+      <details class="no-print">
+        <summary>${words.join(' · ')}</summary>
+        <div class="fields">
+          ${this.optionField('catalyst', true)} ${this.figureField(`${this.option('catalyst')}.baseLoad`, ['%'])}
+          ${this.figureField(`${this.option('catalyst')}.assay`, ['%'])} ${this.figureField('methanolRatio', ['mol/mol'])}
+          ${this.figureField('methanolAssay', ['%'])} ${this.figureField('methanolTemperature', temperatures)}
+          ${acidStep ? this.acidStepReagents(temperatures) : nothing}
+        </div>
+      </details>
+    `;
+  }
+
+  private acidStepReagents(temperatures: readonly string[]): unknown {
+    const methanol = METHANOL_FIGURE[this.option('pretreatmentMethanolBasis')];
+    const acid = ACID_FIGURE[this.option('pretreatmentAcidBasis')];
+    return html`
+      ${this.optionField('pretreatmentMethanolBasis', true)} ${methanol ? this.figureField(methanol.key, [methanol.unit]) : nothing}
+      ${this.optionField('pretreatmentAcidBasis', true)} ${acid ? this.figureField(acid.key, [acid.unit]) : nothing}
+      ${this.figureField('sulfuricAssay', ['%'])} ${this.figureField('pretreatmentTemperature', temperatures)}
+      ${this.figureField('pretreatmentTime', ['min', 'h'])}
     `;
   }
 
@@ -251,14 +292,12 @@ export class EsterwayCharge extends SectionElement {
     }
     if (what === 'methanol') {
       const basis = this.option('pretreatmentMethanolBasis') as keyof typeof charge.methanolBasis;
-      const typed = { 'per-acid': 'pretreatmentMethanolPerAcid', 'per-oil': 'pretreatmentMethanolPerOil', 'oil-volume': 'pretreatmentMethanolShare' }[basis as string];
-      const ratio = typed ? this.plain(typed) : this.plain(`pass${step.pass}.methanolRule`);
+      const ratio = this.plain(METHANOL_FIGURE[basis]?.key ?? `pass${step.pass}.methanolRule`);
       return fill(charge.methanolBasis[basis], { ratio });
     }
     if (what === 'sulfuric-acid') {
       const basis = this.option('pretreatmentAcidBasis') as keyof typeof charge.acidBasis;
-      const typed = { 'of-acid': 'pretreatmentAcidOfAcid', 'of-oil': 'pretreatmentAcidOfOil', 'oil-volume': 'pretreatmentAcidShare' }[basis as string];
-      return fill(charge.acidBasis[basis], { share: typed ? this.plain(typed) : this.plain(`pass${step.pass}.acidRule`) });
+      return fill(charge.acidBasis[basis], { share: this.plain(ACID_FIGURE[basis]?.key ?? `pass${step.pass}.acidRule`) });
     }
     return nothing;
   }

@@ -1,4 +1,4 @@
-import { css, html } from 'lit';
+import { css, html, nothing } from 'lit';
 import { fieldStyles } from '../parts/field-styles.js';
 import { moveFocus } from '../parts/focus-order.js';
 import { SectionElement } from '../parts/section.js';
@@ -56,6 +56,25 @@ export class EsterwayLot extends SectionElement {
         ${this.figureField('oilAmount', AMOUNT_UNITS[units])} ${this.figureField('oilTemperature', TEMPERATURE_UNITS[units])}
         ${this.figureField('waterContent', SHARE_UNITS)} ${this.figureField('insolubles', SHARE_UNITS)}
       </div>
+      ${this.kindOfOil()}
+    `;
+  }
+
+  /** What the glycerides and the density are worked out from: changes seldom, so it is folded to a line. */
+  private kindOfOil(): unknown {
+    const glycerides = this.option('glyceridesBy');
+    const density = this.option('oilDensityBy');
+    const kind = glycerides === 'profile' ? this.optionText('fat') : `${this.fieldLabel('saponificationValue')} ${this.amountWords('saponificationValue') ?? '–'}`;
+    return html`
+      <details class="no-print">
+        <summary>${[kind, this.optionText('oilDensityBy')].join(' · ')}</summary>
+        <div class="fields">
+          ${this.optionField('glyceridesBy', true)} ${glycerides === 'profile' ? this.optionField('fat', true) : nothing}
+          ${glycerides === 'saponification-value' || density === 'lund' ? this.figureField('saponificationValue', ['mg/g']) : nothing}
+          ${this.optionField('oilDensityBy', true)} ${density === 'lund' ? this.figureField('iodineValue', ['']) : nothing}
+          ${density === 'measured' ? this.figureField('measuredOilDensity', ['kg/m³', 'g/mL']) : nothing}
+        </div>
+      </details>
     `;
   }
 
