@@ -1,5 +1,5 @@
 /** What goes into the vessel, or is done with it. */
-export type ChargeWhat = 'oil' | 'pretreated-oil' | 'methanol' | 'sulfuric-acid' | 'catalyst' | 'mix-methoxide' | 'settle' | 'retest';
+export type ChargeWhat = 'oil' | 'pretreated-oil' | 'methanol' | 'sulfuric-acid' | 'catalyst' | 'mix-methoxide' | 'cool' | 'settle' | 'retest';
 
 /** A line of a charge, in order of addition. */
 export interface ChargeLine {
@@ -36,13 +36,13 @@ export function twoStepCharge(passes: number): readonly ChargeStep[] {
       step: 'acid',
       pass,
       lines: [
-        ...(pass === 1 ? [{ what: 'oil', mass: 'oilMass', volume: 'oilVolume' } as const] : []),
+        pass === 1 ? { what: 'oil', mass: 'oilMass', volume: 'oilVolume' } : { what: 'cool' },
         { what: 'methanol', mass: `pass${pass}.methanol`, volume: `pass${pass}.methanolVolume` },
         { what: 'sulfuric-acid', mass: `pass${pass}.sulfuric`, volume: `pass${pass}.sulfuricVolume` },
         { what: 'settle' },
         ...(pass === passes ? [{ what: 'retest' } as const] : []),
       ],
-      cautions: ['methanol', 'acid-into-oil', 'closed-vessel', 'layers-are-hazardous'],
+      cautions: pass === 1 ? ['methanol', 'acid-into-oil', 'closed-vessel', 'layers-are-hazardous'] : ['acid-into-oil', 'closed-vessel', 'layers-are-hazardous'],
     };
   });
   return [...acidSteps, baseStep('twoStep', [{ what: 'pretreated-oil', mass: 'pretreated.mass' }])];

@@ -20,6 +20,8 @@ const LADDER: Readonly<Record<UnitSystem, ReadonlyMap<string, readonly Unit[]>>>
   metric: new Map([[kilogram.symbol, [kilogram, gram]], [litre.symbol, [litre, millilitre]]]),
   us: new Map([[kilogram.symbol, [pound, gram]], [litre.symbol, [gallonUS, millilitre]], [degreeCelsius.symbol, [degreeFahrenheit]]]),
 };
+/** Below this the next smaller unit is easier to read off. */
+const LEAST: Readonly<Record<UnitSystem, number>> = { metric: 1, us: 0.1 };
 const BY_SYMBOL: ReadonlyMap<string, Unit> = new Map([kilogram, litre, degreeCelsius].map((unit) => [unit.symbol, unit]));
 
 /**
@@ -35,7 +37,7 @@ export function amountIn(value: string, shown: string, unit: string, system: Uni
   if (!ladder || !from) return { text: shown, unit };
   const figure = new Decimal(value);
   const fitting = ladder.map((to) => ({ to, converted: from.convert(figure, to) }));
-  const chosen = fitting.find(({ converted }) => converted.abs().gte(1)) ?? fitting.at(figure.isZero() ? 0 : -1);
+  const chosen = fitting.find(({ converted }) => converted.abs().gte(LEAST[system])) ?? fitting.at(figure.isZero() ? 0 : -1);
   if (!chosen) return { text: shown, unit };
   const digits = chosen.to === degreeFahrenheit ? { decimals: 0 } : DIGITS;
   const text = shownText(chosen.converted, digits);

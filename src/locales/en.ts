@@ -204,7 +204,7 @@ export const en = {
     blend: 'Blend to {limit} %',
     blendWith: 'oil of {ffa} %',
     published: 'Published direct limits',
-    publishedRange: '0.5 to 5 %',
+    publishedRange: '0.5 to 5\u00a0%',
     publishedList: [
       'acid value below 1, about 0.5 % FFA: Wright et al. 1944; Freedman et al. 1984',
       'below 0.5 % FFA and 0.06 % water, tallow: Ma et al. 1998',
@@ -229,6 +229,7 @@ export const en = {
       oil: 'Oil, dry, not yet heated',
       'oil-direct': 'Oil, dry and warm, 55–65 °C',
       'pretreated-oil': 'Pretreated oil, upper layer drawn off',
+      cool: 'Oil of the pass before, layer drawn off: let it cool first.',
       methanol: 'Methanol {assay} %',
       'sulfuric-acid': 'Sulfuric acid {assay} %',
       catalyst: '{catalyst} {assay} %',
@@ -254,6 +255,7 @@ export const en = {
     mineral: 'of it {mass} for sulfuric acid left in the oil',
     perLitre: '{perLitre} g per litre of oil, {perKilogram} g per kg',
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
+    belowShown: 'below {least}',
     outcome: 'What to expect',
     waterOf: 'Water in the batch',
     soapOf: 'Soap',
@@ -317,4 +319,9 @@ type Widened<T> = T extends string ? string : T extends readonly (infer Item)[] 
 export function fill(text: string, params: Readonly<Record<string, string>>): string {
   // a per cent sign never stands alone at the start of a line
   return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole).replaceAll(' %', '\u00a0%');
+}
+
+/** The same with parts of a page put in: the words between them, and the parts, in order. */
+export function fillWith<Part>(text: string, parts: Readonly<Record<string, Part>>): readonly (string | Part)[] {
+  return text.split(/\{(\w+)\}/).map((piece, i) => (i % 2 ? (parts[piece] ?? `{${piece}}`) : piece));
 }

@@ -1,10 +1,14 @@
 import { css, html, nothing } from 'lit';
 import { state } from 'lit/decorators.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
-import { fill } from '../../locales/en.js';
+import type { Verdict } from '../../decision/route.js';
+import { fill, fillWith } from '../../locales/en.js';
 import { SectionElement } from '../parts/section.js';
 
 type RouteName = 'direct' | 'twoStep';
+
+/** What must be known for the steps to be shown. A retest that cannot be used yet takes none of its own fields away. */
+const FIRST_AMOUNT = { direct: 'direct.catalyst', twoStep: 'pass1.sulfuric' } as const;
 
 /** The figure that each typed basis of the acid step counts on. */
 const METHANOL_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
@@ -148,7 +152,8 @@ export class EsterwayCharge extends SectionElement {
       @media print {
         li,
         .care,
-        .gate {
+        .gate,
+        dl {
           break-inside: avoid;
         }
       }
@@ -157,6 +162,8 @@ export class EsterwayCharge extends SectionElement {
 
   /** The route looked at, where a person has chosen one; else the one recommended. */
   @state() private chosen: RouteName | undefined;
+  /** The lot and the verdict it was chosen for. */
+  #chosenFor = '';
 
   private get recommended(): RouteName {
     const route = this.lot?.route;
@@ -166,6 +173,13 @@ export class EsterwayCharge extends SectionElement {
 
   private get looked(): RouteName {
     return this.chosen ?? this.recommended;
+  }
+
+  /** A choice stands for one lot and one verdict. */
+  protected override willUpdate(): void {
+    const about = this.lot ? `${this.lot.route.verdict} ${this.desk.entry.name ?? ''}` : '';
+    if (about !== this.#chosenFor) this.chosen = undefined;
+    this.#chosenFor = about;
   }
 
   protected override get heading(): string {
@@ -187,10 +201,22 @@ export class EsterwayCharge extends SectionElement {
       <div class="choose no-print" role="radiogroup" aria-label=${texts.charge.choose}>
         ${this.radio('direct', texts.charge.direct)} ${this.radio('twoStep', texts.charge.twoStep)}
       </div>
-      ${this.looked === this.recommended || lot.route.verdict === 'not-known' ? nothing : html`<p class="gate small">${texts.charge.notThisRoute} ${texts.verdicts[lot.route.verdict]}.</p>`}
-      ${this.reading(`${this.looked}.catalyst`)?.value === undefined ? html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>` : nothing}
-      ${this.reagents()} ${steps.map((step) => this.step(step, steps))} ${this.outcome()}
+      ${this.gate(lot.route.verdict)} ${this.reagents()}
+      ${this.known(`${this.looked}.catalyst`) ? nothing : html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>`}
+      ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
     `;
+  }
+
+  /** A charge that is not what the verdict says stands under the verdict. */
+  private gate(verdict: Verdict): unknown {
+    const { texts, looked, recommended } = this;
+    const neither = verdict === 'outside' || verdict === 'no-acid-step';
+    if (!neither && (looked === recommended || verdict === 'not-known')) return nothing;
+    return html`<p class="gate small">${neither ? nothing : texts.charge.notThisRoute} ${texts.verdicts[verdict]}.</p>`;
+  }
+
+  private known(key: string): boolean {
+    return this.reading(key)?.value !== undefined;
   }
 
   /** What the charge is worked out with: the site's, unless this lot is charged otherwise. */
@@ -236,13 +262,13 @@ export class EsterwayCharge extends SectionElement {
     const weighed = step.lines.filter(({ what }) => what !== 'retest');
     const retest = step.lines.some(({ what }) => what === 'retest');
     return html`
-      <section part="step" aria-label=${title}>
+      <div part="step" role="group" aria-label=${title}>
         <h3>${title}${resting ? html` <span class="unit">${resting}</span>` : nothing}</h3>
         <ol>
           ${weighed.map((line) => this.line(line, step))}
         </ol>
         ${this.cautions(step)} ${retest ? this.retest() : nothing}
-      </section>
+      </div>
     `;
   }
 
@@ -305,13 +331,11 @@ export class EsterwayCharge extends SectionElement {
   private catalystParts(): unknown {
     const { charge } = this.texts;
     const { looked } = this;
-    const base = this.amountWords(`${looked}.baseProduct`);
-    const extra = this.amountWords(`${looked}.extraProduct`);
-    if (!base || !extra) return nothing;
     const mineral = Number(this.reading(`${looked}.mineralPure`)?.value ?? 0) > 0;
     const per = { perLitre: this.plain(`${looked}.catalystPerLitre`), perKilogram: this.plain(`${looked}.catalystPerKilogram`) };
-    return html`${fill(charge.parts, { base, extra })}
-    ${mineral ? html`<br />${fill(charge.mineral, { mass: this.amountWords(`${looked}.mineralProduct`) ?? '' })}` : nothing}
+    const parts = fillWith(charge.parts, { base: this.figure(`${looked}.baseProduct`), extra: this.figure(`${looked}.extraProduct`) });
+    return html`${parts}
+    ${mineral ? html`<br />${fillWith(charge.mineral, { mass: this.figure(`${looked}.mineralProduct`) })}` : nothing}
     <br />${fill(charge.perLitre, per)}`;
   }
 
@@ -333,10 +357,15 @@ export class EsterwayCharge extends SectionElement {
     return html`
       <div class="gate">
         <b>${charge.forRun.retest}</b>
-        ${low !== undefined && high !== undefined ? html`<p>${fill(charge.expected, { low: this.number(low), high: this.number(high) })}</p>` : nothing}
+        ${low !== undefined && high !== undefined ? html`<p>${fill(charge.expected, { low: this.smallShare(low), high: this.number(high) })}</p>` : nothing}
         <esterway-titration bare retest exportparts="figure, result"></esterway-titration>
       </div>
     `;
+  }
+
+  /** A share too small for its two decimals is not nothing. */
+  private smallShare(shown: string): string {
+    return /^0\.0+$/.test(shown) ? fill(this.texts.charge.belowShown, { least: this.number(shown.replace(/0$/, '1')) }) : this.number(shown);
   }
 
   private outcome(): unknown {

@@ -1,4 +1,5 @@
 import { css, html, nothing } from 'lit';
+import { live } from 'lit/directives/live.js';
 import { fieldStyles } from '../parts/field-styles.js';
 import { moveFocus } from '../parts/focus-order.js';
 import { SectionElement } from '../parts/section.js';
@@ -36,10 +37,11 @@ export class EsterwayLot extends SectionElement {
   ];
 
   protected override get heading(): string {
-    return this.desk.entry.name ?? this.texts.panel.untitled;
+    return (this.lot ? this.desk.entry.name : undefined) ?? this.texts.panel.untitled;
   }
 
   protected override get summary(): string {
+    if (!this.folded) return '';
     const { source, date } = this.desk.entry;
     const water = 'waterContent' in this.desk.entry.figures ? this.amountWords('waterContent') : undefined;
     return [source, date && this.dateWords(date), this.amountWords('oilMass'), water && `${this.texts.fields.waterContent} ${water}`]
@@ -78,6 +80,7 @@ export class EsterwayLot extends SectionElement {
     `;
   }
 
+  /** Live: a date half typed reads as empty, and what is typed of it stays. */
   private textField(key: 'name' | 'source' | 'date', label: string, type: 'text' | 'date' = 'text'): unknown {
     return html`<div class=${key === 'source' ? 'wide' : ''}>
       <label for=${key}>${label}</label>
@@ -89,7 +92,7 @@ export class EsterwayLot extends SectionElement {
           part="field-input"
           type=${type}
           autocomplete="off"
-          .value=${this.desk.entry[key] ?? ''}
+          .value=${live(this.desk.entry[key] ?? '')}
           @input=${(event: InputEvent) => this.edit({ kind: 'text', key, text: (event.target as HTMLInputElement).value })}
           @keydown=${this.onKeydown}
         />

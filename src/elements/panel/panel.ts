@@ -1,9 +1,10 @@
 import { css, html } from 'lit';
 import { query, state } from 'lit/decorators.js';
-import { fill } from '../../locales/en.js';
 import { nextLot } from '../../lot/edit.js';
+import { EMPTY_LOT } from '../../lot/entry.js';
 import { LotElement } from '../parts/base.js';
 import { EsterwayOpenEvent, EsterwayUndoEvent } from '../parts/events.js';
+import { faultsBox } from '../parts/faults.js';
 import { groupsFields } from '../parts/focus-order.js';
 import { buttons, boxes, tokens } from '../parts/styles.js';
 import type { EsterwayWorking } from '../working/working.js';
@@ -112,8 +113,8 @@ export class EsterwayPanel extends LotElement {
   protected override render(): unknown {
     const { texts, desk } = this;
     return html`
-      <div role="region" aria-label=${texts.panel.label}>
-        ${'faults' in desk.reading ? this.faults(desk.reading.faults) : this.sections()}
+      <div role="group" aria-label=${texts.panel.label}>
+        ${'faults' in desk.reading ? faultsBox(desk.reading, texts) : this.sections()}
         <p class="said no-print" role="status">${this.said}</p>
         <div class="actions no-print" part="actions">
           <button class="action main" part="action" type="button" @click=${this.onPrint}>${texts.panel.print}</button>
@@ -139,14 +140,6 @@ export class EsterwayPanel extends LotElement {
     `;
   }
 
-  private faults(faults: readonly { readonly code: string; readonly path: string; readonly found?: string }[]): unknown {
-    const words = this.texts.faults as Readonly<Record<string, string>>;
-    return html`<div class="gate fault" role="alert">
-      <b>${this.texts.faults.title}</b>
-      ${faults.map(({ code, path, found = '' }) => html`<p>${fill(words[code] ?? code, { path, found })}</p>`)}
-    </div>`;
-  }
-
   private readonly onOpen = (event: EsterwayOpenEvent): void => {
     const { working } = this;
     if (!working) return;
@@ -160,7 +153,8 @@ export class EsterwayPanel extends LotElement {
   }
 
   private onNewLot(): void {
-    this.edit({ kind: 'replace', entry: nextLot(this.desk.entry) });
+    const { entry, reading } = this.desk;
+    this.edit({ kind: 'replace', entry: 'faults' in reading ? EMPTY_LOT : nextLot(entry) });
     this.said = this.texts.panel.newLotDone;
   }
 

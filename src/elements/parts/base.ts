@@ -1,5 +1,4 @@
 import { ContextConsumer } from '@lit/context';
-import { LitElement } from 'lit';
 import { property } from 'lit/decorators.js';
 import type { UnitSystem } from '../../exchange/amount.js';
 import type { Edit } from '../../lot/edit.js';
@@ -10,13 +9,14 @@ import { EMPTY_DESK, deskContext } from './desk.js';
 import type { Desk } from './desk.js';
 import { DeskHolder } from './desk-holder.js';
 import { EsterwayEditEvent } from './events.js';
+import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
 
 /**
  * An element that shows part of a lot. It takes the lot from the holder around it (a site or a
  * panel); standing alone, it holds one of its own.
  */
-export abstract class LotElement extends LitElement {
+export abstract class LotElement extends GuestElement {
   readonly #language = new LanguageController(this);
   #own: DeskHolder | undefined;
   #outer: Desk | undefined;

@@ -18,6 +18,8 @@ export class DeskHolder implements ReactiveController {
   readonly #provider: ContextProvider<typeof deskContext>;
   #desk: Desk = EMPTY_DESK;
   #outer: Desk | undefined;
+  /** What the page set last. */
+  #initial: LotEntry = EMPTY_LOT;
   #past: LotEntry[] = [];
   /** Which field the last edit was of: typing on in one field is one step back. */
   #lastField = '';
@@ -46,7 +48,9 @@ export class DeskHolder implements ReactiveController {
 
   /** Sets the lot from the page's side: no change event, and steps back begin anew. */
   setEntry(entry: LotEntry): void {
+    this.#initial = entry;
     this.#past = [];
+    this.#lastField = '';
     this.#put(deskOf(entry, this.#desk.site, this.#desk.units));
   }
 
@@ -69,9 +73,9 @@ export class DeskHolder implements ReactiveController {
     this.#change(applyEdit(this.#desk.entry, edit));
   }
 
-  /** Begins anew with nothing typed; can be taken back. */
-  clear(): void {
-    this.edit({ kind: 'replace', entry: EMPTY_LOT });
+  /** Goes back to the lot that the page set; can be taken back. */
+  reset(): void {
+    this.edit({ kind: 'replace', entry: this.#initial });
   }
 
   /** Takes the last step back. */

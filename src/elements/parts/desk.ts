@@ -18,8 +18,15 @@ export interface Desk {
 /** By which the elements of one lot share it. A second copy of the code on the page has a context of its own. */
 export const deskContext = createContext<Desk>(Symbol('esterway-desk'));
 
-export const deskOf = (entry: LotEntry, site: SiteProfile, units: UnitSystem, canUndo = false): Desk => ({
-  entry, site, units, canUndo, reading: readLot(entry, site),
-});
+export function deskOf(entry: LotEntry, site: SiteProfile, units: UnitSystem, canUndo = false): Desk {
+  const reading = readLot(entry, site);
+  const rest = { reading, units, canUndo };
+  if ('faults' in reading) return { entry, site, ...rest };
+  return { entry: whole(EMPTY_LOT, entry), site: whole(EMPTY_SITE, site), ...rest };
+}
+
+/** Parts left out of a document count as empty. */
+const whole = <Document extends object>(empty: Document, given: Document): Document =>
+  Object.keys(empty).every((part) => part in given) ? given : { ...empty, ...given };
 
 export const EMPTY_DESK: Desk = deskOf(EMPTY_LOT, EMPTY_SITE, 'metric');

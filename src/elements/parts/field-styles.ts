@@ -57,7 +57,8 @@ export const fieldStyles = css`
   }
   select.unit {
     align-self: stretch;
-    max-inline-size: 5.5em;
+    max-inline-size: 5.2em;
+    field-sizing: content;
   }
   option {
     background: var(--_paper);

@@ -1,4 +1,4 @@
-import { LitElement, html, nothing } from 'lit';
+import { css, html, nothing } from 'lit';
 import type { PropertyValues } from 'lit';
 import { property, query, state } from 'lit/decorators.js';
 import { decimalMark, fieldText, showNumber } from '../../exchange/number-format.js';
@@ -7,6 +7,7 @@ import type { Figure } from '../../lot/figure.js';
 import type { Texts } from '../../locales/en.js';
 import { fieldStyles } from './field-styles.js';
 import { moveFocus } from './focus-order.js';
+import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
 import { tokens } from './styles.js';
 
@@ -30,8 +31,17 @@ export class FigurePasteEvent extends Event {
  * A figure with its unit, typed as text. Point and comma are both understood; a figure that could
  * mean two things is asked about. What was typed is never deleted.
  */
-export class FigureField extends LitElement {
-  static override styles = [tokens, fieldStyles];
+export class FigureField extends GuestElement {
+  static override styles = [
+    tokens,
+    fieldStyles,
+    css`
+      :host([cell]) input {
+        padding: 0;
+        font-size: 1em;
+      }
+    `,
+  ];
 
   /** Says what the figure is. */
   @property({ attribute: false }) label = '';

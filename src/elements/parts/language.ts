@@ -38,9 +38,20 @@ export class LanguageController implements ReactiveController {
   #look(): void {
     let tag = '';
     for (const element of ancestors(this.#host)) if (!tag) tag = element.getAttribute('lang') ?? '';
-    if ((tag || 'en') === this.#tag) return;
-    this.#tag = tag || 'en';
+    tag = usable(tag);
+    if (tag === this.#tag) return;
+    this.#tag = tag;
     this.#host.requestUpdate();
+  }
+}
+
+/** A tag that no format of the browser refuses: pages also write `de_DE` or `en-US@posix`. */
+function usable(tag: string): string {
+  try {
+    return Intl.getCanonicalLocales(tag.replaceAll('_', '-'))[0] ?? 'en';
+  } catch {
+    const language = /^[a-z]*/i.exec(tag)?.[0].toLowerCase() ?? '';
+    return Object.hasOwn(LANGUAGES, language) ? language : 'en';
   }
 }
 

@@ -1,7 +1,8 @@
-import { LitElement, html, nothing } from 'lit';
+import { html, nothing } from 'lit';
 import { property, query } from 'lit/decorators.js';
 import { fieldStyles } from './field-styles.js';
 import { moveFocus } from './focus-order.js';
+import { GuestElement } from './guest.js';
 import { tokens } from './styles.js';
 
 /** A person chose an option. */
@@ -13,7 +14,7 @@ export class OptionInputEvent extends Event {
 }
 
 /** One of a few named options. */
-export class OptionField extends LitElement {
+export class OptionField extends GuestElement {
   static override styles = [tokens, fieldStyles];
 
   @property({ attribute: false }) label = '';

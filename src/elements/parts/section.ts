@@ -11,6 +11,7 @@ import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { Figure } from '../../lot/figure.js';
 import { LotElement } from './base.js';
 import { EsterwayEditEvent, EsterwayOpenEvent } from './events.js';
+import { faultsBox } from './faults.js';
 import type { FigureInputEvent } from './figure-field.js';
 import { groupsFields } from './focus-order.js';
 import type { OptionInputEvent } from './option-field.js';
@@ -89,7 +90,7 @@ export abstract class SectionElement extends LotElement {
       }
       .fields {
         display: grid;
-        grid-template-columns: repeat(auto-fill, minmax(min(100%, 7.6em), 1fr));
+        grid-template-columns: repeat(auto-fill, minmax(min(100%, 8.6em), 1fr));
         gap: 8px 12px;
         align-items: start;
       }
@@ -155,16 +156,18 @@ export abstract class SectionElement extends LotElement {
   protected abstract body(): unknown;
 
   protected override render(): unknown {
+    const { reading } = this.desk;
+    const faults = 'faults' in reading ? reading : undefined;
     return html`
-      <section class="section" part="section" aria-labelledby="heading">
+      <div class="section" part="section" role="group" aria-labelledby="heading">
         <h2>
           <button class="fold" part="heading" type="button" aria-expanded=${this.folded ? 'false' : 'true'} aria-controls="body" @click=${this.onFold}>
             <span class="mark" aria-hidden="true">▾</span><b id="heading">${this.heading}</b>
-            <span class="summary">${this.summary}</span>
+            <span class="summary">${faults ? '' : this.summary}</span>
           </button>
         </h2>
-        <div class="body" id="body" part="body" ?hidden=${this.folded}>${this.body()}</div>
-      </section>
+        <div class="body" id="body" part="body" ?hidden=${this.folded}>${faults ? faultsBox(faults, this.texts) : this.body()}</div>
+      </div>
     `;
   }
 
@@ -252,8 +255,16 @@ export abstract class SectionElement extends LotElement {
     const reading = this.reading(key);
     const { result } = this.texts;
     if (reading?.problem) return fill(result.blocked, { field: this.fieldLabelIn(reading.problem.quantity) });
-    if (reading?.missing?.length) return fill(result.needs, { fields: reading.missing.map((field) => this.fieldLabelIn(field)).join(', ') });
+    if (reading?.missing?.length) return fill(result.needs, { fields: this.fieldList(reading.missing) });
     return result.notKnown;
+  }
+
+  /** Fields in words, in the order they are typed, the run named once: `run 1: sample, start, end`. */
+  private fieldList(fields: readonly string[]): string {
+    const order = (field: string): number => ['sample', 'start', 'end'].indexOf(field.split('.').at(-1) ?? '');
+    const names = [...fields].sort((a, b) => order(a) - order(b)).map((field) => this.fieldLabelIn(field));
+    const group = (name: string | undefined): string => name?.match(/^.*: /)?.[0] ?? '';
+    return names.map((name, i) => (group(name) && group(name) === group(names[i - 1]) ? name.slice(group(name).length) : name)).join(', ');
   }
 
   private fieldLabelIn(field: string): string {

@@ -27,15 +27,25 @@ export const tokens = css`
     color: var(--_ink);
     font: normal 400 var(--_size) / 1.4 var(--_font);
     font-variant-numeric: tabular-nums;
+    /* the languages spoken run from left to right; a page of the other direction would write kg 900 */
+    direction: ltr;
     letter-spacing: normal;
     word-spacing: normal;
     text-align: start;
     text-indent: 0;
     text-transform: none;
     text-shadow: none;
+    text-align-last: auto;
+    text-emphasis: none;
     white-space: normal;
+    word-break: normal;
+    line-break: auto;
+    overflow-wrap: normal;
+    hyphens: manual;
     cursor: auto;
-    visibility: visible;
+    caret-color: auto;
+    -webkit-text-fill-color: currentcolor;
+    -webkit-text-stroke: 0;
     -webkit-text-size-adjust: 100%;
     text-size-adjust: 100%;
   }

@@ -8,8 +8,8 @@ import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
 
 const LIMITS = ['directLimit', 'pretreatmentLimit', 'pretreatmentTarget', 'waterLimitBase', 'waterLimitAcid'];
 
-/** Shares in a sentence: two decimals, so that none looks equal to a limit that it misses. */
-const SHARE_DIGITS = { bands: [{ below: '10', decimals: 2 }, { decimals: 1 }] } as const;
+/** Shares in a sentence: two decimals, or more where one would look equal to a limit that it misses. */
+const SHARE_DIGITS = [{ bands: [{ below: '10', decimals: 2 }, { decimals: 1 }] }, { decimals: 2 }, { decimals: 3 }, { decimals: 4 }, { decimals: 6 }] as const;
 
 /**
  * The route of a lot: the verdict in one sentence with its reasons, beside it the burette scale with
@@ -126,7 +126,7 @@ export class EsterwayRoute extends SectionElement {
   }
 
   private reason({ code, params }: Reason): string {
-    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : (this.siteText(value) ?? this.share(value))] as const);
+    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : (this.siteText(value) ?? this.share(value, params['limit'] ?? params['target']))] as const);
     const water = this.reading('waterContent')?.shown;
     return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });
   }
@@ -138,8 +138,11 @@ export class EsterwayRoute extends SectionElement {
     return shown === undefined ? undefined : this.number(shown);
   }
 
-  private share(value: string): string {
-    return this.number(shownText(new Decimal(value), SHARE_DIGITS));
+  private share(value: string, limit: string | undefined): string {
+    const exact = new Decimal(value);
+    const texts = SHARE_DIGITS.map((digits) => shownText(exact, digits));
+    const apart = texts.find((text) => limit === undefined || !new Decimal(text).eq(limit));
+    return this.number(apart ?? texts[0] ?? value);
   }
 
   private scale(): unknown {

@@ -1,6 +1,5 @@
 import { css, html } from 'lit';
 import { LotElement } from '../parts/base.js';
-import { tokens } from '../parts/styles.js';
 
 /**
  * Holds the site profile and the lot for the elements inside it, so that several sections anywhere
@@ -15,14 +14,11 @@ import { tokens } from '../parts/styles.js';
  * @slot - the sections, or a panel, and anything else
  */
 export class EsterwaySite extends LotElement {
-  static override styles = [
-    tokens,
-    css`
-      :host {
-        display: contents;
-      }
-    `,
-  ];
+  static override styles = css`
+    :host {
+      display: contents;
+    }
+  `;
 
   protected override render(): unknown {
     return html`<slot></slot>`;

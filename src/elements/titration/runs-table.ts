@@ -1,10 +1,12 @@
 import { css, html, nothing } from 'lit';
 import type { CSSResult, ReactiveController, ReactiveControllerHost, TemplateResult } from 'lit';
-import { decimalMark } from '../../exchange/number-format.js';
+import { decimalMark, showNumber } from '../../exchange/number-format.js';
+import { readNumber } from '../../exchange/number-text.js';
 import { fill } from '../../locales/en.js';
 import type { Texts } from '../../locales/en.js';
 import type { CellEdit, Edit, RunCell, RunList } from '../../lot/edit.js';
 import type { RunEntry } from '../../lot/entry.js';
+import type { Figure } from '../../lot/figure.js';
 import { runState } from '../../lot/runs.js';
 import type { Desk } from '../parts/desk.js';
 import { FigureField, readFigureText } from '../parts/figure-field.js';
@@ -55,6 +57,15 @@ export class RunsTable implements ReactiveController {
       padding: 0 2px;
       text-align: end;
     }
+    @container (max-width: 290px) {
+      th,
+      td {
+        padding-inline: 1px;
+      }
+      th:last-child {
+        inline-size: 3.1em;
+      }
+    }
     .run {
       inline-size: 100%;
       min-block-size: var(--_target);
@@ -67,7 +78,7 @@ export class RunsTable implements ReactiveController {
     }
     tr.struck esterway-figure,
     tr.struck .figure {
-      opacity: 0.6;
+      opacity: 0.75;
       text-decoration: line-through;
     }
     td.said {
@@ -102,6 +113,8 @@ export class RunsTable implements ReactiveController {
   readonly #section: RunsTableHost;
   /** Which run's striking out is open. */
   #open: number | undefined;
+  /** The cell being typed in, `0.end`: what is wrong with it is said when it is left. */
+  #typing = '';
 
   constructor(host: ReactiveControllerHost & HTMLElement, section: RunsTableHost) {
     this.#host = host;
@@ -119,7 +132,7 @@ export class RunsTable implements ReactiveController {
     // one empty row at the end to type the next run in
     const rows = runs.length < MOST_RUNS ? [...runs, {}] : runs;
     return html`
-      <table @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }}>
+      <table @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }} @focusout=${this.#onLeave}>
         <caption class="unseen">
           ${list === 'runs' ? texts.runs.caption : texts.runs.ofRetest}
         </caption>
@@ -145,7 +158,8 @@ export class RunsTable implements ReactiveController {
     const key = `${list === 'runs' ? '' : 'retest.'}run${index + 1}`;
     const number = String(index + 1);
     const state = runState(run);
-    const problems = CELLS.map((cell) => this.#section.problemAt(`${key}.${cell}`)).filter((text) => text !== undefined);
+    const left = CELLS.filter((cell) => `${index}.${cell}` !== this.#typing);
+    const problems = left.map((cell) => this.#section.problemAt(`${key}.${cell}`)).filter((text) => text !== undefined);
     const open = this.#open === index;
     return html`
       <tr class=${state}>
@@ -165,7 +179,7 @@ export class RunsTable implements ReactiveController {
               .figure=${run[cell]}
               .units=${[cell === 'sample' ? sampleUnit : 'mL']}
               .problem=${this.#section.problemAt(`${key}.${cell}`)}
-              @figure-input=${(event: FigureInputEvent) => this.#put(list, [{ index, cell, figure: event.figure }])}
+              @figure-input=${(event: FigureInputEvent) => this.#onInput(event, list, index, cell)}
               @figure-paste=${(event: FigurePasteEvent) => this.#onPaste(event, list, index, cell, sampleUnit)}
             ></esterway-figure>
           </td>`,
@@ -175,7 +189,7 @@ export class RunsTable implements ReactiveController {
       ${problems.length || open || run.struck !== undefined
         ? html`<tr>
             <td class="said" colspan="5">
-              ${[...new Set(problems)].map((text) => html`<p class="problem">${text}</p>`)}
+              ${[...new Set(problems)].map((text) => html`<p class="problem">${text}</p>`)} ${left.map((cell) => this.#meanings(list, index, cell, run[cell]))}
               ${run.struck !== undefined ? html`<p class="quiet small">${fill(texts.runs.struck, { reason: run.struck })}</p>` : nothing}
               ${open ? this.#reasons(list, index) : nothing}
             </td>
@@ -208,6 +222,30 @@ export class RunsTable implements ReactiveController {
     this.#section.edit({ kind: 'strike', list, index, reason });
     this.#host.requestUpdate();
   }
+
+  /** For a figure that could mean two things: both, to choose from. */
+  #meanings(list: RunList, index: number, cell: RunCell, figure: Figure | undefined): unknown {
+    if (!figure || !('doubt' in figure)) return nothing;
+    const tag = this.#section.tag();
+    const read = readNumber(figure.typed, decimalMark(tag));
+    if (!('doubt' in read) || !read.readings) return nothing;
+    return html`<div class="strike">
+      ${read.readings.map(
+        (text) => html`<button class="action" type="button" @click=${() => this.#put(list, [{ index, cell, figure: { text, unit: figure.unit } }])}>${showNumber(text, tag)}</button>`,
+      )}
+    </div>`;
+  }
+
+  #onInput({ figure }: FigureInputEvent, list: RunList, index: number, cell: RunCell): void {
+    this.#typing = `${index}.${cell}`;
+    this.#put(list, [{ index, cell, figure }]);
+  }
+
+  readonly #onLeave = (): void => {
+    if (!this.#typing) return;
+    this.#typing = '';
+    this.#host.requestUpdate();
+  };
 
   #put(list: RunList, cells: readonly CellEdit[]): void {
     this.#section.edit({ kind: 'cells', list, cells });

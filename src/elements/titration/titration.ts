@@ -19,6 +19,7 @@ const TEMPERATURE_UNITS = { metric: ['°C', '°F'], us: ['°F', '°C'] } as cons
  * @attr {boolean} retest - the titration after the acid step, in place of that of the oil as it came
  * @attr {'metric' | 'us'} units - units in which amounts are shown
  * @attr {string} name - name of the form field
+ * @attr {boolean} required - makes the form field invalid until its value is known
  *
  * @fires {EsterwayChangeEvent} esterway-change - a person changed the lot (only where the element holds it itself)
  * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out
@@ -85,6 +86,7 @@ export class EsterwayTitration extends SectionElement {
 
   @property({ type: Boolean, reflect: true }) bare = false;
   @property({ type: Boolean, reflect: true }) retest = false;
+  @property({ type: Boolean, reflect: true }) required = false;
 
   readonly #internals: ElementInternals | undefined;
   readonly #table = new RunsTable(this, {
@@ -113,7 +115,7 @@ export class EsterwayTitration extends SectionElement {
   }
 
   formResetCallback(): void {
-    if (this.holdsLot) this.holder.clear();
+    if (this.holdsLot) this.holder.reset();
   }
 
   private get keyPrefix(): '' | 'retest.' {
@@ -137,7 +139,9 @@ export class EsterwayTitration extends SectionElement {
   }
 
   protected override render(): unknown {
-    return this.bare ? html`<div part="body">${this.body()}</div>` : super.render();
+    // a document that cannot be read is for the section around it to say
+    if (this.bare) return this.lot ? html`<div part="body">${this.body()}</div>` : nothing;
+    return super.render();
   }
 
   protected override body(): unknown {
@@ -226,7 +230,7 @@ export class EsterwayTitration extends SectionElement {
     const anchor = this.shadowRoot?.querySelector<HTMLElement>('esterway-figure');
     const problem = this.lot?.problems[0];
     if (problem) this.#internals?.setValidity({ customError: true }, this.problemText(problem), anchor ?? undefined);
-    else if (!this.value && this.hasAttribute('required')) this.#internals?.setValidity({ valueMissing: true }, this.whyUnknown(`${this.keyPrefix}acidValue`), anchor ?? undefined);
+    else if (!this.value && this.required) this.#internals?.setValidity({ valueMissing: true }, this.whyUnknown(`${this.keyPrefix}acidValue`), anchor ?? undefined);
     else this.#internals?.setValidity({});
   }
 }

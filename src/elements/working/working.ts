@@ -111,7 +111,7 @@ export class EsterwayWorking extends SectionElement {
         <option value="" ?selected=${!this.of}></option>
         ${guard([lot, this.of, texts], () => this.groups())}
       </select>
-      ${this.of in lot.readings ? this.opened() : html`<p class="small quiet">${texts.working.none}</p>`}
+      ${Object.hasOwn(lot.readings, this.of) ? this.opened() : html`<p class="small quiet">${texts.working.none}</p>`}
     `;
   }
 
@@ -146,7 +146,10 @@ export class EsterwayWorking extends SectionElement {
           : html`<p class="figures">${texts.working.given}: ${texts.working.givenFrom[reading?.from === 'formula' ? 'none' : (reading?.from ?? 'none')]}</p>`}
         <p class="outcome">= <b>${shown.result ?? this.whyUnknown(this.of)}</b></p>
         ${reading?.value !== undefined && reading.value.length > 10
-          ? html`<p class="small quiet full">${texts.working.fullValue}: ${this.number(reading.value)} ${reading.unit}</p>`
+          ? html`<details>
+              <summary>${texts.working.fullValue}</summary>
+              <p class="small quiet full">${this.number(reading.value)} ${reading.unit}</p>
+            </details>`
           : nothing}
         ${this.sources(shown)} ${this.rests(shown)}
       </div>

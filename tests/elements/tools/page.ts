@@ -2,6 +2,7 @@ import { fixture } from '@open-wc/testing';
 import type { LitElement, TemplateResult } from 'lit';
 import { cdp, userEvent } from 'vitest/browser';
 import '../../../src/define.js';
+import { plainSpaces } from './texts.js';
 
 // What tests of the elements do with a page: find, read, type and wait, through all shadow roots.
 
@@ -39,10 +40,16 @@ export function find<Tag extends keyof HTMLElementTagNameMap>(root: Element | Do
 
 type Field = HTMLInputElement | HTMLSelectElement;
 
-/** What a field is called: its label, else what is spoken. */
-export function nameOf(field: Element): string {
-  const label = (field as Field).labels?.[0]?.textContent ?? field.getAttribute('aria-label') ?? field.textContent;
-  return label.replace(/\s+/g, ' ').trim();
+/** What a control is called: its label, else what is spoken, else its words. */
+export function nameOf(control: Element): string {
+  const label = (control as Field).labels?.[0] ?? control;
+  const spoken = control.getAttribute('aria-label') ?? [...spokenTexts(label)].join('');
+  return plainSpaces(spoken);
+}
+
+function* spokenTexts(node: Node): Generator<string> {
+  if (node instanceof Text) yield node.data;
+  else if (!(node instanceof Element && node.matches('[aria-hidden=true], input, select'))) for (const child of node.childNodes) yield* spokenTexts(child);
 }
 
 /** Fields and buttons that are shown, in the order they are read. */
@@ -117,7 +124,7 @@ export async function paste(field: Element, text: string): Promise<boolean> {
 
 /** The text a person reads below a node: through shadow roots and slots, hidden parts left out, white space as one space. */
 export function words(root: Node): string {
-  return [...texts(root)].join('').replace(/[\s\u00a0]+/g, ' ').trim();
+  return plainSpaces([...texts(root)].join(''));
 }
 
 const INLINE = /^inline|^contents/;
@@ -125,9 +132,11 @@ const INLINE = /^inline|^contents/;
 function* texts(node: Node): Generator<string> {
   if (node instanceof Text) yield node.data;
   if (node instanceof Element) {
-    if (node.matches('style, script, option') || !node.checkVisibility({ visibilityProperty: true })) return;
-    if (node instanceof HTMLInputElement) return;
-    const block = !INLINE.test(getComputedStyle(node).display);
+    if (node.matches('style, script, option, input')) return;
+    const { display } = getComputedStyle(node);
+    // what has no box of its own can still show what is in it
+    if (display !== 'contents' && !node.checkVisibility({ visibilityProperty: true })) return;
+    const block = !INLINE.test(display);
     if (block) yield ' ';
     if (node instanceof HTMLSlotElement) for (const assigned of node.assignedNodes()) yield* texts(assigned);
     for (const child of (node.shadowRoot ?? node).childNodes) yield* texts(child);
@@ -143,4 +152,13 @@ export async function emulate(features: Readonly<Record<string, string>> = {}, m
     media,
     features: Object.entries(features).map(([name, value]) => ({ name, value })),
   });
+}
+
+/** What is said about a field: the text of what its `aria-describedby` names. */
+export function describedBy(field: Element): string {
+  const ids = field.getAttribute('aria-describedby')?.split(' ') ?? [];
+  const root = field.getRootNode() as ShadowRoot;
+  const said = ids.map((id) => root.getElementById(id)?.querySelector('p'));
+  // the sentence alone, without the buttons that may stand in it
+  return plainSpaces(said.flatMap((p) => [...(p?.childNodes ?? [])]).filter((node) => node instanceof Text).map(({ data }) => data).join(''));
 }
