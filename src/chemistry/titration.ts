@@ -14,6 +14,8 @@ export const sampleTakenBy = choice('sampleTakenBy', ['weighing', 'volume']);
 export const blankPolicy = choice('blankPolicy', ['solvent-neutralised', 'blank-subtracted']);
 export const titrantAlkali = choice('titrantAlkali', ['KOH', 'NaOH']);
 export const titrantSolvent = choice('titrantSolvent', ['alcoholic', 'aqueous']);
+/** Whether the temperature was read at the titration; without it volumes are taken as they are. */
+export const temperatureTaken = choice('temperatureTaken', ['no', 'yes']);
 /** Whether the strength is given in mol/L or in g/L; follows the unit typed. */
 export const titrantStrengthBy = choice('titrantStrengthBy', ['amount', 'mass']);
 
@@ -62,7 +64,10 @@ export const titrantExpansion = quantity({
 /** What a volume read at the titration's temperature would be at the temperature of standardisation. */
 export const volumeFactor = quantity({
   key: 'volumeFactor', symbol: 'f_t', unit: one, cites: [EN_14104_TEMPERATURE], digits: { decimals: 5 },
-  is: constant('1').minus(titrantExpansion.times(titrationTemperature.minus(standardisationTemperature))),
+  is: temperatureTaken.of({
+    no: constant('1'),
+    yes: constant('1').minus(titrantExpansion.times(titrationTemperature.minus(standardisationTemperature))),
+  }),
 });
 
 /** Titre of the solvent alone. */

@@ -42,7 +42,7 @@ export function twoStepCharge(passes: number): readonly ChargeStep[] {
         { what: 'settle' },
         ...(pass === passes ? [{ what: 'retest' } as const] : []),
       ],
-      cautions: pass === 1 ? ['methanol', 'acid-into-oil', 'closed-vessel', 'layers-are-hazardous'] : ['acid-into-oil', 'closed-vessel', 'layers-are-hazardous'],
+      cautions: ['methanol', 'acid-into-oil', 'closed-vessel', 'layers-are-hazardous'],
     };
   });
   return [...acidSteps, baseStep('twoStep', [{ what: 'pretreated-oil', mass: 'pretreated.mass' }])];

@@ -6,8 +6,12 @@ import type { Digits } from './quantity.js';
  * (ISO 80000-1, rule B). The full value is always kept beside it.
  */
 export function shownText(value: Decimal, digits: Digits): string {
-  return withoutLoneSign(roundedText(value, digits));
+  // the last of 34 digits hold what the steps before rounded away: 5.8499…98 is 5.85, and rounds up
+  return withoutLoneSign(roundedText(value.toSignificantDigits(TRUSTED, Decimal.ROUND_HALF_UP), digits));
 }
+
+/** Digits of a result that can be trusted. */
+const TRUSTED = 30;
 
 function roundedText(value: Decimal, digits: Digits): string {
   if ('significant' in digits) return significantText(value, digits.significant);

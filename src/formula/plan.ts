@@ -163,11 +163,11 @@ class Compiler {
         return this.alone(node.of, key, (value) => factor.scale(value));
       }
       case 'power':
-        return this.both(node.base, node.exponent, key, (base, exponent) => raise(base, exponent, key));
+        return this.both(node.base, node.exponent, key, remembered((base, exponent) => raise(base, exponent, key)));
       case 'exponential':
-        return this.alone(node.of, key, (value) => value.exp());
+        return this.alone(node.of, key, remembered((value) => value.exp()));
       case 'logarithm':
-        return this.alone(node.of, key, (value) => (value.gt(0) ? value.ln() : refuse('logarithm-of-nothing', key)));
+        return this.alone(node.of, key, remembered((value) => (value.gt(0) ? value.ln() : refuse('logarithm-of-nothing', key))));
       default:
         return this.both(node.left, node.right, key, operation(node.op, key));
     }
@@ -233,6 +233,23 @@ function operation(op: BinaryOp, key: string): (a: Decimal, b: Decimal) => Outco
     case 'greatest':
       return (a, b) => (b.gt(a) ? b : a);
   }
+}
+
+/** Results that are kept for each step of a formula: enough for typing on in one lot, and for a few settings in a long list. */
+const MOST_REMEMBERED = 64;
+
+/** Powers, exponentials and logarithms cost a hundred multiplications; the same figures come again with every key pressed. */
+function remembered<Args extends readonly Decimal[]>(compute: (...args: Args) => Outcome): (...args: Args) => Outcome {
+  const known = new Map<string, Outcome>();
+  return (...args) => {
+    const id = args.join('^');
+    let outcome = known.get(id);
+    if (!outcome) {
+      if (known.size >= MOST_REMEMBERED) known.clear();
+      known.set(id, (outcome = compute(...args)));
+    }
+    return outcome;
+  };
 }
 
 const HALF = new Decimal('0.5');

@@ -30,8 +30,6 @@ export class LotGivens implements Givens {
     if (typed) return readFigure(typed, unit, field);
     const standing = this.site.figures[field] ?? DEFAULT_FIGURES[field];
     if (standing) return readStanding(standing, unit, field);
-    // nobody has said otherwise: titrated at the temperature of standardisation
-    if (key === 'titrationTemperature') return this.input('standardisationTemperature');
     return new Missing([field]);
   }
 
@@ -39,6 +37,7 @@ export class LotGivens implements Givens {
     if (key === 'passes') {
       return passesNeeded((pass) => findings.outcome(`pass${pass}.ffaLeft.slow`), findings.outcome('pretreatmentTarget'));
     }
+    if (key === 'temperatureTaken') return 'titrationTemperature' in this.entry.figures || 'titrationTemperature' in this.site.figures ? 'yes' : 'no';
     if (key === 'baseStepAcidFrom') return this.hasRetest() ? 'retest' : 'estimate';
     const byUnit = OPTION_BY_UNIT[key];
     if (byUnit) {

@@ -40,7 +40,7 @@ export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; o
 };
 
 /** The choices that are decided on results, not typed. */
-const DECIDED: ReadonlySet<string> = new Set(['passes', 'baseStepAcidFrom', ...Object.keys(OPTION_BY_UNIT)]);
+const DECIDED: ReadonlySet<string> = new Set(['passes', 'baseStepAcidFrom', 'temperatureTaken', ...Object.keys(OPTION_BY_UNIT)]);
 
 /** Keys that an entry or a profile may hold. */
 export const KNOWN_KEYS: KnownKeys = knownKeys();

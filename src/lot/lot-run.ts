@@ -14,10 +14,10 @@ export interface LotRun {
   readonly findings: Findings;
 }
 
-/** Puts a lot's givens to the plan for the wanted quantities; all of them when none are named. */
+/** Puts a lot's givens to the plan for the wanted quantities; all of them when none are named, and those that no lot has left out. */
 export function lotRun(entry: LotEntry, site: SiteProfile, wanted?: readonly string[]): LotRun {
   const sheet = lotFormulas(runPlan(entry.runs), runPlan(entry.retestRuns));
-  const plan = planFor(sheet, wanted);
+  const plan = planFor(sheet, wanted?.filter((key) => sheet.quantities.has(key)));
   const givens = new LotGivens(sheet, entry, site);
   return { sheet, plan, givens, findings: plan.evaluate(givens) };
 }

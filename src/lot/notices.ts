@@ -1,7 +1,8 @@
 import { atOrBelow } from '../decision/compare.js';
 import { MOST_PASSES } from '../decision/passes.js';
 import { isKnown } from '../formula/reading.js';
-import type { LotEntry } from './entry.js';
+import type { RunCell } from './edit.js';
+import type { LotEntry, RunEntry } from './entry.js';
 import type { Notice } from './lot-reading.js';
 import type { LotRun } from './lot-run.js';
 import { runState } from './runs.js';
@@ -13,7 +14,7 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
     const states = entry.runs.map(runState);
     states.forEach((state, index) => {
       if (state === 'incomplete' && states.includes('counted')) {
-        notices.push({ code: 'run-incomplete', quantity: `run${index + 1}.end`, params: { run: String(index + 1) } });
+        notices.push({ code: 'run-incomplete', quantity: `run${index + 1}.${unfilled(entry.runs[index] ?? {})}`, params: { run: String(index + 1) } });
       }
     });
     if (states.filter((state) => state === 'counted').length === 1) notices.push({ code: 'one-run', quantity: 'acidValue' });
@@ -30,3 +31,6 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
   }
   return notices;
 }
+
+/** The first cell that a run still lacks. */
+const unfilled = (run: RunEntry): RunCell => (['sample', 'start', 'end'] as const).find((cell) => !run[cell]) ?? 'end';

@@ -19,7 +19,7 @@ import { runState } from './runs.js';
 
 /** What to read; everything when left out. */
 export interface ReadOptions {
-  /** Keys of the readings wanted; nothing else is computed but the route. For long lists of lots. */
+  /** Keys of the readings wanted; nothing else is computed but the route. For long lists of lots. A key this lot has no quantity for gives `unknown-quantity`. */
   readonly only?: readonly string[];
 }
 
@@ -109,11 +109,15 @@ const RESULTS = /^(?:(?:direct|twoStep|pretreated)\..*|acidValue|freeFattyAcid|a
 function readingsOf({ sheet, findings, givens }: LotRun, keys: readonly string[]): Record<string, ReadingJson> {
   const readings: Record<string, ReadingJson> = {};
   for (const key of keys) {
+    if (!sheet.quantities.has(key)) {
+      readings[key] = { symbol: '', unit: '', from: 'none', problem: { code: 'unknown-quantity', quantity: key } };
+      continue;
+    }
     const { symbol, unit, digits, is } = sheet.quantity(key);
     const outcome = findings.outcome(key);
     const from = is ? 'formula' : givens.origin(key);
     readings[key] = isKnown(outcome)
-      ? { symbol, unit: unit.symbol, from, value: outcome.toString(), shown: (is ? undefined : givens.written(key)) ?? shownText(outcome, digits) }
+      ? { symbol, unit: unit.symbol, from, value: outcome.toFixed(), shown: (is ? undefined : givens.written(key)) ?? shownText(outcome, digits) }
       : { symbol, unit: unit.symbol, from, ...unknownJson(outcome) };
   }
   return readings;

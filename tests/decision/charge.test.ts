@@ -18,7 +18,7 @@ describe('the order of a charge', () => {
   it('has oil and methanol before the sulfuric acid in the acid step', () => {
     const [first, second] = twoStepCharge(2);
     expect(order(first!)).toEqual(['oil', 'methanol', 'sulfuric-acid', 'settle']);
-    expect(order(second!)).toEqual(['methanol', 'sulfuric-acid', 'settle', 'retest']); // the oil is in the vessel
+    expect(order(second!)).toEqual(['cool', 'methanol', 'sulfuric-acid', 'settle', 'retest']); // the oil is in the vessel, still warm
     for (const step of [first!, second!]) expect(step.cautions).toContain('acid-into-oil');
   });
 

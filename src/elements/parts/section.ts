@@ -2,7 +2,7 @@ import { css, html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
 import { amountIn } from '../../exchange/amount.js';
-import { fieldText, showNumber } from '../../exchange/number-format.js';
+import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import type { Problem } from '../../formula/reading.js';
 import { fill } from '../../locales/en.js';
@@ -274,10 +274,6 @@ export abstract class SectionElement extends LotElement {
   /** Canonical decimal text in the page's language. */
   protected number(text: string): string {
     return showNumber(text, this.languageTag);
-  }
-
-  protected editable(text: string): string {
-    return fieldText(text, this.languageTag);
   }
 
   // -- figures --------------------------------------------------------------
