@@ -1,6 +1,5 @@
 import { html } from 'lit';
 import { expect, test } from 'vitest';
-import type { EsterwayPanel } from '../../src/index.js';
 import { find, focused, focusedName, place, press, words } from './tools/page.js';
 import { figure, run } from './tools/lots.js';
 import { de, en, fill } from './tools/texts.js';
@@ -26,7 +25,7 @@ const isIn = (element: Element) => () => {
 
 async function doTheJob(lang: 'en' | 'de', texts: Texts, decimals: (text: string) => string) {
   const page = await place(html`<div><button>before</button><esterway-panel lang=${lang}></esterway-panel></div>`);
-  const panel = find(page, 'esterway-panel') as EsterwayPanel;
+  const panel = find(page, 'esterway-panel');
   page.querySelector('button')!.focus();
   await until(isOn(texts.lot.name), '{Tab}');
   await press('HK-0417{Enter}');

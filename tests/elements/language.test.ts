@@ -1,6 +1,6 @@
 import { html } from 'lit';
 import { afterEach, describe, expect, test } from 'vitest';
-import type { EsterwayPanel, EsterwayTitration } from '../../src/index.js';
+import type { EsterwayPanel } from '../../src/index.js';
 import { click, controls, enter, find, input, nameOf, place, press, settled, words } from './tools/page.js';
 import { figure, sour } from './tools/lots.js';
 import { de, en } from './tools/texts.js';
@@ -40,7 +40,7 @@ describe('the language around it', () => {
     await speak(root, 'de');
     const outer = await place(html`<div lang="en"><div class="widget"></div></div>`);
     const widget = outer.querySelector('.widget')!.attachShadow({ mode: 'open' });
-    const titration = document.createElement('esterway-titration') as EsterwayTitration;
+    const titration = document.createElement('esterway-titration');
     titration.entry = sour;
     widget.append(titration);
     await settled();
