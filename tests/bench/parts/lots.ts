@@ -33,6 +33,7 @@ export function lots(count: number, most: number, seed = 7): LotEntry[] {
       figures: {
         oilAmount: figure(between(200, 2000, 0), 'kg'),
         titrantStrength: figure('0.1000', 'mol/L'),
+        titrationTemperature: figure('22', '°C'),
         waterContent: figure(between(0.03, 0.2, 2), '%'),
       },
       options: {},

@@ -67,7 +67,7 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const c = sig('titrantConcentration', given('titrantMolarity', F(text(typed.titrantStrength))));
   const titrantMolarMass = fix('titrantMolarMass', 3, M_KOH);
   const t0 = given('standardisationTemperature', SITE.standardisationTemperature);
-  const t = fix('titrationTemperature', 1, t0);
+  const t = given('titrationTemperature', F(text(typed.titrationTemperature)));
   const expansion = sig('titrantExpansion', ALCOHOLIC);
   const volumeFactor = fix('volumeFactor', 5, ONE.minus(expansion.times(t.minus(t0))));
   const blank = fix('correctedBlank', 3, ZERO);
