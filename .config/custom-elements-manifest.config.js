@@ -9,6 +9,17 @@ export default {
   packagejson: false,
   plugins: [
     {
+      // the analyzer takes the arguments of every dispatched event for events; only the documented ones are public
+      name: 'documented-events',
+      packageLinkPhase({ customElementsManifest }) {
+        for (const { declarations = [] } of customElementsManifest.modules) {
+          for (const declaration of declarations) {
+            declaration.events &&= declaration.events.filter(({ name, description }) => name && description);
+          }
+        }
+      },
+    },
+    {
       name: 'shipped-paths',
       packageLinkPhase({ customElementsManifest }) {
         const visit = (part) => {
