@@ -19,7 +19,6 @@ export const de: Texts = {
     print: 'Ansatz drucken',
     newLotDone: 'Neue Partie begonnen; Maßlösung und Methode bleiben. „Rückgängig“ holt die letzte zurück.',
     undone: 'Ein Schritt zurückgenommen.',
-    skipToRoute: 'Zum Verfahren',
   },
   lot: {
     name: 'Partie',
@@ -51,9 +50,6 @@ export const de: Texts = {
   },
   field: {
     unitOf: 'Einheit: {label}',
-    siteValue: 'Vorgabe {value}',
-    usual: 'Richtwert {value}',
-    which: 'Was ist gemeint?',
     more: 'Mehr',
     run: 'Bestimmung {run}',
     cellOf: 'Bestimmung {run}, {cell}',
@@ -218,14 +214,12 @@ export const de: Texts = {
     direct: 'Direkt',
     twoStep: 'Zweistufig',
     choose: 'Ansatz nach Verfahren',
-    recommended: 'das Verfahren oben',
     batch: '{mass} · {volume} bei {temperature}',
     acidStep: 'Veresterung',
     acidStepPass: 'Veresterung, Durchgang {pass} von {passes}',
     baseStep: 'Umesterung',
     onEstimate: 'nach vorsichtiger Schätzung',
     onRetest: 'nach Nachtitration',
-    total: 'gesamt',
     forRun: {
       oil: 'Öl, trocken, noch nicht erwärmt',
       'oil-direct': 'Öl, trocken und warm, 55–65 °C',
@@ -251,6 +245,7 @@ export const de: Texts = {
       'of-oil': '{share} % der Ölmasse, langsam ins Öl',
       'oil-volume': '{share} % des Ölvolumens, langsam ins Öl',
     },
+    methanolExceeds: 'Die Katalysatorlösung allein bringt {mass} Methanol, mehr als nötig: eine stärkere wählen.',
     methanolCredit: '{mass} Methanol der Lösung sind angerechnet',
     parts: 'Grundmenge {base} + Zuschlag {extra}',
     mineral: 'davon {mass} für Schwefelsäure im Öl',
@@ -265,7 +260,6 @@ export const de: Texts = {
     glycerolOf: 'Glycerin',
     retestTitle: 'Nachtitration nach der Veresterung',
     retestNone: 'Bis zur Nachtitration beruht die Umesterung auf dem vorsichtigen Ende der Schätzung.',
-    waiting: 'Für den Ansatz fehlen Ölmenge und Säuregehalt.',
     notThisRoute: 'Dies ist nicht das Verfahren, das sich hier für diese Partie ergibt.',
   },
   cautions: {

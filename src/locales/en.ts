@@ -18,7 +18,6 @@ export const en = {
     print: 'Print the charge',
     newLotDone: 'A new lot is begun; titrant and method stay. Undo brings the last one back.',
     undone: 'One step taken back.',
-    skipToRoute: 'To the route',
   },
   lot: {
     name: 'Lot',
@@ -50,9 +49,6 @@ export const en = {
   },
   field: {
     unitOf: 'Unit: {label}',
-    siteValue: 'site value {value}',
-    usual: 'usual value {value}',
-    which: 'Which one?',
     more: 'More',
     run: 'Run {run}',
     cellOf: 'Run {run}, {cell}',
@@ -217,14 +213,12 @@ export const en = {
     direct: 'Direct',
     twoStep: 'Two-step',
     choose: 'Charge by route',
-    recommended: 'the route above',
     batch: '{mass} · {volume} at {temperature}',
     acidStep: 'Acid step',
     acidStepPass: 'Acid step, pass {pass} of {passes}',
     baseStep: 'Base step',
     onEstimate: 'on the cautious estimate',
     onRetest: 'on the retest',
-    total: 'in all',
     forRun: {
       oil: 'Oil, dry, not yet heated',
       'oil-direct': 'Oil, dry and warm, 55–65 °C',
@@ -250,6 +244,7 @@ export const en = {
       'of-oil': '{share} % of the oil, slowly into the oil',
       'oil-volume': '{share} % of the oil’s volume, slowly into the oil',
     },
+    methanolExceeds: 'The catalyst solution alone brings {mass} methanol, more than is needed: choose a stronger one.',
     methanolCredit: '{mass} methanol of the solution is counted',
     parts: 'base {base} + extra {extra}',
     mineral: 'of it {mass} for sulfuric acid left in the oil',
@@ -264,7 +259,6 @@ export const en = {
     glycerolOf: 'Glycerol',
     retestTitle: 'Retest after the acid step',
     retestNone: 'Until it is titrated, the base step stands on the cautious end of the estimate.',
-    waiting: 'The charge needs the amount of oil and the acidity.',
     notThisRoute: 'This is not the route that follows for this lot.',
   },
   cautions: {

@@ -75,8 +75,14 @@ export class LotGivens implements Givens {
   /** Whether the oil was titrated again after the acid step, or a value for it was given. */
   hasRetest(): boolean {
     const { figures, retestRuns } = this.entry;
-    if (this.chosen('retest.acidKnownFrom') === 'titration') return retestRuns.some((run) => runState(run) === 'counted');
-    return 'retest.certificateAcidValue' in figures || 'retest.certificateFfa' in figures;
+    switch (this.chosen('retest.acidKnownFrom')) {
+      case 'certificate-acid-value':
+        return 'retest.certificateAcidValue' in figures;
+      case 'certificate-ffa':
+        return 'retest.certificateFfa' in figures;
+      default:
+        return retestRuns.some((run) => runState(run) === 'counted');
+    }
   }
 
   private blankTyped(): boolean {

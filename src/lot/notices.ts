@@ -1,5 +1,6 @@
 import { atOrBelow } from '../decision/compare.js';
 import { MOST_PASSES } from '../decision/passes.js';
+import type { Findings } from '../formula/plan.js';
 import { isKnown } from '../formula/reading.js';
 import type { RunCell } from './edit.js';
 import type { LotEntry, RunEntry } from './entry.js';
@@ -19,13 +20,8 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
     });
     if (states.filter((state) => state === 'counted').length === 1) notices.push({ code: 'one-run', quantity: 'acidValue' });
   }
-  if (passes === MOST_PASSES) {
-    const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
-    const target = findings.outcome('pretreatmentTarget');
-    if (isKnown(left) && isKnown(target) && !atOrBelow(left, target)) {
-      notices.push({ code: 'target-not-reached', quantity: 'pretreatmentTarget', params: { left: left.toString(), target: target.toString(), passes: String(passes) } });
-    }
-  }
+  const missed = missedTarget(findings, passes);
+  if (missed) notices.push({ code: 'target-not-reached', quantity: 'pretreatmentTarget', params: missed });
   if (givens.chosen('glyceridesBy') === 'profile' && givens.chosen('fat') === 'coconut' && givens.chosen('referenceAcid') !== 'lauric') {
     notices.push({ code: 'lauric-on-other-basis', quantity: 'referenceAcid' });
   }
@@ -34,3 +30,12 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
 
 /** The first cell that a run still lacks. */
 const unfilled = (run: RunEntry): RunCell => (['sample', 'start', 'end'] as const).find((cell) => !run[cell]) ?? 'end';
+
+/** What even the most passes are expected to leave, where that is above the target. */
+export function missedTarget(findings: Findings, passes: number | undefined): Readonly<Record<'left' | 'target' | 'passes', string>> | undefined {
+  if (passes !== MOST_PASSES) return undefined;
+  const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
+  const target = findings.outcome('pretreatmentTarget');
+  if (!isKnown(left) || !isKnown(target) || atOrBelow(left, target)) return undefined;
+  return { left: left.toString(), target: target.toString(), passes: String(passes) };
+}

@@ -1,6 +1,4 @@
 import { directCharge, twoStepCharge } from '../decision/charge.js';
-import { atOrBelow } from '../decision/compare.js';
-import { MOST_PASSES } from '../decision/passes.js';
 import { decideRoute } from '../decision/route.js';
 import type { Route } from '../decision/route.js';
 import { shownText } from '../formula/digits.js';
@@ -14,7 +12,7 @@ import { KNOWN_KEYS, fieldOf } from './keys.js';
 import type { LotFaults, LotReading, ReadingJson } from './lot-reading.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
-import { noticesOn } from './notices.js';
+import { missedTarget, noticesOn } from './notices.js';
 import { runState } from './runs.js';
 
 /** What to read; everything when left out. */
@@ -78,12 +76,8 @@ function routeOf({ findings, givens }: LotRun, entry: LotEntry): Route {
 
 /** A two-step route that three passes do not bring to the target says so among its reasons. */
 function withTarget(route: Route, { findings }: LotRun, passes: number | undefined): Route {
-  if (route.verdict !== 'two-step' || passes !== MOST_PASSES) return route;
-  const left = findings.outcome(`pass${MOST_PASSES}.ffaLeft.slow`);
-  const target = findings.outcome('pretreatmentTarget');
-  if (!isKnown(left) || !isKnown(target) || atOrBelow(left, target)) return route;
-  const params = { left: left.toString(), target: target.toString(), passes: String(passes) };
-  return { ...route, reasons: [...route.reasons, { code: 'pretreatment-misses-target', params }] };
+  const missed = route.verdict === 'two-step' ? missedTarget(findings, passes) : undefined;
+  return missed ? { ...route, reasons: [...route.reasons, { code: 'pretreatment-misses-target', params: missed }] } : route;
 }
 
 function passesOf({ findings }: LotRun): number | undefined {

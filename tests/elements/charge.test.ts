@@ -79,6 +79,12 @@ describe('a solution of the catalyst', () => {
     expect(methanol).toContain(fill(en.charge.methanolCredit, { mass: amount(clean, 'direct.methanolFromCatalyst', solution) }));
   });
 
+  test('too weak, it brings more methanol than is needed, and the charge says so', async () => {
+    const weak = site({ options: { catalyst: 'NaOCH3-solution' }, figures: { 'NaOCH3-solution.assay': { text: '1', unit: '%' } } });
+    const [, methanol] = lines(steps(await placeCharge(clean, weak))[0]);
+    expect(methanol).toContain(fill(en.charge.methanolExceeds, { mass: amount(clean, 'direct.methanolFromCatalyst', weak) }));
+  });
+
   test('can be chosen for one lot', async () => {
     const element = await placeCharge(clean);
     await click(controls(element).find((control) => control.localName === 'summary')!);

@@ -258,6 +258,11 @@ describe('a titration after the acid step', () => {
     }
   });
 
+  it('rests on the estimate while the chosen kind of certificate has no figure, whatever another one says', () => {
+    const reading = read(certified('20', { figures: { 'retest.certificateAcidValue': '1.0 mg/g' }, options: { 'retest.acidKnownFrom': 'certificate-ffa' } }));
+    expect(numberIn(reading, 'twoStep.acid')).toBe(numberIn(read(certified('20')), 'pretreated.acidLeft'));
+  });
+
   it('may be known from a certificate', () => {
     const reading = read(certified('20', { figures: { 'retest.certificateFfa': '0.50 %' }, options: { 'retest.acidKnownFrom': 'certificate-ffa' } }));
     expect(numberIn(reading, 'twoStep.acid') / numberIn(reading, 'pretreated.mass')).toBeCloseTo(5 / 282, 12);

@@ -199,9 +199,11 @@ export class EsterwayCharge extends SectionElement {
     const { charge } = this.texts;
     if (what === 'catalyst') return this.catalystParts();
     if (what === 'methanol' && step.step === 'base') {
-      const credit = Number(this.reading(`${this.looked}.methanolFromCatalyst`)?.value ?? 0) > 0;
+      const brought = `${this.looked}.methanolFromCatalyst`;
+      const credit = Number(this.reading(brought)?.value ?? 0) > 0;
+      const enough = Number(this.reading(`${this.looked}.methanol`)?.value ?? 1) === 0;
       return html`${fill(charge.methanolBasis.base, { ratio: this.plain('methanolRatio') })}
-      ${credit ? html`<br />${fill(charge.methanolCredit, { mass: this.amountWords(`${this.looked}.methanolFromCatalyst`) ?? '' })}` : nothing}`;
+      ${credit ? html`<br />${fill(enough ? charge.methanolExceeds : charge.methanolCredit, { mass: this.amountWords(brought) ?? '' })}` : nothing}`;
     }
     if (what === 'methanol') {
       const basis = this.option('pretreatmentMethanolBasis') as keyof typeof charge.methanolBasis;

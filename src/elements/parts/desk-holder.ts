@@ -1,5 +1,5 @@
 import { ContextProvider } from '@lit/context';
-import type { ReactiveController, ReactiveControllerHost } from 'lit';
+import type { ReactiveControllerHost } from 'lit';
 import type { UnitSystem } from '../../exchange/amount.js';
 import { applyEdit, applySiteEdit } from '../../lot/edit.js';
 import type { Edit } from '../../lot/edit.js';
@@ -13,7 +13,7 @@ import { EsterwayChangeEvent, EsterwayEditEvent, EsterwaySiteChangeEvent, Esterw
 const MOST_STEPS = 200;
 
 /** Holds a lot for an element and all below it: takes their edits, reads the lot anew, hands it down. */
-export class DeskHolder implements ReactiveController {
+export class DeskHolder {
   readonly #host: ReactiveControllerHost & HTMLElement;
   readonly #provider: ContextProvider<typeof deskContext>;
   #desk: Desk = EMPTY_DESK;
@@ -27,13 +27,8 @@ export class DeskHolder implements ReactiveController {
   constructor(host: ReactiveControllerHost & HTMLElement) {
     this.#host = host;
     this.#provider = new ContextProvider(host, { context: deskContext, initialValue: this.#desk });
-    host.addController(this);
     host.addEventListener(EsterwayEditEvent.type, this.#onEdit);
     host.addEventListener(EsterwayUndoEvent.type, this.#onUndo);
-  }
-
-  hostConnected(): void {
-    // nothing to prepare: the provider answers by itself
   }
 
   /** Steps back behind a holder further out: hands its lot down and lets edits pass. Undefined ends it. */
