@@ -80,7 +80,7 @@ describe('a solution of the catalyst', () => {
   });
 
   test('too weak, it brings more methanol than is needed, and the charge says so', async () => {
-    const weak = site({ options: { catalyst: 'NaOCH3-solution' }, figures: { 'NaOCH3-solution.assay': { text: '1', unit: '%' } } });
+    const weak = site({ options: { catalyst: 'NaOCH3-solution' }, figures: { 'NaOCH3-solution.assay': '1 %' } });
     const [, methanol] = lines(steps(await placeCharge(clean, weak))[0]);
     expect(methanol).toContain(fill(en.charge.methanolExceeds, { mass: amount(clean, 'direct.methanolFromCatalyst', weak) }));
   });
