@@ -38,6 +38,8 @@ export function balancedUnit(expression: Expression, unitOf: UnitOf): Unit {
       return one;
     case 'choice':
       return Object.values(node.cases).map(unit).reduce((a, b) => same(a, b, `choice by ${node.by}`));
+    case 'median':
+      return node.all.map(unit).reduce((a, b) => same(a, b, 'median'));
     case 'threshold':
       same(unit(node.left), unit(node.right), 'threshold');
       return same(unit(node.below), unit(node.otherwise), 'threshold');

@@ -7,7 +7,7 @@ import type { Sheet } from './sheet.js';
 export type AddressOf = (key: string) => string;
 
 const SIGNS = {
-  plus: '+', minus: '-', times: '*', per: '/', least: 'MIN', greatest: 'MAX', exponential: 'EXP', logarithm: 'LN', separator: ',',
+  plus: '+', minus: '-', times: '*', per: '/', least: 'MIN', greatest: 'MAX', exponential: 'EXP', logarithm: 'LN', median: 'MEDIAN', separator: ',',
 } as const;
 
 /**

@@ -1,6 +1,7 @@
 import { conversionFactor } from './balance.js';
 import { Decimal } from './decimal.js';
 import type { BinaryOp, Expression, NodeOf } from './expression.js';
+import { middlePlaces } from './median.js';
 import type { Findings, Plan } from './plan.js';
 import { Refused, isKnown } from './reading.js';
 import type { Unknown } from './reading.js';
@@ -17,21 +18,31 @@ import { branch, valueOf } from './trace.js';
  *   `no-slope` where the formula has a kink or a pole
  */
 export function sensitivities(plan: Plan, findings: Findings, key: string): ReadonlyMap<string, Decimal> | Unknown {
+  const all = slopes(plan, findings, key);
+  if (!(all instanceof Map)) return all;
+  return new Map([...(all as ReadonlyMap<string, Decimal>)].filter(([at]) => !plan.sheet.quantity(at).is));
+}
+
+/**
+ * The same for every quantity on the way, inputs and results alike: how much `key` moves with an
+ * error that is added to the value of each.
+ */
+export function slopes(plan: Plan, findings: Findings, key: string): ReadonlyMap<string, Decimal> | Unknown {
   const value = findings.outcome(key);
   if (!isKnown(value)) return value;
   const walker = new Adjoints(plan.sheet, findings);
   walker.add(key, ONE);
-  const inputs = new Map<string, Decimal>();
+  const found = new Map<string, Decimal>();
   for (let i = plan.order.length - 1; i >= 0; i--) {
     const at = plan.order[i]!;
     const adjoint = walker.of(at);
     if (!adjoint) continue;
+    found.set(at, adjoint);
     const { is } = plan.sheet.quantity(at);
     if (is) walker.spread(is, adjoint);
-    else inputs.set(at, adjoint);
   }
-  const finite = [...inputs.values()].every((slope) => slope.isFinite());
-  return finite ? inputs : new Refused({ code: 'no-slope', quantity: key });
+  const finite = [...found.values()].every((slope) => slope.isFinite());
+  return finite ? found : new Refused({ code: 'no-slope', quantity: key });
 }
 
 /** Derivative of one quantity with respect to one input; zero when it does not rest on it. */
@@ -81,6 +92,8 @@ class Adjoints {
         return this.spread(node.of, adjoint.div(this.value(node.of)));
       case 'power':
         return this.power(node, adjoint);
+      case 'median':
+        return this.median(node, adjoint);
       default:
         return this.binary(node, adjoint);
     }
@@ -109,6 +122,13 @@ class Adjoints {
         return this.spread(rightTaken ? node.right : node.left, adjoint);
       }
     }
+  }
+
+  /** Only those in the middle move it. */
+  private median({ all }: NodeOf<'median'>, adjoint: Decimal): void {
+    const sorted = all.map((part) => ({ part, value: this.value(part) })).sort((a, b) => a.value.cmp(b.value));
+    const middle = middlePlaces(all.length);
+    for (const place of middle) this.spread(sorted[place]!.part, adjoint.div(middle.length));
   }
 
   private power(node: NodeOf<'power'>, adjoint: Decimal): void {

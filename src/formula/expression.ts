@@ -30,6 +30,7 @@ export type Node =
       readonly below: Expression;
       readonly otherwise: Expression;
     }
+  | { readonly op: 'median'; readonly all: readonly Expression[] }
   | { readonly op: 'converted'; readonly of: Expression; readonly unit: Unit };
 
 /** The kind of {@link Node} with the given `op`. */
@@ -83,6 +84,9 @@ export const exponential = (of: Operand): Expression => new Expression({ op: 'ex
 /** The natural logarithm. */
 export const logarithm = (of: Operand): Expression => new Expression({ op: 'logarithm', of: operand(of) });
 
+/** The middle one of all, or the mean of the middle two. */
+export const median = (all: readonly Operand[]): Expression => new Expression({ op: 'median', all: all.map(operand) });
+
 /** `below` where `left < right`, else `otherwise`. */
 export function whereBelow(left: Operand, right: Operand, below: Operand, otherwise: Operand): Expression {
   return new Expression({
@@ -120,6 +124,8 @@ export function parts(node: Node): readonly Expression[] {
       return [node.of];
     case 'choice':
       return Object.values(node.cases);
+    case 'median':
+      return node.all;
     case 'threshold':
       return [node.left, node.right, node.below, node.otherwise];
     default:

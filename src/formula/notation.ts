@@ -20,6 +20,7 @@ export interface Notation<Out> {
   binary(op: BinaryOp, left: Printed<Out>, right: Printed<Out>): Printed<Out>;
   power(base: Printed<Out>, exponent: Printed<Out>): Printed<Out>;
   call(name: 'exponential' | 'logarithm', of: Printed<Out>): Printed<Out>;
+  median(all: readonly Printed<Out>[]): Printed<Out>;
   /** A change of unit by an exact factor. */
   converted(of: Printed<Out>, factor: Rational, unit: Unit): Printed<Out>;
   /** Called only where {@link branch} does not settle it. */
@@ -43,6 +44,8 @@ export function write<Out>(expression: Expression, sheet: Sheet, notation: Notat
     case 'exponential':
     case 'logarithm':
       return notation.call(node.op, printed(node.of));
+    case 'median':
+      return notation.median(node.all.map(printed));
     case 'converted':
       return notation.converted(printed(node.of), conversionFactor(node, sheet.unitOf), node.unit);
     case 'choice': {
@@ -70,6 +73,7 @@ export interface Signs {
   readonly greatest: string;
   readonly exponential: string;
   readonly logarithm: string;
+  readonly median: string;
   /** Between the arguments of a function. */
   readonly separator: string;
 }
@@ -109,6 +113,10 @@ export abstract class InfixNotation implements Notation<string> {
 
   call(name: 'exponential' | 'logarithm', of: Printed<string>): Printed<string> {
     return this.function(this.signs[name], of);
+  }
+
+  median(all: readonly Printed<string>[]): Printed<string> {
+    return this.function(this.signs.median, ...all);
   }
 
   converted(of: Printed<string>, factor: Rational, unit: Unit): Printed<string> {

@@ -1,6 +1,7 @@
 import { conversionFactor } from './balance.js';
 import { Decimal } from './decimal.js';
 import type { BinaryOp, Expression, NodeOf } from './expression.js';
+import { medianOf } from './median.js';
 import { Quantity, keeps } from './quantity.js';
 import type { Limit } from './quantity.js';
 import { Refused, isKnown, joinUnknown } from './reading.js';
@@ -158,6 +159,8 @@ class Compiler {
         return this.choice(node, key);
       case 'threshold':
         return this.threshold(node, key);
+      case 'median':
+        return this.median(node.all, key);
       case 'converted': {
         const factor = conversionFactor(node, this.sheet.unitOf);
         return this.alone(node.of, key, (value) => factor.scale(value));
@@ -180,6 +183,15 @@ class Compiler {
       const a = first(run);
       const b = second(run);
       return isKnown(a) && isKnown(b) ? finite(combine(a, b), key) : joinUnknown(a, b);
+    };
+  }
+
+  private median(all: readonly Expression[], key: string): Step {
+    const steps = all.map((part) => this.step(part, key));
+    return (run) => {
+      const values = steps.map((step) => step(run));
+      const unknown = values.find((value) => value instanceof Refused) ?? values.find((value) => !isKnown(value));
+      return unknown ? values.reduce(joinUnknown, unknown) : finite(medianOf(values as Decimal[]), key);
     };
   }
 

@@ -2,6 +2,7 @@ import { conversionFactor } from './balance.js';
 import { Decimal } from './decimal.js';
 import type { Expression, NodeOf } from './expression.js';
 import type { Findings } from './plan.js';
+import { medianOf } from './median.js';
 import { isKnown } from './reading.js';
 import type { Sheet } from './sheet.js';
 
@@ -42,6 +43,8 @@ function computed(expression: Expression, sheet: Sheet, findings: Findings): Dec
       return Decimal.min(value(node.left), value(node.right));
     case 'greatest':
       return Decimal.max(value(node.left), value(node.right));
+    case 'median':
+      return medianOf(node.all.map(value));
     case 'power':
       return value(node.base).pow(value(node.exponent));
     case 'exponential':

@@ -28,6 +28,8 @@ export const millimole = mole.scaled('0.001', 'mmol');
 const second = base('time', 's');
 export const minute = second.scaled('60', 'min');
 export const hour = minute.scaled('60', 'h');
+/** For the age of a solution. */
+export const day = hour.scaled('24', 'd');
 export const perMinute = one.per(minute, '/min');
 
 export const kelvin = base('temperature', 'K');
@@ -59,7 +61,7 @@ export const kilogramPerKilogram = kilogram.per(kilogram);
 export const TYPED_UNITS: ReadonlyMap<string, Unit> = new Map(
   [
     one, percent, milligramPerKilogram, kilogram, gram, milligram, tonne, pound, litre, millilitre, gallonUS,
-    cubicMetre, minute, hour, degreeCelsius, degreeFahrenheit, molePerLitre, gramPerLitre, gramPerMole,
+    cubicMetre, minute, hour, day, kelvin, degreeCelsius, degreeFahrenheit, molePerLitre, gramPerLitre, gramPerMole,
     gramPerMillilitre, kilogramPerCubicMetre, milligramPerGram, gramPerHundredGram, molePerMole,
     kilogramPerKilogram, perDegree, perMinute, joulePerMole, kilogramPerCubicMetreDegree, gramPerMillilitreDegree,
   ].map((unit) => [unit.symbol, unit]),

@@ -99,6 +99,10 @@ class WorkingMath implements Notation<MathNode> {
     return this.function(FUNCTIONS[name], of);
   }
 
+  median(all: readonly Part[]): Part {
+    return this.function('median', ...all);
+  }
+
   converted(of: Part, factor: Rational, unit: Unit): Part {
     const atom = (value: bigint): Part => figurePart(factorText(value, unit, this.withFigures, this.figure));
     const up = factor.over === 1n ? of : this.binary('product', of, atom(factor.over));

@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Expression, constant, exponential, greatest, least, logarithm, whereBelow } from '../../src/formula/expression.js';
+import { Expression, constant, exponential, greatest, least, logarithm, median, whereBelow } from '../../src/formula/expression.js';
 import type { Choice} from '../../src/formula/quantity.js';
 import { Quantity, choice, quantity } from '../../src/formula/quantity.js';
 import type { Unit } from '../../src/formula/unit.js';
@@ -25,7 +25,7 @@ interface Branch {
 
 const PAIRED = ['sum', 'difference', 'product', 'quotient', 'least', 'greatest', 'whole power', 'root', 'broken power'] as const;
 const SINGLE = ['exponential', 'logarithm', 'converted'] as const;
-type Op = (typeof PAIRED)[number] | (typeof SINGLE)[number] | 'choice' | 'threshold';
+type Op = (typeof PAIRED)[number] | (typeof SINGLE)[number] | 'choice' | 'threshold' | 'median';
 
 const pick = fc.nat({ max: 1023 });
 const leaf: fc.Arbitrary<Leaf> = fc.record({
@@ -48,6 +48,7 @@ const { shape } = fc.letrec<{ shape: Shape }>((tie) => {
       { arbitrary: branch(fc.constantFrom(...SINGLE), 1), weight: 3 },
       { arbitrary: branch(fc.constant('choice'), 2, 3), weight: 1 },
       { arbitrary: branch(fc.constant('threshold'), 4), weight: 1 },
+      { arbitrary: branch(fc.constant('median'), 1, 5), weight: 1 },
     ),
   };
 });
@@ -157,6 +158,8 @@ class Grower implements RandomSheet {
         const by = this.#choices[pick % 2]!;
         return (by as Choice).of(Object.fromEntries(by.options.map((option, at) => [option, part(at, unit)])));
       }
+      case 'median':
+        return median(parts.map((_, at) => part(at, unit)));
       case 'threshold':
         return whereBelow(part(0, base, 'any'), part(1, base, 'any'), part(2, unit), part(3, unit));
     }
@@ -248,6 +251,8 @@ export function withLeaf(expression: Expression, at: number, exchange: (leaf: Ex
         return new Expression({ ...node, base: change(node.base), exponent: change(node.exponent) });
       case 'choice':
         return new Expression({ ...node, cases: Object.fromEntries(Object.entries(node.cases).map(([option, of]) => [option, change(of)])) });
+      case 'median':
+        return new Expression({ ...node, all: node.all.map(change) });
       case 'threshold':
         return new Expression({ ...node, left: change(node.left), right: change(node.right), below: change(node.below), otherwise: change(node.otherwise) });
       default:

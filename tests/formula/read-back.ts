@@ -29,6 +29,7 @@ math.import({
   LN: (of: BigNumber) => math.log(of),
   MIN: (...all: BigNumber[]) => math.min(...all),
   MAX: (...all: BigNumber[]) => math.max(...all),
+  MEDIAN: (...all: BigNumber[]) => math.median(...all),
   ln: (of: BigNumber) => math.log(of),
 });
 
@@ -122,6 +123,7 @@ class Reader {
     if (token === 'ln') return this.inBrackets(true)[0]!.ln();
     if (token === 'min') return Wide.min(...this.inBrackets(true));
     if (token === 'max') return Wide.max(...this.inBrackets(true));
+    if (token === 'median') return new Wide(math.median(...this.inBrackets(true).map((value) => math.bignumber(value.toString()))).toString());
     const value = typeof token === 'string' ? this.names[token] : undefined;
     if (!value) throw new SyntaxError(`not a figure: ${String(token)}`);
     return value;

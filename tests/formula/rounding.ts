@@ -61,6 +61,17 @@ export class RoundingOf {
         const tied = left.error + right.error > 0 && corner < 1e-12;
         return { ...taken, error: tied ? Infinity : taken.error, corner: Math.min(corner, left.corner, right.corner, taken.corner) };
       }
+      case 'median': {
+        const all = node.all.map((part) => this.of(part)).sort((a, b) => a.value - b.value);
+        const middle = all.slice(Math.ceil(all.length / 2) - 1, Math.floor(all.length / 2) + 1);
+        const near = all.slice(1).map((part, i) => apart(all[i]!, part));
+        const mean = middle.reduce((sum, part) => added(sum.value + part.value, sum, part));
+        // a figure beside the middle could take its place by its own rounding
+        const close = all.filter((part) => part.error === Infinity || middle.some((one) => apart(one, part) < 1e-12));
+        const error = Math.max(...close.map((part) => part.error)) + mean.error / middle.length;
+        const value = mean.value / middle.length;
+        return { value, error: Number.isFinite(error) ? error + ROUND * Math.abs(value) : error, corner: Math.min(...near, ...all.map(({ corner }) => corner)) };
+      }
       case 'exponential': {
         const of = this.of(node.of);
         const value = Math.exp(of.value);
