@@ -43,7 +43,7 @@ export const greatestAcidContent = quantity({
 });
 
 /** Molar mass of KOH as the methods print it; used for acid values, never for a dose. */
-const METHOD_KOH = constant('56.1', gramPerMole, { source: ISO_660 });
+export const METHOD_KOH = constant('56.1', gramPerMole, { source: ISO_660 });
 
 /** Acid value from acid content: AV = 56.1 · b. 0.050 mmol/g is 2.805 mg/g. */
 export const acidValueOf = (acidContent: Expression): Expression => METHOD_KOH.times(acidContent);

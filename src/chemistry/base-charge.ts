@@ -7,7 +7,7 @@ import { acidMolarMass } from './acidity.js';
 import { catalyst, catalystAssay, catalystBaseLoad, catalystMolarMass, methanolInRest, soapGain, solutionDensity, waterInRest, waterPerCatalyst } from './catalyst.js';
 import type { Glycerides } from './glycerides.js';
 import { methanolAssay, methanolDensity, methanolRatio } from './methanol.js';
-import { oilMass, oilVolume } from './oil.js';
+import { oilDensity, oilMass, oilVolume } from './oil.js';
 import { PRACTICE, STOICHIOMETRY } from './sources.js';
 import { M_GLYCEROL, M_METHANOL, M_METHYLENE, M_WATER } from './substances.js';
 
@@ -76,6 +76,9 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   const methanol = make('methanol', 'm_MeOH', greatest(constant('0', kilogram), methanolNeeded.minus(methanolFromCatalyst).per(methanolAssay).in(kilogram)));
   const methanolVolume = make('methanolVolume', 'V_MeOH', methanol.per(methanolDensity).in(litre), { unit: litre });
 
+  const batchVolume = make('batchVolume', 'V_batch', feedMass.per(oilDensity).in(litre).plus(methanolVolume).plus(catalystVolume), { unit: litre });
+  // against what the methanol can dissolve, whether it comes with the catalyst or apart
+  const inMethanol = make('catalystInMethanol', 'γ_cat', basePure.plus(extraPure).per(methanolNeeded.per(methanolDensity)).in(gramPerLitre), { unit: gramPerLitre });
   const catalystAmount = make('catalystAmount', 'n_cat', basePure.plus(extraPure).per(catalystMolarMass).in(mole), { unit: mole });
   const waterMade = make('waterMade', 'm_H2O,made', catalystAmount.times(waterPerCatalyst).times(M_WATER).in(kilogram));
   const waterBrought = make('waterBrought', 'm_H2O,in',
@@ -98,6 +101,6 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   return [
     feedMass, acid, sulfuricAcid, basePure, acidPure, mineralPure, extraPure, baseProduct, extraProduct, mineralProduct, catalystProduct,
     catalystVolume, perLitre, perKilogram, glycerideAmount, methanolNeeded, methanolFromCatalyst, methanol, methanolVolume,
-    catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
+    batchVolume, inMethanol, catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
   ];
 }

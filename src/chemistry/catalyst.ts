@@ -2,8 +2,8 @@ import { constant } from '../formula/expression.js';
 import type { Expression } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Quantity } from '../formula/quantity.js';
-import { gramPerMillilitre, gramPerMole, one, percent } from '../formula/units.js';
-import { ATOMIC_WEIGHTS, PRACTICE, STOICHIOMETRY } from './sources.js';
+import { gramPerLitre, gramPerMillilitre, gramPerMole, one, percent } from '../formula/units.js';
+import { ATOMIC_WEIGHTS, METHANOL_SOLUBILITY, PRACTICE, STOICHIOMETRY } from './sources.js';
 import { M_HYDROGEN, M_KOCH3, M_KOH, M_NAOCH3, M_NAOH, M_POTASSIUM, M_SODIUM } from './substances.js';
 
 // The catalyst as it is bought: which alkali, how pure, what the rest is.
@@ -37,6 +37,13 @@ export const solutionDensity = perProduct(['KOCH3-solution', 'NaOCH3-solution'] 
     limits: [limit('atLeast', '0.7', 'out-of-range'), limit('atMost', '1.5', 'out-of-range')],
   }));
 
+/** How much of it a litre of methanol dissolves. */
+export const productSolubility = perProduct(['KOH', 'NaOH', 'KOCH3', 'NaOCH3'] as const, (product) =>
+  quantity({
+    key: `${product}.solubility`, symbol: 'γ_sat', unit: gramPerLitre, digits: { significant: 2 },
+    limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '1000', 'out-of-range')],
+  }));
+
 const byAlkali = (parts: { KOH: Expression; NaOH: Expression; KOCH3: Expression; NaOCH3: Expression }): Expression =>
   catalyst.of({ ...parts, 'KOCH3-solution': parts.KOCH3, 'NaOCH3-solution': parts.NaOCH3 });
 
@@ -53,6 +60,11 @@ export const catalystAssay = quantity({
 export const catalystBaseLoad = quantity({
   key: 'catalystBaseLoad', symbol: 'x', unit: percent, cites: [PRACTICE], digits: { decimals: 2 },
   is: catalyst.of(productBaseLoad),
+});
+
+export const catalystSolubility = quantity({
+  key: 'catalystSolubility', symbol: 'γ_sat', unit: gramPerLitre, cites: [METHANOL_SOLUBILITY], digits: { significant: 2 },
+  is: byAlkali(productSolubility),
 });
 
 const share = (percentText: string): Expression => constant(percentText, percent);

@@ -1,10 +1,10 @@
-import { named } from '../formula/expression.js';
-import type { Expression } from '../formula/expression.js';
+import { constant } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Choice, Quantity } from '../formula/quantity.js';
 import { gramPerLitre, millimolePerGram } from '../formula/units.js';
 import { acidValueLike, acidValueOf, freeFattyAcidLike, freeFattyAcidOf, fromAcidValue, fromFreeFattyAcid, greatestAcidContent } from './acidity.js';
-import { ISO_660, PRACTICE } from './sources.js';
+import { certificateTolerance, rectangular } from './equipment.js';
+import { GUM_SHAPES, ISO_660, PRACTICE } from './sources.js';
 import { sampleDensity, titrantMolarMass } from './titration.js';
 
 const SOURCES = ['titration', 'certificate-acid-value', 'certificate-ffa'] as const;
@@ -22,9 +22,9 @@ export interface Acidity {
  * rounded acid value or FFA, so that no method's constant enters a dose twice.
  *
  * @param prefix of the keys: empty for the lot as it came, `retest.` after pretreatment
- * @param mean acid content of the runs that count; undefined while there is none
+ * @param titrated acid content that the runs make
  */
-export function acidity(prefix: '' | 'retest.', mean: Expression | undefined): Acidity {
+export function acidity(prefix: '' | 'retest.', titrated: Quantity): Acidity {
   const from = choice(`${prefix}acidKnownFrom`, SOURCES);
   const certificateAcidValue = quantity({
     key: `${prefix}certificateAcidValue`, symbol: 'AV_cert', ...acidValueLike,
@@ -37,7 +37,7 @@ export function acidity(prefix: '' | 'retest.', mean: Expression | undefined): A
   const acidContent = quantity({
     key: `${prefix}acidContent`, symbol: prefix ? 'b_r' : 'b', unit: millimolePerGram, cites: [ISO_660],
     is: from.of({
-      titration: mean ?? named(`${prefix}run1.acidContent`),
+      titration: titrated,
       'certificate-acid-value': fromAcidValue(certificateAcidValue),
       'certificate-ffa': fromFreeFattyAcid(certificateFfa),
     }),
@@ -45,7 +45,12 @@ export function acidity(prefix: '' | 'retest.', mean: Expression | undefined): A
   });
   const acidValue = quantity({ key: `${prefix}acidValue`, symbol: prefix ? 'AV_r' : 'AV', ...acidValueLike, is: acidValueOf(acidContent) });
   const freeFattyAcid = quantity({ key: `${prefix}freeFattyAcid`, symbol: prefix ? 'FFA_r' : 'FFA', ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent) });
-  return { acidContent, acidValue, freeFattyAcid, all: [from, certificateAcidValue, certificateFfa, acidContent, acidValue, freeFattyAcid] };
+  const byCertificate = rectangular(acidContent.times(certificateTolerance).in(millimolePerGram));
+  const doubt = quantity({
+    key: `${prefix}u.certificate`, symbol: prefix ? 'u_cert,r' : 'u_cert', unit: millimolePerGram, cites: [GUM_SHAPES, PRACTICE], digits: { significant: 2 },
+    is: from.of({ titration: constant('0', millimolePerGram), 'certificate-acid-value': byCertificate, 'certificate-ffa': byCertificate }),
+  });
+  return { acidContent, acidValue, freeFattyAcid, all: [from, certificateAcidValue, certificateFfa, acidContent, acidValue, freeFattyAcid, doubt] };
 }
 
 /** The bench figure "grams of alkali per litre of oil": x mL of 1 g/L titrant a millilitre of oil is x g/L. */

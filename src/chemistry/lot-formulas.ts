@@ -1,5 +1,4 @@
 import { constant } from '../formula/expression.js';
-import type { Expression } from '../formula/expression.js';
 import { Choice, Quantity, quantity } from '../formula/quantity.js';
 import { Sheet } from '../formula/sheet.js';
 import { kilogram, mole } from '../formula/units.js';
@@ -13,8 +12,11 @@ import { acidity, alkaliPerLitreOfOil } from './lot-acidity.js';
 import * as methanol from './methanol.js';
 import * as oil from './oil.js';
 import * as pretreatment from './pretreatment.js';
-import { meanOf, titrationRun } from './run.js';
+import * as equipment from './equipment.js';
+import * as replicate from './replicates.js';
+import { titrationRun } from './run.js';
 import type { TitrationRun } from './run.js';
+import * as standard from './standardisation.js';
 import * as site from './site-limits.js';
 import { STOICHIOMETRY } from './sources.js';
 import * as titration from './titration.js';
@@ -25,16 +27,26 @@ export interface RunPlan {
   readonly counted: readonly number[];
 }
 
+/** The runs of the titrations that a lot rests on: of the oil as it came, after pretreatment, and of the titrant. */
+export interface LotRuns {
+  readonly lot: RunPlan;
+  readonly retest: RunPlan;
+  readonly titrant: RunPlan;
+}
+
+/** Which titration: that of the oil as it came, that after pretreatment, or the standardisation of the titrant. */
+export type RunPrefix = '' | 'retest.' | 'titrant.';
+
 /** Key of a quantity of a run: `run1.titre`, `retest.run2.buretteEnd`; runs count from 1. */
-export const runKey = (prefix: '' | 'retest.', index: number, name: string): string => `${prefix}run${index + 1}.${name}`;
+export const runKey = (prefix: RunPrefix, index: number, name: string): string => `${prefix}run${index + 1}.${name}`;
 
 /** Every formula of a lot with the given runs. The same runs give the same sheet, built once. */
-export function lotFormulas(lot: RunPlan, retest: RunPlan): Sheet {
-  const id = `${lot.runs}:${lot.counted.join()}|${retest.runs}:${retest.counted.join()}`;
+export function lotFormulas(of: LotRuns): Sheet {
+  const id = [of.lot, of.retest, of.titrant].map(({ runs, counted }) => `${runs}:${counted.join()}`).join('|');
   let sheet = sheets.get(id);
   if (!sheet) {
     if (sheets.size >= MOST_SHEETS) sheets.clear();
-    sheets.set(id, (sheet = build(lot, retest)));
+    sheets.set(id, (sheet = build(of)));
   }
   return sheet;
 }
@@ -43,11 +55,11 @@ const sheets = new Map<string, Sheet>();
 /** Far more combinations of runs than a site meets; a bound for pages that stay open for months. */
 const MOST_SHEETS = 64;
 
-function build(lot: RunPlan, retest: RunPlan): Sheet {
+function build({ lot, retest, titrant }: LotRuns): Sheet {
   const titrated = runsOf('', lot);
   const retitrated = runsOf('retest.', retest);
-  const asItCame = acidity('', titrated.mean);
-  const afterAcidStep = acidity('retest.', retitrated.mean);
+  const asItCame = acidity('', titrated.result);
+  const afterAcidStep = acidity('retest.', retitrated.result);
   const fats = glycerides(asItCame.acidContent);
 
   const acidAmount = quantity({
@@ -68,18 +80,30 @@ function build(lot: RunPlan, retest: RunPlan): Sheet {
 
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
-    ...members(esterification), ...members(pretreatment), ...members(site),
-    ...titrated.all, ...retitrated.all, ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
+    ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard),
+    ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
     ...direct, ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
   ]);
 }
 
-function runsOf(prefix: '' | 'retest.', plan: RunPlan): { mean: Expression | undefined; all: Quantity[] } {
-  // a titration that has not begun still names its first run, so that what is missing can be said
-  const runs: TitrationRun[] = Array.from({ length: Math.max(1, plan.runs) }, (_, i) => titrationRun(runKey(prefix, i, ''), `${prefix && 'r'}${i + 1}`));
+/** A titration that has not begun still names its first run, so that what is missing can be said. */
+const eachRun = <Run>(prefix: RunPrefix, plan: RunPlan, make: (prefix: string, mark: string) => Run): { runs: Run[]; counted: Run[] } => {
+  const letter = { '': '', 'retest.': 'r', 'titrant.': 'c' }[prefix];
+  const runs = Array.from({ length: Math.max(1, plan.runs) }, (_, i) => make(runKey(prefix, i, ''), `${letter}${i + 1}`));
   const counted = runs.filter((_, index) => plan.counted.includes(index));
-  return { mean: counted.length ? meanOf(counted) : undefined, all: runs.flatMap((run) => run.all) };
+  return { runs, counted: counted.length ? counted : runs.slice(0, 1) };
+};
+
+function runsOf(prefix: '' | 'retest.', plan: RunPlan): { result: Quantity; all: (Quantity | Choice)[] } {
+  const { runs, counted } = eachRun<TitrationRun>(prefix, plan, titrationRun);
+  const { result, all } = replicate.replicates(prefix, counted.map((run) => run.acidContent));
+  return { result, all: [...runs.flatMap((run) => run.all), ...all] };
+}
+
+function standardisation(plan: RunPlan): Quantity[] {
+  const { runs, counted } = eachRun('titrant.', plan, standard.standardisationRun);
+  return [...runs.flatMap((run) => run.all), ...standard.standardised(counted)];
 }
 
 /** The quantities and choices that a module exports, singly or as a record of them. */

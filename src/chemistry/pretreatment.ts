@@ -99,6 +99,8 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
   const sulfuric = make('sulfuric', 'm_H2SO4', sulfuricPure.per(sulfuricAssay).in(kilogram));
   const sulfuricVolume = make('sulfuricVolume', 'V_H2SO4', sulfuric.per(sulfuricDensity).in(litre), { unit: litre });
 
+  const batchVolume = make('batchVolume', 'V_batch', oilVolume.plus(methanolVolume).plus(sulfuricVolume), { unit: litre });
+
   const sulfuricPresent = make('sulfuricPresent', 'm_S,in', before ? sulfuricPure.plus(before.sulfuricCarried) : sulfuricPure);
   const sulfuricCarried = make('sulfuricCarried', 'm_S,left', carryOver.times(sulfuricPresent).in(kilogram), { cites: [PRACTICE] });
   const rest = (product: Expression, assay: Expression): Expression => product.times(constant('100', percent).minus(assay)).in(kilogram);
@@ -144,7 +146,7 @@ export function pretreatmentPass(number: 1 | 2 | 3, acidAmount: Expression, glyc
     waterCarried: { slow: slow.waterCarried, fast: fast.waterCarried },
     sulfuricCarried,
     all: [
-      acidMass, ffaAtStart, methanolRule, acidRule, methanolPure, methanol, methanolVolume, sulfuricPure, sulfuric, sulfuricVolume, sulfuricPresent, sulfuricCarried,
+      acidMass, ffaAtStart, methanolRule, acidRule, methanolPure, methanol, methanolVolume, sulfuricPure, sulfuric, sulfuricVolume, batchVolume, sulfuricPresent, sulfuricCarried,
       ...atSlow.all, ...(before ? atFast.all : []), ...slow.all, ...fast.all,
     ],
   };

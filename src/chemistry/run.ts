@@ -1,4 +1,3 @@
-import type { Expression } from '../formula/expression.js';
 import { limit, quantity } from '../formula/quantity.js';
 import type { Quantity } from '../formula/quantity.js';
 import { gram, millilitre, millimolePerGram } from '../formula/units.js';
@@ -31,18 +30,7 @@ export function titrationRun(prefix: string, mark: string): TitrationRun {
     key: `${prefix}sampleMass`, symbol: `m_${mark}`, unit: gram, cites: [ISO_660],
     is: sampleTakenBy.of({ weighing: weighedMass, volume: sampleVolume.times(sampleDensity) }),
   });
-  const burette = (end: 'Start' | 'End', symbol: string): Quantity =>
-    quantity({
-      key: `${prefix}burette${end}`, symbol, unit: millilitre, digits: { decimals: 2 },
-      limits: [limit('atLeast', '0', 'negative'), limit('atMost', '1000', 'out-of-range')],
-    });
-  const buretteStart = burette('Start', `V_start${mark}`);
-  const buretteEnd = burette('End', `V_end${mark}`);
-  const titre = quantity({
-    key: `${prefix}titre`, symbol: `V_${mark}`, unit: millilitre, cites: [ISO_660], digits: { decimals: 2 },
-    is: buretteEnd.minus(buretteStart),
-    limits: [limit('atLeast', '0', 'end-below-start', buretteEnd.key)],
-  });
+  const { titre, all: readings } = buretteReadings(prefix, mark);
   const correctedTitre = quantity({
     key: `${prefix}correctedTitre`, symbol: `V′_${mark}`, unit: millilitre, cites: [EN_14104_TEMPERATURE], digits: { decimals: 3 },
     is: titre.times(volumeFactor),
@@ -50,7 +38,7 @@ export function titrationRun(prefix: string, mark: string): TitrationRun {
   const netTitre = quantity({
     key: `${prefix}netTitre`, symbol: `V_net${mark}`, unit: millilitre, cites: [ISO_660, EN_14104], digits: { decimals: 3 },
     is: correctedTitre.minus(correctedBlank),
-    limits: [limit('above', '0', 'titre-not-above-blank', buretteEnd.key)],
+    limits: [limit('above', '0', 'titre-not-above-blank', `${prefix}buretteEnd`)],
   });
   const acidContent = quantity({
     key: `${prefix}acidContent`, symbol: `b_${mark}`, unit: millimolePerGram, cites: [ISO_660, EN_14104],
@@ -61,13 +49,23 @@ export function titrationRun(prefix: string, mark: string): TitrationRun {
   const freeFattyAcid = quantity({ key: `${prefix}freeFattyAcid`, symbol: `FFA_${mark}`, ...freeFattyAcidLike, is: freeFattyAcidOf(acidContent) });
   return {
     acidContent,
-    all: [weighedMass, sampleVolume, sampleMass, buretteStart, buretteEnd, titre, correctedTitre, netTitre, acidContent, acidValue, freeFattyAcid],
+    all: [weighedMass, sampleVolume, sampleMass, ...readings, correctedTitre, netTitre, acidContent, acidValue, freeFattyAcid],
   };
 }
 
-/** Mean of the acid contents of the runs that count. */
-export function meanOf(runs: readonly TitrationRun[]): Expression {
-  const [first, ...rest] = runs.map((run) => run.acidContent as Expression);
-  if (!first) throw new RangeError('a mean of no runs');
-  return rest.length ? rest.reduce((sum, run) => sum.plus(run), first).per(String(runs.length)) : first;
+/** The two readings of a burette, and the titre between them. */
+export function buretteReadings(prefix: string, mark: string): { readonly titre: Quantity; readonly all: readonly Quantity[] } {
+  const burette = (end: 'Start' | 'End', symbol: string): Quantity =>
+    quantity({
+      key: `${prefix}burette${end}`, symbol, unit: millilitre, digits: { decimals: 2 },
+      limits: [limit('atLeast', '0', 'negative'), limit('atMost', '1000', 'out-of-range')],
+    });
+  const start = burette('Start', `V_start${mark}`);
+  const end = burette('End', `V_end${mark}`);
+  const titre = quantity({
+    key: `${prefix}titre`, symbol: `V_${mark}`, unit: millilitre, cites: [ISO_660], digits: { decimals: 2 },
+    is: end.minus(start),
+    limits: [limit('atLeast', '0', 'end-below-start', end.key)],
+  });
+  return { titre, all: [start, end, titre] };
 }

@@ -1,6 +1,6 @@
 import { limit, quantity } from '../formula/quantity.js';
 import type { Quantity } from '../formula/quantity.js';
-import { kilogram, percent } from '../formula/units.js';
+import { kilogram, litre, percent } from '../formula/units.js';
 import { FFA_DIGITS } from './acidity.js';
 import { oilMass } from './oil.js';
 import { PRACTICE, STOICHIOMETRY } from './sources.js';
@@ -23,6 +23,16 @@ export const waterLimitBase = share('waterLimitBase', 'w_max,base');
 export const waterLimitAcid = share('waterLimitAcid', 'w_max,acid');
 /** FFA of the clean oil that a site keeps for blending. */
 export const cleanOilFfa = share('cleanOilFfa', 'FFA_clean');
+
+/** The reaction vessel, and how much of it is filled. */
+export const vesselVolume = quantity({
+  key: 'vesselVolume', symbol: 'V_vessel', unit: litre,
+  limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '10000000', 'out-of-range')],
+});
+export const vesselFill = share('vesselFill', 'φ_vessel');
+export const vesselWorkingVolume = quantity({
+  key: 'vesselWorkingVolume', symbol: 'V_work', unit: litre, cites: [PRACTICE], is: vesselVolume.times(vesselFill).in(litre),
+});
 
 /** Clean oil that brings the lot down to the direct limit: acid mixes by mass. Negative below the limit. */
 export const blendOil = (freeFattyAcid: Quantity): Quantity =>

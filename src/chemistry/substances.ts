@@ -11,6 +11,7 @@ export const COMPOSITION = {
   NaOCH3: { Na: 1, O: 1, C: 1, H: 3 },
   KOCH3: { K: 1, O: 1, C: 1, H: 3 },
   sulfuricAcid: { H: 2, S: 1, O: 4 },
+  potassiumHydrogenPhthalate: { K: 1, H: 5, C: 8, O: 4 },
 } as const satisfies Record<string, Composition>;
 
 export const M_METHANOL = molarMassOf(COMPOSITION.methanol, 'MeOH');
@@ -20,6 +21,7 @@ export const M_NAOH = molarMassOf(COMPOSITION.NaOH, 'NaOH');
 export const M_KOH = molarMassOf(COMPOSITION.KOH, 'KOH');
 export const M_NAOCH3 = molarMassOf(COMPOSITION.NaOCH3, 'NaOCH3');
 export const M_KOCH3 = molarMassOf(COMPOSITION.KOCH3, 'KOCH3');
+export const M_KHP = molarMassOf(COMPOSITION.potassiumHydrogenPhthalate, 'KHP');
 export const M_SULFURIC = molarMassOf(COMPOSITION.sulfuricAcid, 'H2SO4');
 
 /** What an acid gains when it becomes its methyl ester: CH3 for H. */

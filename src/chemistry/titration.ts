@@ -1,7 +1,7 @@
-import { constant } from '../formula/expression.js';
+import { constant, named } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import {
-  degreeCelsius, gramPerLitre, gramPerMillilitre, gramPerMole, millilitre, molePerLitre, one, perDegree,
+  day, degreeCelsius, gram, gramPerLitre, gramPerMillilitre, gramPerMole, litre, millilitre, molePerLitre, one, perDegree, percent,
 } from '../formula/units.js';
 import { AOCS_CD_3D, EN_14104_TEMPERATURE, ISO_660, STOICHIOMETRY, WATER_EXPANSION } from './sources.js';
 import { M_KOH, M_NAOH } from './substances.js';
@@ -14,7 +14,9 @@ export const sampleTakenBy = choice('sampleTakenBy', ['weighing', 'volume']);
 export const blankPolicy = choice('blankPolicy', ['solvent-neutralised', 'blank-subtracted']);
 export const titrantAlkali = choice('titrantAlkali', ['KOH', 'NaOH']);
 export const titrantSolvent = choice('titrantSolvent', ['alcoholic', 'aqueous']);
-/** Whether the temperature was read at the titration; without it volumes are taken as they are. */
+/** How the titrant's strength is known. A strength typed for a lot is taken as from a label. */
+export const titrantKnownFrom = choice('titrantKnownFrom', ['label', 'weighing', 'standardised']);
+/** Whether the temperature was read at the titration and the site corrects for it; without, volumes are taken as they are. */
 export const temperatureTaken = choice('temperatureTaken', ['no', 'yes']);
 /** Whether the strength is given in mol/L or in g/L; follows the unit typed. */
 export const titrantStrengthBy = choice('titrantStrengthBy', ['amount', 'mass']);
@@ -38,10 +40,28 @@ export const titrantMolarMass = quantity({
   is: titrantAlkali.of({ KOH: M_KOH, NaOH: M_NAOH }),
 });
 
+/** Alkali weighed into a volumetric flask, for a titrant that was not standardised. */
+export const titrantWeighedMass = quantity({
+  key: 'titrantWeighedMass', symbol: 'm_t', unit: gram,
+  limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '10000', 'out-of-range')],
+});
+export const titrantWeighedAssay = quantity({
+  key: 'titrantWeighedAssay', symbol: 'w_t', unit: percent, digits: { decimals: 1 },
+  limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '100', 'above-100-percent')],
+});
+export const titrantFlaskVolume = quantity({
+  key: 'titrantFlaskVolume', symbol: 'V_flask', unit: litre,
+  limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '1000', 'out-of-range')],
+});
+
 /** Equals the normality for NaOH and KOH. 1 g/L of NaOH is 0.0250 mol/L. */
 export const titrantConcentration = quantity({
   key: 'titrantConcentration', symbol: 'c', unit: molePerLitre, cites: [ISO_660],
-  is: titrantStrengthBy.of({ amount: titrantMolarity, mass: titrantMassStrength.per(titrantMolarMass) }),
+  is: titrantKnownFrom.of({
+    label: titrantStrengthBy.of({ amount: titrantMolarity, mass: titrantMassStrength.per(titrantMolarMass) }),
+    weighing: titrantWeighedMass.times(titrantWeighedAssay).per(titrantMolarMass.times(titrantFlaskVolume)).in(molePerLitre),
+    standardised: named('titrant.concentration'),
+  }),
 });
 
 export const titrationTemperature = quantity({
@@ -68,6 +88,12 @@ export const volumeFactor = quantity({
     no: constant('1'),
     yes: constant('1').minus(titrantExpansion.times(titrationTemperature.minus(standardisationTemperature))),
   }),
+});
+
+/** Age up to which a standardised titrant is used. */
+export const titrantAgeLimit = quantity({
+  key: 'titrantAgeLimit', symbol: 't_max', unit: day, digits: { decimals: 0 },
+  limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '3650', 'out-of-range')],
 });
 
 /** Titre of the solvent alone. */

@@ -2,6 +2,7 @@ import { Decimal, decimal } from '../formula/decimal.js';
 import { isKnown } from '../formula/reading.js';
 import type { Outcome } from '../formula/reading.js';
 import { atOrBelow } from './compare.js';
+import { GUARD_FACTOR, probabilityBelow } from './guard.js';
 
 /**
  * `direct`: base step with extra catalyst; `two-step`: acid step first; `too-close`: within the
@@ -20,7 +21,7 @@ export interface Reason {
 export const REASON_CODES = [
   'at-or-below-direct-limit', 'above-direct-limit', 'above-pretreatment-limit', 'within-guard-band', 'extra-negligible',
   'no-acid-proof-equipment', 'dry-before-base-step', 'dry-before-acid-step', 'water-not-measured',
-  'pretreatment-misses-target', 'ffa-not-known',
+  'pretreatment-misses-target', 'ffa-not-known', 'runs-differ', 'more-runs-settle', 'many-runs-settle', 'no-runs-settle',
 ] as const;
 export type ReasonCode = (typeof REASON_CODES)[number];
 
@@ -28,6 +29,8 @@ export interface Route {
   readonly verdict: Verdict;
   /** In a close call, the route that is safe on either side of the limit. */
   readonly safe?: Verdict;
+  /** In a close call: the limit, % FFA, and the probability that the true FFA is at or below it, 0 to 1. */
+  readonly odds?: { readonly limit: string; readonly below: string };
   readonly reasons: readonly Reason[];
 }
 
@@ -45,8 +48,6 @@ export interface RouteBasis {
   readonly acidProofEquipment: boolean;
 }
 
-/** One-sided 95 % point of the normal distribution (Eurachem/CITAC, compliance assessment, Annex A; from memory). */
-const GUARD_FACTOR = decimal('1.645');
 /** At or below this FFA the extra catalyst is lost in the scatter of the base load (published limits of 0.5 %). */
 const NEGLIGIBLE = decimal('0.5');
 
@@ -64,9 +65,15 @@ export function decideRoute(basis: RouteBasis): Route {
     reasons.push({ code, params: Object.fromEntries(Object.entries(params).map(([name, value]) => [name, value.toString()])) });
   };
   const acidStep: Verdict = basis.acidProofEquipment ? 'two-step' : 'no-acid-step';
-  const result = (verdict: Verdict, safe?: Verdict): Route => {
-    waterGate(basis, verdict === 'too-close' ? (safe ?? verdict) : verdict, say);
-    return safe ? { verdict, safe, reasons } : { verdict, reasons };
+  const result = (verdict: Verdict): Route => {
+    waterGate(basis, verdict, say);
+    return { verdict, reasons };
+  };
+  const tooClose = (limit: Decimal, safe: Verdict): Route => {
+    say('within-guard-band', { ffa, limit, guard });
+    waterGate(basis, safe, say);
+    const below = probabilityBelow(ffa, basis.u ?? new Decimal(0), limit);
+    return { verdict: 'too-close', safe, odds: { limit: limit.toString(), below: below.toFixed(4) }, reasons };
   };
 
   switch (beyond(directLimit)) {
@@ -75,8 +82,7 @@ export function decideRoute(basis: RouteBasis): Route {
       if (atOrBelow(ffa, NEGLIGIBLE)) say('extra-negligible', { limit: NEGLIGIBLE });
       return result('direct');
     case 'close':
-      say('within-guard-band', { ffa, limit: directLimit, guard });
-      return result('too-close', acidStep);
+      return tooClose(directLimit, acidStep);
     case 'above':
       break;
   }
@@ -85,8 +91,7 @@ export function decideRoute(basis: RouteBasis): Route {
       say('above-pretreatment-limit', { ffa, limit: pretreatmentLimit });
       return result('outside');
     case 'close':
-      say('within-guard-band', { ffa, limit: pretreatmentLimit, guard });
-      return result('too-close', 'outside');
+      return tooClose(pretreatmentLimit, 'outside');
     case 'below':
       say('above-direct-limit', { ffa, limit: directLimit });
       if (!basis.acidProofEquipment) say('no-acid-proof-equipment');

@@ -17,13 +17,12 @@ export interface KnownKeys {
 
 /** Checks a lot entry from outside. Parts left out count as empty. */
 export function checkLotEntry(value: unknown, keys: KnownKeys): LotEntry | readonly Fault[] {
-  const runs = list(record({ sample: figure, start: figure, end: figure, struck: text }));
-  return check({ ...EMPTY_LOT }, value, { ...shared(keys), source: text, date: text, runs, retestRuns: runs });
+  return check({ ...EMPTY_LOT }, value, { ...shared(keys), source: text, date: text, runs: runs(), retestRuns: runs() });
 }
 
 /** Checks a site profile from outside. Parts left out count as empty. */
 export function checkSiteProfile(value: unknown, keys: KnownKeys): SiteProfile | readonly Fault[] {
-  return check({ ...EMPTY_SITE }, value, shared(keys));
+  return check({ ...EMPTY_SITE }, value, { ...shared(keys), titrantRuns: runs(), titrantDate: text });
 }
 
 function check<Document extends object>(empty: Document, value: unknown, shape: Shape): Document | readonly Fault[] {
@@ -80,6 +79,8 @@ function figure(value: unknown, path: string, faults: Fault[]): void {
   if (!isObject(value)) return;
   for (const part of Object.keys(parts)) if (!Object.hasOwn(value, part)) text(undefined, below(path, part), faults);
 }
+
+const runs = (): Check => list(record({ sample: figure, start: figure, end: figure, struck: text }));
 
 const figuresOf = ({ figures }: KnownKeys): Check =>
   entries((key, value, path, faults) => {

@@ -1,6 +1,6 @@
 import { source } from '../formula/source.js';
 import type { Source } from '../formula/source.js';
-import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, METHANOL_RATIO, NREL_PRETREATMENT, PRACTICE, WATER_INHIBITION } from '../chemistry/sources.js';
+import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, METHANOL_RATIO, METHANOL_SOLUBILITY, NREL_PRETREATMENT, PRACTICE, QUAM, WATER_INHIBITION } from '../chemistry/sources.js';
 import type { Figure } from './figure.js';
 
 /** A figure that stands where neither the lot nor the site has one, with where it comes from. */
@@ -15,12 +15,36 @@ const TARGET = source('Canakci and Van Gerpen 2001, Trans. ASAE 44:1429: below 1
 const ASSAYS = source('Commercial grades: KOH 85–90 %, NaOH 97–99 %, methoxides from 97 %', 'memory');
 const SOLUTIONS = source('Commercial methoxide solutions: NaOCH3 30 %, 0.97 g/mL; KOCH3 32 %, about 0.99 g/mL', 'memory');
 const SULFURIC = source('Sulfuric acid 96 %, 1.8355 g/mL at 20 °C', 'memory');
+const QUAM_BALANCE = source('QUAM, example A2: ±0.15 mg for a balance that reads 0.1 mg, taken a little wider', 'derived');
 const BAND = source('Ends of a band that holds the published points that carry enough conditions', 'derived');
 
 /** Every default figure of a site; each can be set in the site profile, and most in a lot. */
 export const DEFAULT_FIGURES: Readonly<Record<string, DefaultFigure>> = {
   sampleDensity: given('0.917', 'g/mL', USED_OIL_DENSITY),
   standardisationTemperature: given('20', '°C'),
+
+  khpPurity: given('100', '%', QUAM),
+  khpBlank: given('0', 'mL'),
+  titrantWeighedAssay: given('85', '%', ASSAYS),
+  titrantAgeLimit: given('30', 'd'),
+  balanceLinearity: given('0.002', 'g'),
+  standardBalanceLinearity: given('0.0002', 'g', QUAM_BALANCE),
+  dropVolume: given('0.05', 'mL'),
+  sampleVolumeTolerance: given('0.1', 'mL'),
+  sampleDensityTolerance: given('0.005', 'g/mL', USED_OIL_DENSITY),
+  thermometerTolerance: given('0.5', 'K'),
+  temperatureSpread: given('3', 'K', QUAM),
+  titrantLabelTolerance: given('0.5', '%'),
+  titrantWeighingTolerance: given('3', '%'),
+  khpPurityTolerance: given('0.05', '%', QUAM),
+  standardisationRepeatability: given('0.2', '%'),
+  repeatabilityTyped: given('0.3', 'mg/g'),
+  repeatabilityShare: given('5', '%'),
+  certificateTolerance: given('5', '%'),
+  oilAmountTolerance: given('0.5', '%'),
+  catalystAssayTolerance: given('1', '%'),
+  sulfuricAssayTolerance: given('0.5', '%'),
+  saponificationTolerance: given('5', 'mg/g', TRADE_LISTING),
 
   oilTemperature: given('20', '°C'),
   typicalOilDensity: given('920', 'kg/m³', USED_OIL_DENSITY),
@@ -49,6 +73,12 @@ export const DEFAULT_FIGURES: Readonly<Record<string, DefaultFigure>> = {
   'NaOCH3-solution.baseLoad': given('0.5', '%'),
   'KOCH3-solution.density': given('0.99', 'g/mL', SOLUTIONS),
   'NaOCH3-solution.density': given('0.97', 'g/mL', SOLUTIONS),
+
+  'KOH.solubility': given('550', 'g/L', METHANOL_SOLUBILITY),
+  'NaOH.solubility': given('240', 'g/L', METHANOL_SOLUBILITY),
+  'KOCH3.solubility': given('300', 'g/L', METHANOL_SOLUBILITY),
+  'NaOCH3.solubility': given('300', 'g/L', METHANOL_SOLUBILITY),
+  vesselFill: given('80', '%'),
 
   methanolAssay: given('99.9', '%'),
   methanolTemperature: given('20', '°C'),
@@ -85,6 +115,12 @@ export const DEFAULT_OPTIONS: Readonly<Record<string, string>> = {
   blankPolicy: 'solvent-neutralised',
   titrantAlkali: 'KOH',
   titrantSolvent: 'alcoholic',
+  titrantKnownFrom: 'label',
+  burette: 'B-25',
+  repeatabilityBy: 'd664-used',
+  temperatureCorrected: 'yes',
+  runsAreDear: 'no',
+  portionTable: 'iso-660',
   referenceAcid: 'oleic',
   oilDensityBy: 'typical',
   glyceridesBy: 'saponification-value',

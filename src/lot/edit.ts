@@ -1,16 +1,15 @@
 import { EMPTY_LOT } from './entry.js';
 import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
 import type { Figure } from './figure.js';
+import type { RunList } from './keys.js';
 
-/** Which runs an edit of a run means: those of the oil as it came, or those after the acid step. */
-export type RunList = 'runs' | 'retestRuns';
 export type RunCell = 'sample' | 'start' | 'end';
 
 /** One thing a person changed. An undefined figure or text means the field was emptied. */
 export type Edit =
   | { readonly kind: 'figure'; readonly key: string; readonly figure: Figure | undefined }
   | { readonly kind: 'option'; readonly key: string; readonly option: string }
-  | { readonly kind: 'text'; readonly key: 'name' | 'source' | 'date'; readonly text: string }
+  | { readonly kind: 'text'; readonly key: 'name' | 'source' | 'date' | 'titrantDate'; readonly text: string }
   | { readonly kind: 'cells'; readonly list: RunList; readonly cells: readonly CellEdit[] }
   | { readonly kind: 'strike'; readonly list: RunList; readonly index: number; readonly reason: string | undefined }
   | { readonly kind: 'replace'; readonly entry: LotEntry };
@@ -31,21 +30,37 @@ export function applyEdit(entry: LotEntry, edit: Edit): LotEntry {
     case 'text':
       return withKey(entry, edit.key, edit.text || undefined);
     case 'cells':
-      return { ...entry, [edit.list]: edit.cells.reduce(withCell, entry[edit.list]) };
-    case 'strike': {
-      const runs = entry[edit.list].map((run, index) => (index === edit.index ? withKey(run, 'struck', edit.reason) : run));
-      return { ...entry, [edit.list]: runs };
-    }
+    case 'strike':
+      return withRuns(entry, edit);
     case 'replace':
       return edit.entry;
   }
 }
 
-/** The site profile after a figure or an option of it was set; undefined gives the default back. */
-export function applySiteEdit(site: SiteProfile, edit: Extract<Edit, { kind: 'figure' | 'option' }>): SiteProfile {
-  return edit.kind === 'figure'
-    ? { ...site, figures: withKey(site.figures, edit.key, edit.figure) }
-    : { ...site, options: withKey(site.options, edit.key, edit.option) };
+/** The site profile after an edit of it; an undefined figure gives the default back. */
+export function applySiteEdit(site: SiteProfile, edit: SiteEdit): SiteProfile {
+  switch (edit.kind) {
+    case 'figure':
+      return { ...site, figures: withKey(site.figures, edit.key, edit.figure) };
+    case 'option':
+      return { ...site, options: withKey(site.options, edit.key, edit.option) };
+    case 'text':
+      return withKey(site, edit.key, edit.text || undefined);
+    default:
+      return withRuns(site, edit);
+  }
+}
+
+/** An edit that a site profile takes too. */
+export type SiteEdit = Exclude<Edit, { kind: 'replace' }>;
+
+/** The runs of a list with cells filled, or one struck out. */
+function withRuns<Document extends LotEntry | SiteProfile>(document: Document, edit: Extract<Edit, { kind: 'cells' | 'strike' }>): Document {
+  const runs = (document as Partial<Record<RunList, readonly RunEntry[]>>)[edit.list] ?? [];
+  const changed = edit.kind === 'cells'
+    ? edit.cells.reduce(withCell, runs)
+    : runs.map((run, index) => (index === edit.index ? withKey(run, 'struck', edit.reason) : run));
+  return { ...document, [edit.list]: changed };
 }
 
 /** A new lot titrated in the same way: the titrant and the method stay, everything about the oil goes. */

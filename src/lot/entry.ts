@@ -5,7 +5,7 @@ export const FORMAT_VERSION = 1;
 
 /** A run of a titration as typed. A run is struck out with a reason, never deleted in silence. */
 export interface RunEntry {
-  /** The portion: weighed, or by volume, as `sampleTakenBy` says. */
+  /** The portion of oil: weighed, or by volume, as `sampleTakenBy` says; of the standard: weighed. */
   readonly sample?: Figure;
   readonly start?: Figure;
   readonly end?: Figure;
@@ -36,6 +36,10 @@ export interface SiteProfile {
   readonly name?: string;
   readonly figures: Readonly<Record<string, Figure>>;
   readonly options: Readonly<Record<string, string>>;
+  /** Runs of the standardisation of the titrant in use. */
+  readonly titrantRuns?: readonly RunEntry[];
+  /** Day of the standardisation, ISO 8601. */
+  readonly titrantDate?: string;
 }
 
 export const EMPTY_LOT: LotEntry = { version: FORMAT_VERSION, figures: {}, options: {}, runs: [], retestRuns: [] };

@@ -1,4 +1,5 @@
 import { passesNeeded } from '../decision/passes.js';
+import { rangeKept } from '../decision/replicates.js';
 import type { Findings, Givens } from '../formula/plan.js';
 import { Missing, Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Unknown } from '../formula/reading.js';
@@ -37,7 +38,9 @@ export class LotGivens implements Givens {
     if (key === 'passes') {
       return passesNeeded((pass) => findings.outcome(`pass${pass}.ffaLeft.slow`), findings.outcome('pretreatmentTarget'));
     }
-    if (key === 'temperatureTaken') return 'titrationTemperature' in this.entry.figures || 'titrationTemperature' in this.site.figures ? 'yes' : 'no';
+    if (key === 'temperatureTaken') return this.temperatureTaken() && this.chosen('temperatureCorrected') !== 'no' ? 'yes' : 'no';
+    const replicate = /^(retest\.)?(averageBy|runsAgree)$/.exec(key);
+    if (replicate) return this.replicates(replicate[1] as 'retest.' | undefined ?? '', replicate[2] === 'runsAgree', findings);
     if (key === 'baseStepAcidFrom') return this.hasRetest() ? 'retest' : 'estimate';
     const byUnit = OPTION_BY_UNIT[key];
     if (byUnit) {
@@ -53,8 +56,22 @@ export class LotGivens implements Givens {
     return option ?? new Missing([key]);
   }
 
+  /** Whether runs lie close enough for their mean. */
+  private replicates(prefix: '' | 'retest.', asked: boolean, findings: Findings): string | Unknown {
+    const agree = rangeKept(findings, prefix);
+    if (typeof agree !== 'boolean') return agree;
+    return asked ? (agree ? 'yes' : 'no') : agree ? 'mean' : 'median';
+  }
+
+  /** Whether the temperature at the titration was given, for the lot or the site. */
+  temperatureTaken(): boolean {
+    return 'titrationTemperature' in this.entry.figures || 'titrationTemperature' in this.site.figures;
+  }
+
   /** The option of a choice as given, whatever follows from it. */
   chosen(key: string): string | undefined {
+    // a strength typed for the lot is meant for it, whatever titrant the site has
+    if (key === 'titrantKnownFrom' && !this.entry.options[key] && this.entry.figures['titrantStrength']) return 'label';
     return this.entry.options[key] ?? this.site.options[key] ?? DEFAULT_OPTIONS[key];
   }
 
@@ -93,7 +110,8 @@ export class LotGivens implements Givens {
   private typed(key: string, field: string): Figure | undefined {
     const run = runCell(key);
     if (!run) return this.entry.figures[field];
-    return (run.retest ? this.entry.retestRuns : this.entry.runs)[run.index]?.[run.cell];
+    const runs = run.list === 'titrantRuns' ? (this.site.titrantRuns ?? []) : this.entry[run.list];
+    return runs[run.index]?.[run.cell];
   }
 }
 

@@ -1,4 +1,5 @@
 import { lotFormulas } from '../chemistry/lot-formulas.js';
+import { PORTIONS } from '../decision/portion-table.js';
 import type { Unit } from '../formula/unit.js';
 import { gramPerLitre, litre } from '../formula/units.js';
 import type { KnownKeys } from './check.js';
@@ -11,26 +12,30 @@ const FIELD_OF: Readonly<Record<string, string>> = {
   titrantMolarity: 'titrantStrength', titrantMassStrength: 'titrantStrength', titrantStrengthBy: 'titrantStrength',
 };
 const CELL_OF: Readonly<Record<string, 'sample' | 'start' | 'end'>> = {
-  weighedMass: 'sample', sampleVolume: 'sample', sampleMass: 'sample', buretteStart: 'start', buretteEnd: 'end',
+  weighedMass: 'sample', sampleVolume: 'sample', sampleMass: 'sample', portion: 'sample', buretteStart: 'start', buretteEnd: 'end',
 };
 
 /** Where a run's cells stand: `retest.run2.sample`. */
-const RUN_KEY = /^((?:retest\.)?run\d+)\.(\w+)$/;
+const RUN_KEY = /^((retest\.|titrant\.)?run(\d+))\.(\w+)$/;
+
+/** The list that a run stands in, of the lot or of the site. */
+export type RunList = 'runs' | 'retestRuns' | 'titrantRuns';
+const LIST_OF: Readonly<Record<string, RunList>> = { 'retest.': 'retestRuns', 'titrant.': 'titrantRuns' };
 
 /** The field at which a problem with a quantity stands, or where a missing one is typed. */
 export function fieldOf(key: string): string {
   const run = RUN_KEY.exec(key);
-  if (run) return `${run[1]}.${CELL_OF[run[2] ?? ''] ?? run[2]}`;
+  if (run) return `${run[1]}.${CELL_OF[run[4] ?? ''] ?? run[4]}`;
   return FIELD_OF[key] ?? key;
 }
 
 /** A quantity of a run, taken apart; undefined for any other key. */
-export function runCell(key: string): { retest: boolean; index: number; cell: 'sample' | 'start' | 'end' } | undefined {
+export function runCell(key: string): { list: RunList; index: number; cell: 'sample' | 'start' | 'end' } | undefined {
   const run = RUN_KEY.exec(key);
   if (!run) return undefined;
-  const name = run[1] ?? '';
-  const cell = CELL_OF[run[2] ?? ''];
-  return cell === undefined ? undefined : { retest: name.startsWith('retest'), index: Number(name.replace(/\D/g, '')) - 1, cell };
+  const [, , prefix = '', number, name = ''] = run;
+  const cell = CELL_OF[name];
+  return cell && { list: LIST_OF[prefix] ?? 'runs', index: Number(number) - 1, cell };
 }
 
 /** The choices that the unit of a figure settles. */
@@ -40,16 +45,21 @@ export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; o
 };
 
 /** The choices that are decided on results, not typed. */
-const DECIDED: ReadonlySet<string> = new Set(['passes', 'baseStepAcidFrom', 'temperatureTaken', ...Object.keys(OPTION_BY_UNIT)]);
+const DECIDED: ReadonlySet<string> = new Set([
+  'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT),
+]);
+
+const YES_NO = ['yes', 'no'] as const;
 
 /** Keys that an entry or a profile may hold. */
 export const KNOWN_KEYS: KnownKeys = knownKeys();
 
 function knownKeys(): KnownKeys {
-  const sheet = lotFormulas({ runs: 0, counted: [] }, { runs: 0, counted: [] });
+  const none = { runs: 0, counted: [] };
+  const sheet = lotFormulas({ lot: none, retest: none, titrant: none });
   const figures = new Set<string>();
   for (const [key, quantity] of sheet.quantities) if (!quantity.is && !RUN_KEY.test(key)) figures.add(fieldOf(key));
-  const options = new Map<string, readonly string[]>([['acidProofEquipment', ['yes', 'no']]]);
+  const options = new Map<string, readonly string[]>([['acidProofEquipment', YES_NO], ['temperatureCorrected', YES_NO], ['runsAreDear', YES_NO], ['portionTable', Object.keys(PORTIONS)]]);
   for (const [key, { options: known }] of sheet.choices) {
     if (!DECIDED.has(key)) options.set(key, known);
   }

@@ -1,4 +1,5 @@
 import { lotFormulas } from '../chemistry/lot-formulas.js';
+import type { LotRuns } from '../chemistry/lot-formulas.js';
 import { Plan } from '../formula/plan.js';
 import type { Findings } from '../formula/plan.js';
 import type { Sheet } from '../formula/sheet.js';
@@ -8,6 +9,7 @@ import { runPlan } from './runs.js';
 
 /** A lot under evaluation: its formulas, what was given, and what has been found. */
 export interface LotRun {
+  readonly runs: LotRuns;
   readonly sheet: Sheet;
   readonly plan: Plan;
   readonly givens: LotGivens;
@@ -16,11 +18,15 @@ export interface LotRun {
 
 /** Puts a lot's givens to the plan for the wanted quantities; all of them when none are named, and those that no lot has left out. */
 export function lotRun(entry: LotEntry, site: SiteProfile, wanted?: readonly string[]): LotRun {
-  const sheet = lotFormulas(runPlan(entry.runs), runPlan(entry.retestRuns));
-  const plan = planFor(sheet, wanted?.filter((key) => sheet.quantities.has(key)));
+  const runs = { lot: runPlan(entry.runs), retest: runPlan(entry.retestRuns), titrant: runPlan(site.titrantRuns ?? []) };
+  const sheet = lotFormulas(runs);
+  const plan = planFor(sheet, wanted && [...wanted, ...DECIDING].filter((key) => sheet.quantities.has(key)));
   const givens = new LotGivens(sheet, entry, site);
-  return { sheet, plan, givens, findings: plan.evaluate(givens) };
+  return { runs, sheet, plan, givens, findings: plan.evaluate(givens) };
 }
+
+/** What choices are decided on although no formula names it. */
+const DECIDING = ['runRange', 'criticalRange', 'retest.runRange', 'retest.criticalRange'];
 
 const plans = new WeakMap<Sheet, Map<string, Plan>>();
 

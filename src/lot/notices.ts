@@ -3,13 +3,15 @@ import { MOST_PASSES } from '../decision/passes.js';
 import type { Findings } from '../formula/plan.js';
 import { isKnown } from '../formula/reading.js';
 import type { RunCell } from './edit.js';
-import type { LotEntry, RunEntry } from './entry.js';
+import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
 import type { Notice } from './lot-reading.js';
 import type { LotRun } from './lot-run.js';
+import { implausibilities } from './plausibility.js';
 import { runState } from './runs.js';
 
 /** What a careful colleague would remark on a lot whose figures are all acceptable. */
-export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes: number | undefined): readonly Notice[] {
+export function noticesOn(entry: LotEntry, site: SiteProfile, run: LotRun, passes: number | undefined, today: string | undefined): readonly Notice[] {
+  const { givens, findings } = run;
   const notices: Notice[] = [];
   if (givens.chosen('acidKnownFrom') === 'titration') {
     const states = entry.runs.map(runState);
@@ -22,10 +24,7 @@ export function noticesOn(entry: LotEntry, { givens, findings }: LotRun, passes:
   }
   const missed = missedTarget(findings, passes);
   if (missed) notices.push({ code: 'target-not-reached', quantity: 'pretreatmentTarget', params: missed });
-  if (givens.chosen('glyceridesBy') === 'profile' && givens.chosen('fat') === 'coconut' && givens.chosen('referenceAcid') !== 'lauric') {
-    notices.push({ code: 'lauric-on-other-basis', quantity: 'referenceAcid' });
-  }
-  return notices;
+  return [...notices, ...implausibilities(entry, site, run, today)];
 }
 
 /** The first cell that a run still lacks. */

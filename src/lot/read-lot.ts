@@ -1,24 +1,30 @@
 import { directCharge, twoStepCharge } from '../decision/charge.js';
-import { decideRoute } from '../decision/route.js';
+import { judgeReplicates } from '../decision/replicates.js';
+import type { Replicates } from '../decision/replicates.js';
 import type { Route } from '../decision/route.js';
+import type { Decimal } from '../formula/decimal.js';
 import { shownText } from '../formula/digits.js';
 import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
 import { checkLotEntry, checkSiteProfile } from './check.js';
 import type { Fault } from './check.js';
 import { FORMAT_VERSION } from './entry.js';
-import type { LotEntry } from './entry.js';
+import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
+import { judgedRoute } from './judged-route.js';
 import { KNOWN_KEYS, fieldOf } from './keys.js';
-import type { LotFaults, LotReading, ReadingJson } from './lot-reading.js';
+import type { LotFaults, LotReading, ReadingJson, UncertaintyJson } from './lot-reading.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
 import { missedTarget, noticesOn } from './notices.js';
 import { runState } from './runs.js';
+import { uncertaintyJson, uncertaintyOf } from './uncertainty.js';
 
 /** What to read; everything when left out. */
 export interface ReadOptions {
   /** Keys of the readings wanted; nothing else is computed but the route. For long lists of lots. A key this lot has no quantity for gives `unknown-quantity`. */
   readonly only?: readonly string[];
+  /** The day of reading, ISO 8601: the age of the titrant counts up to the lot's date, or to this day where the lot has none. */
+  readonly today?: string;
 }
 
 /**
@@ -42,36 +48,51 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
   }
   const { only } = options;
   const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
-  const route = routeOf(run, lot);
+  const replicates = { lot: replicatesOf(run, '', lot.runs), retest: replicatesOf(run, 'retest.', lot.retestRuns) };
+  const route = judgedRoute(run, lot, replicates.lot);
   const passes = only ? undefined : passesOf(run);
-  if (!only) compute(run, lot, passes);
+  if (!only) compute(run, lot, profile, passes);
   const readings = readingsOf(run, only ?? run.findings.touched());
   return {
     version: FORMAT_VERSION,
     readings,
     runs: lot.runs.map(runState),
     retestRuns: lot.retestRuns.map(runState),
+    replicates,
+    uncertainties: only ? {} : uncertaintiesOf(run),
     route: only ? route : withTarget(route, run, passes),
     charges: { direct: directCharge(), twoStep: twoStepCharge(passes ?? 1) },
     problems: problemsIn(readings),
-    notices: only ? [] : noticesOn(lot, run, passes),
+    notices: only ? [] : noticesOn(lot, profile, run, passes, options.today),
   };
 }
 
 const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
 
-const ROUTE_KEYS = ['freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid'];
+const ROUTE_KEYS = [
+  'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',
+  'u.repeatability', 'u.endPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
+  'u.khpEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
+];
 
-function routeOf({ findings, givens }: LotRun, entry: LotEntry): Route {
-  return decideRoute({
-    ffa: findings.outcome('freeFattyAcid'),
-    directLimit: findings.outcome('directLimit'),
-    pretreatmentLimit: findings.outcome('pretreatmentLimit'),
-    water: 'waterContent' in entry.figures ? findings.outcome('waterContent') : undefined,
-    waterLimitBase: findings.outcome('waterLimitBase'),
-    waterLimitAcid: findings.outcome('waterLimitAcid'),
-    acidProofEquipment: givens.chosen('acidProofEquipment') === 'yes',
-  });
+function replicatesOf({ findings, givens }: LotRun, prefix: '' | 'retest.', runs: readonly RunEntry[]): Replicates {
+  const titrated = givens.chosen(`${prefix}acidKnownFrom`) === 'titration';
+  const counted = titrated ? runs.filter((run) => runState(run) === 'counted').length : 0;
+  return judgeReplicates(findings, prefix, counted, givens.chosen('runsAreDear') === 'yes');
+}
+
+/** Results that stand with their ± beside them. */
+const WITH_UNCERTAINTY = ['acidValue', 'freeFattyAcid', 'retest.acidValue', 'retest.freeFattyAcid', 'titrantConcentration'];
+
+function uncertaintiesOf(run: LotRun): Readonly<Record<string, UncertaintyJson>> {
+  const known: Record<string, UncertaintyJson> = {};
+  const touched = new Set(run.findings.touched());
+  for (const key of WITH_UNCERTAINTY) {
+    if (!touched.has(key)) continue;
+    const uncertainty = uncertaintyOf(run, key);
+    if ('budget' in uncertainty) known[key] = uncertaintyJson(uncertainty, run.findings.outcome(key) as Decimal, run.sheet.quantity(key).digits);
+  }
+  return known;
 }
 
 /** A two-step route that three passes do not bring to the target says so among its reasons. */
@@ -86,19 +107,21 @@ function passesOf({ findings }: LotRun): number | undefined {
 }
 
 /** Results that nothing else in a plan asks for: the first pass is shown even where the charge is not known yet. */
-function compute({ plan, findings }: LotRun, entry: LotEntry, passes: number | undefined): void {
+function compute({ plan, findings }: LotRun, entry: LotEntry, site: SiteProfile, passes: number | undefined): void {
+  const hasTitrant = 'titrantStrength' in entry.figures || Boolean(site.titrantRuns?.length) || TITRANT_FIGURES.some((key) => key in site.figures);
   const shows = (key: string): boolean => {
     const pass = /^pass(\d)\./.exec(key);
     if (pass) return Number(pass[1]) <= (passes ?? 1);
     const run = /^(retest\.)?run(\d+)\.(acidValue|freeFattyAcid)$/.exec(key);
     if (run) return Number(run[2]) <= (run[1] ? entry.retestRuns : entry.runs).length;
     if (key.startsWith('retest.')) return entry.retestRuns.length > 0 && RESULTS.test(key.slice('retest.'.length));
-    return RESULTS.test(key);
+    return key === 'titrantConcentration' ? hasTitrant : RESULTS.test(key);
   };
   for (const key of plan.order) if (shows(key)) findings.outcome(key);
 }
 
-const RESULTS = /^(?:(?:direct|twoStep|pretreated)\..*|acidValue|freeFattyAcid|alkaliPerLitreOfOil|oilVolume|blendOil|waterContent|insolubles|pretreatmentTarget)$/;
+const TITRANT_FIGURES = ['titrantStrength', 'titrantWeighedMass'];
+const RESULTS = /^(?:(?:direct|twoStep|pretreated)\..*|acidValue|freeFattyAcid|alkaliPerLitreOfOil|oilVolume|blendOil|waterContent|insolubles|pretreatmentTarget|runRange|criticalRange)$/;
 
 function readingsOf({ sheet, findings, givens }: LotRun, keys: readonly string[]): Record<string, ReadingJson> {
   const readings: Record<string, ReadingJson> = {};

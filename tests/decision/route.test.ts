@@ -59,7 +59,7 @@ describe('the guard band', () => {
 
   it('names the route that is safe on either side', () => {
     expect(near('1.95', '0.10')).toEqual({
-      verdict: 'too-close', safe: 'two-step', reasons: [{ code: 'within-guard-band', params: { ffa: '1.95', limit: '2', guard: '0.1645' } }],
+      verdict: 'too-close', safe: 'two-step', odds: { limit: '2', below: '0.6915' }, reasons: [{ code: 'within-guard-band', params: { ffa: '1.95', limit: '2', guard: '0.1645' } }],
     });
     expect(decide('40', { u: pct('0.5') })).toMatchObject({ verdict: 'too-close', safe: 'outside' });
     expect(decide('3', { u: pct('0.5'), acidProofEquipment: false })).toMatchObject({ verdict: 'too-close', safe: 'no-acid-step' });
@@ -125,22 +125,27 @@ describe('what is not known', () => {
   });
 });
 
+/** A certificate that leaves nothing in doubt, down to the last of 34 digits. */
+const CERTAIN = { certificateTolerance: `0.${'0'.repeat(60)}1 %` };
+
 describe('the route of a lot', () => {
   // by way of acid content 3.0 % comes back as 3.000…001 %, which is no reason to send a lot through the acid step
-  it.each(Array.from({ length: 80 }, (_, i) => ((i + 1) / 4).toFixed(2)))('a certificate of %s %% keeps a limit of as much', (ffa) => {
-    expect(read(certified(ffa), site({ figures: { directLimit: `${ffa} %` } })).route.verdict).toBe('direct');
+  it.each(Array.from({ length: 80 }, (_, i) => ((i + 1) / 4).toFixed(2)))('a certificate of %s %% without doubt keeps a limit of as much', (ffa) => {
+    expect(read(certified(ffa), site({ figures: { directLimit: `${ffa} %`, ...CERTAIN } })).route.verdict).toBe('direct');
   });
 
-  it('keeps the default limit at a certificate of 3.0 %, and not at 3.01 %', () => {
-    expect(read(certified('3.0')).route.verdict).toBe('direct');
-    expect(read(certified('3.01')).route.verdict).toBe('two-step');
+  it('keeps the default limit at a certificate of 3.0 % without doubt, and not at 3.01 %', () => {
+    expect(read(certified('3.0'), site({ figures: CERTAIN })).route.verdict).toBe('direct');
+    expect(read(certified('3.01'), site({ figures: CERTAIN })).route.verdict).toBe('two-step');
   });
 
   // 28.2 g and 0.1 mol/L: mL / 10 is % FFA, on the scale of AOCS Ca 5a-40
   it('keeps a limit at a titre that is exactly as much', () => {
     for (const millilitres of ['3.00', '3.70', '5.90', '30.00']) {
       const entry = lot({ figures: { titrantStrength: '0.1 mol/L' }, runs: [run('28.2 g', '0.00', millilitres)] });
-      expect(read(entry, site({ figures: { directLimit: `${Number(millilitres) / 10} %` } })).route.verdict).toBe('direct');
+      const { route, readings } = read(entry, site({ figures: { directLimit: `${Number(millilitres) / 10} %` } }));
+      expect(route).toMatchObject({ verdict: 'too-close', odds: { below: '0.5000' } });
+      expect(new Decimal(readings['freeFattyAcid']!.value!).toFixed(25)).toBe(new Decimal(millilitres).div(10).toFixed(25));
     }
   });
 

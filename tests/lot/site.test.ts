@@ -7,7 +7,8 @@ import { readFigure } from '../../src/lot/figure.js';
 import { KNOWN_KEYS } from '../../src/lot/keys.js';
 import { certified, lot, read, run } from './lot.js';
 
-const sheet = lotFormulas({ runs: 1, counted: [0] }, { runs: 1, counted: [0] });
+const ONE = { runs: 1, counted: [0] };
+const sheet = lotFormulas({ lot: ONE, retest: ONE, titrant: ONE });
 
 describe('the default figures', () => {
   it.each(Object.entries(DEFAULT_FIGURES))('%s reads in the unit of its quantity and keeps its limits', (key, figure) => {
@@ -29,8 +30,9 @@ describe('the default figures', () => {
   it('leave only what belongs to a lot or is not always needed', () => {
     const without = [...KNOWN_KEYS.figures].filter((key) => !(key in DEFAULT_FIGURES)).sort();
     expect(without).toEqual([
-      'blank', 'certificateAcidValue', 'certificateFfa', 'iodineValue', 'measuredOilDensity', 'oilAmount', 'otherAcidMolarMass',
-      'retest.certificateAcidValue', 'retest.certificateFfa', 'titrantStrength', 'titrationTemperature',
+      'blank', 'buretteCapacityTyped', 'buretteToleranceTyped', 'certificateAcidValue', 'certificateFfa', 'iodineValue', 'measuredOilDensity', 'oilAmount',
+      'otherAcidMolarMass', 'retest.certificateAcidValue', 'retest.certificateFfa', 'titrantFlaskVolume', 'titrantStrength', 'titrantWeighedMass',
+      'titrationTemperature', 'vesselVolume',
     ]);
   });
 

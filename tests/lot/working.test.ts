@@ -78,7 +78,8 @@ describe('the working of a figure', () => {
   });
 
   it('names what it rests on, to open next', () => {
-    expect(working(TITRATED, EMPTY_SITE, 'acidContent').rests).toEqual(['run1.acidContent', 'run2.acidContent']);
+    expect(working(TITRATED, EMPTY_SITE, 'acidContent').rests).toEqual(['titratedAcidContent']);
+    expect(working(TITRATED, EMPTY_SITE, 'titratedAcidContent').rests).toEqual(['run1.acidContent', 'run2.acidContent']);
     expect(working(TITRATED, EMPTY_SITE, 'run1.acidContent').rests).toEqual(['titrantConcentration', 'run1.netTitre', 'run1.sampleMass']);
     expect(working(SOUR, EMPTY_SITE, 'pass1.acidRule').rests).toEqual(['pass1.ffaAtStart']); // 10 or 5 % by the FFA
     expect(working(TITRATED, EMPTY_SITE, 'oilTemperature').rests).toEqual([]);

@@ -9,6 +9,7 @@ import { COMPOSITION } from '../../src/chemistry/substances.js';
 // Structural formulas (from memory), read and summed up by mf-parser, which knows nothing of this project.
 const STRUCTURE: Readonly<Record<keyof typeof COMPOSITION | FattyAcid, string>> = {
   methanol: 'CH3OH', water: 'H2O', glycerol: 'HOCH2CH(OH)CH2OH', NaOH: 'NaOH', KOH: 'KOH', NaOCH3: 'NaOCH3', KOCH3: 'KOCH3', sulfuricAcid: 'HOSO2OH',
+  potassiumHydrogenPhthalate: 'HOCOC6H4COOK',
   caprylic: 'CH3(CH2)6COOH', capric: 'CH3(CH2)8COOH', lauric: 'CH3(CH2)10COOH', myristic: 'CH3(CH2)12COOH', palmitic: 'CH3(CH2)14COOH',
   palmitoleic: 'CH3(CH2)5CHCH(CH2)7COOH', stearic: 'CH3(CH2)16COOH', oleic: 'CH3(CH2)7CHCH(CH2)7COOH',
   linoleic: 'CH3(CH2)4CHCHCH2CHCH(CH2)7COOH', linolenic: 'CH3CH2CHCHCH2CHCHCH2CHCH(CH2)7COOH',
@@ -53,7 +54,7 @@ describe('handbook values', () => {
     ['lauric', 200.32], ['myristic', 228.38], ['palmitic', 256.43], ['palmitoleic', 254.41], ['stearic', 284.48], ['oleic', 282.47],
     ['linoleic', 280.45], ['linolenic', 278.44], ['erucic', 338.58], ['behenic', 340.59],
     ['NaOH', 39.997], ['KOH', 56.105], ['NaOCH3', 54.024], ['NaOCH3', 54.02], ['KOCH3', 70.132], ['KOCH3', 70.13],
-    ['methanol', 32.042], ['glycerol', 92.094], ['glycerol', 92.09], ['water', 18.015],
+    ['methanol', 32.042], ['glycerol', 92.094], ['glycerol', 92.09], ['water', 18.015], ['potassiumHydrogenPhthalate', 204.222],
   ] as const)('%s: %d', (name, printed) => {
     const decimals = String(printed).split('.')[1]?.length ?? 0;
     expect(Math.abs(molarMass(EVERY[name]!).toNumber() - printed)).toBeLessThanOrEqual(0.5 * 10 ** -decimals + 1e-9);

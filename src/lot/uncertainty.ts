@@ -1,0 +1,71 @@
+import { Decimal } from '../formula/decimal.js';
+import { slopes } from '../formula/derivative.js';
+import { shownText } from '../formula/digits.js';
+import type { Digits } from '../formula/quantity.js';
+import { isKnown } from '../formula/reading.js';
+import type { Unknown } from '../formula/reading.js';
+import type { UncertaintyJson } from './lot-reading.js';
+import type { LotRun } from './lot-run.js';
+import { uncertaintySources } from './uncertainty-sources.js';
+
+/** A line of a budget: what one source puts into the uncertainty of a result. */
+export interface Contribution {
+  /** Key of the source's standard uncertainty, e.g. `u.burette`. */
+  readonly key: string;
+  /** Standard uncertainty that it alone would leave, in the unit of the result. */
+  readonly u: Decimal;
+  /** Its share of the variance, 0 to 1. */
+  readonly share: Decimal;
+}
+
+/** How well a result is known (GUM, first order). */
+export interface Uncertainty {
+  /** Combined standard uncertainty, in the unit of the result. */
+  readonly u: Decimal;
+  /** Largest first; sources that put nothing in are left out. */
+  readonly budget: readonly Contribution[];
+}
+
+/** Coverage factor of the expanded uncertainty U = 2 u, for about 95 % (QUAM 8.3). */
+export const COVERAGE_FACTOR = new Decimal(2);
+
+/**
+ * The combined standard uncertainty of a result, u² = Σ (∂y/∂xᵢ · uᵢ)², with the sensitivities taken
+ * from the formulas. An error that moves several figures at once, such as that of the one burette,
+ * counts with the sum of their sensitivities. A source whose own uncertainty is not known is why the
+ * whole is not.
+ *
+ * @returns why it is not known, where the result or one of its sources is not
+ */
+export function uncertaintyOf(run: LotRun, key: string): Uncertainty | Unknown {
+  const { plan, findings } = run;
+  const found = slopes(plan, findings, key);
+  if (!(found instanceof Map)) return found as Unknown;
+  const slopeAt = found as ReadonlyMap<string, Decimal>;
+  const variances = new Map<string, Decimal>();
+  for (const source of uncertaintySources(run.runs)) {
+    const moved = source.at.flatMap((at) => slopeAt.get(at) ?? []);
+    const slope = moved.reduce((sum, one) => sum.plus(one), ZERO);
+    if (slope.isZero()) continue;
+    const u = findings.outcome(source.key);
+    if (!isKnown(u)) return u;
+    if (u.isZero()) continue;
+    const variance = slope.times(u).pow(2);
+    variances.set(source.key, (variances.get(source.key) ?? ZERO).plus(variance));
+  }
+  const total = [...variances.values()].reduce((sum, variance) => sum.plus(variance), ZERO);
+  const budget = [...variances].map(([source, variance]) => ({ key: source, u: variance.sqrt(), share: variance.div(total) }));
+  return { u: total.sqrt(), budget: budget.sort((a, b) => b.share.cmp(a.share)) };
+}
+
+/** As JSON, U shown to the decimals of the result it stands beside, but to no less than its first digit. */
+export function uncertaintyJson({ u }: Uncertainty, value: Decimal, digits: Digits): UncertaintyJson {
+  const expanded = u.times(COVERAGE_FACTOR);
+  const beside = shownText(expanded, { decimals: decimalsOf(shownText(value, digits)) });
+  const shown = new Decimal(beside).isZero() && !expanded.isZero() ? shownText(expanded, { significant: 1 }) : beside;
+  return { u: u.toString(), expanded: expanded.toString(), shown };
+}
+
+const decimalsOf = (text: string): number => text.split('.')[1]?.length ?? 0;
+
+const ZERO = new Decimal(0);
