@@ -6,6 +6,7 @@ export { EsterwayPanel } from './elements/panel/panel.js';
 export { EsterwayRoute } from './elements/route/route.js';
 export { EsterwaySite } from './elements/site/site.js';
 export { EsterwaySiteValues } from './elements/site/site-values.js';
+export { EsterwayTitrant } from './elements/titrant/titrant.js';
 export { EsterwayTitration } from './elements/titration/titration.js';
 export { EsterwayWorking } from './elements/working/working.js';
 export { defineEsterway } from './elements/define-all.js';

@@ -1,3 +1,4 @@
+import { deEvidenceQuantities } from './de-evidence-quantities.js';
 import type { QuantityTexts } from './en-quantities.js';
 
 /** German names of the quantities. */
@@ -155,4 +156,6 @@ export const deQuantities: QuantityTexts = {
   sulfuricLeft: 'Schwefelsäure im Öl',
   mass: 'Masse des Öls',
   'pretreated.ester': 'Ester im Öl',
+
+  ...deEvidenceQuantities,
 };

@@ -1,4 +1,6 @@
 import { deQuantities } from './de-quantities.js';
+import { deNotices, deReasons, deReplicates } from './de-remarks.js';
+import { deTitrant } from './de-titrant.js';
 import type { Texts } from './en.js';
 
 /** German. Labels begin with a noun, so that they can stand in a sentence as they are. */
@@ -6,6 +8,7 @@ export const de: Texts = {
   sections: {
     lot: 'Partie',
     titration: 'Titration',
+    titrant: 'Maßlösung',
     route: 'Verfahren',
     charge: 'Ansatz',
     working: 'Rechenweg',
@@ -35,6 +38,7 @@ export const de: Texts = {
     blank: 'Blindwert',
     titrationTemperature: 'Titrationstemperatur',
     standardisationTemperature: 'Temperatur bei Titerstellung',
+    titrantDate: 'Titer gestellt am',
     sampleDensity: 'Dichte der Probe',
     certificateAcidValue: 'Säurezahl laut Zertifikat',
     certificateFfa: 'FFA laut Zertifikat',
@@ -69,6 +73,12 @@ export const de: Texts = {
     pretreatmentMethanolBasis: 'Methanol der Veresterung nach',
     pretreatmentAcidBasis: 'Schwefelsäure nach',
     acidProofEquipment: 'Anlage säurefest',
+    titrantKnownFrom: 'Gehalt bekannt aus',
+    burette: 'Bürette',
+    repeatabilityBy: 'Wiederholgrenze nach',
+    temperatureCorrected: 'Temperatur korrigieren',
+    runsAreDear: 'Weitere Bestimmung aufwendig',
+    portionTable: 'Einwaage nach',
   },
   options: {
     acidKnownFrom: {
@@ -101,6 +111,15 @@ export const de: Texts = {
       'by-acidity': 'Säuregehalt: 10 oder 5 % der Säure', 'of-acid': '% der freien Säure', 'of-oil': '% der Ölmasse', 'oil-volume': '% des Ölvolumens',
     },
     acidProofEquipment: { yes: 'ja', no: 'nein' },
+    titrantKnownFrom: { label: 'Etikett', weighing: 'Einwaage', standardised: 'Titerstellung gegen KHP' },
+    burette: {
+      'A-10': 'Klasse A, 10 mL', 'A-25': 'Klasse A, 25 mL', 'A-50': 'Klasse A, 50 mL', 'B-10': 'Klasse B, 10 mL', 'B-25': 'Klasse B, 25 mL', 'B-50': 'Klasse B, 50 mL',
+      other: 'andere, eigene Werte',
+    },
+    repeatabilityBy: { 'd664-used': 'ASTM D664, gebrauchtes Öl', 'd664-fresh': 'ASTM D664, frisches Öl', typed: 'eigener Wert', 'typed-share': 'eigener Wert, % des Ergebnisses' },
+    temperatureCorrected: { yes: 'ja, wo abgelesen', no: 'nie' },
+    runsAreDear: { yes: 'ja', no: 'nein' },
+    portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
   },
   problems: {
     ambiguous: '„{typed}“ lässt sich auf zwei Arten lesen. Welche ist gemeint?',
@@ -147,12 +166,10 @@ export const de: Texts = {
     acidValue: 'Säurezahl, als KOH',
     ffa: 'freie Fettsäuren, als {acid}',
     alkali: '{alkali} zum Neutralisieren von 1 L Öl',
-    oneRun: 'Einfachbestimmung, durch keine zweite bestätigt.',
-    mean: 'Mittel aus {runs} Bestimmungen.',
-    incomplete: 'Bestimmung {run} ist unvollständig und zählt noch nicht.',
     certificate: 'Aus dem Zertifikat übernommen.',
     openWorking: 'Rechenweg zeigen',
-    lauric: 'Kokosartiges Fett, auf eine andere Säure berechnet: Laurinsäure wählen.',
+    plusMinus: '± {expanded}',
+    plusMinusNote: '± ist die erweiterte Messunsicherheit, U = 2 u, etwa 95 %.',
   },
   runs: {
     caption: 'Bestimmungen',
@@ -165,6 +182,8 @@ export const de: Texts = {
     strikeReasons: ['übertitriert', 'verschüttet', 'falsche Probenmenge', 'falsch abgelesen'],
     otherReason: 'anderer Grund',
     ofRetest: 'Bestimmungen der Nachtitration',
+    ofTitrant: 'Bestimmungen der Titerstellung',
+    standard: 'KHP',
     hint: 'Enter geht weiter, Pfeiltasten wechseln die Zeile; ganze Zeilen lassen sich aus einer Tabelle einfügen.',
   },
   verdicts: {
@@ -175,22 +194,13 @@ export const de: Texts = {
     'no-acid-step': 'Veresterung nötig, hier aber nicht möglich: verschneiden oder ablehnen',
     'not-known': 'Noch nicht bekannt',
   },
-  reasons: {
-    'at-or-below-direct-limit': 'FFA {ffa} % hält die Direktgrenze dieses Betriebs von {limit} % ein.',
-    'above-direct-limit': 'FFA {ffa} % liegt über der Direktgrenze dieses Betriebs von {limit} %.',
-    'above-pretreatment-limit': 'FFA {ffa} % liegt über den {limit} %, bis zu denen hier verestert wird.',
-    'within-guard-band': 'FFA {ffa} % liegt höchstens {guard} % neben der Grenze von {limit} %; genannt ist das Verfahren auf der sicheren Seite.',
-    'extra-negligible': 'Bis {limit} % ist der Katalysatorzuschlag vernachlässigbar.',
-    'no-acid-proof-equipment': 'Laut Betriebsvorgaben ist keine säurefeste Anlage vorhanden.',
-    'dry-before-base-step': 'Öl erst trocknen: Wasser {water} % liegt über der Grenze von {limit} % für die Umesterung.',
-    'dry-before-acid-step': 'Öl erst trocknen: Wasser {water} % liegt über der Grenze von {limit} % für die Veresterung.',
-    'water-not-measured': 'Wasser nicht gemessen: Es gilt der Richtwert {water} %, die Wassergrenze bleibt ungeprüft.',
-    'pretreatment-misses-target': 'Auch {passes} Durchgänge lassen voraussichtlich bis zu {left} % FFA, mehr als das Ziel von {target} %.',
-    'ffa-not-known': 'Das Verfahren richtet sich nach den freien Fettsäuren.',
-  },
+  reasons: deReasons,
+  notices: deNotices,
+  replicates: deReplicates,
   route: {
     scale: 'FFA {ffa} % auf einer Skala von 0 bis {most} %; Direktgrenze {limit} %.',
     scaleEmpty: 'Skala von 0 bis {most} %; Direktgrenze {limit} %. FFA noch nicht bekannt.',
+    odds: 'Der wahre Wert liegt mit {below} % Wahrscheinlichkeit bei höchstens {limit} %, mit {above} % darüber.',
     directMark: 'Direkt- grenze',
     pretreatmentMark: 'Verest.- grenze',
     directAllTheSame: 'Trotzdem direkt',
@@ -299,8 +309,11 @@ export const de: Texts = {
       prediction: 'Vorhersage der Veresterung',
       oil: 'Öl',
       bench: 'Labor',
+      equipment: 'Geräte und ihre Toleranzen',
+      vessel: 'Behälter',
     },
     source: '{title} ({mark})',
   },
+  titrant: deTitrant,
   quantities: deQuantities,
 };

@@ -1,3 +1,5 @@
+import { enEvidenceQuantities } from './en-evidence-quantities.js';
+
 /**
  * English names of the quantities, by the last part of their keys; a name that one context needs for
  * itself stands under both (`pass.conversion`). A quantity not listed is named by its field's label.
@@ -157,6 +159,8 @@ export const enQuantities = {
   sulfuricLeft: 'sulfuric acid in the oil',
   mass: 'mass of the oil',
   'pretreated.ester': 'ester in the oil',
+
+  ...enEvidenceQuantities,
 };
 
 /** The same names and words in any language. */

@@ -1,10 +1,13 @@
 import { enQuantities } from './en-quantities.js';
+import { enNotices, enReasons, enReplicates } from './en-remarks.js';
+import { enTitrant } from './en-titrant.js';
 
 /** English: every sentence a user can read. `{…}` stands for a figure or a word put in. */
 export const en = {
   sections: {
     lot: 'Lot',
     titration: 'Titration',
+    titrant: 'Titrant',
     route: 'Route',
     charge: 'Charge',
     working: 'Working',
@@ -34,6 +37,7 @@ export const en = {
     blank: 'Blank',
     titrationTemperature: 'Temperature now',
     standardisationTemperature: 'Temperature when standardised',
+    titrantDate: 'Standardised on',
     sampleDensity: 'Density of the sample',
     certificateAcidValue: 'Acid value on the certificate',
     certificateFfa: 'Free fatty acid on the certificate',
@@ -68,6 +72,12 @@ export const en = {
     pretreatmentMethanolBasis: 'Methanol of the acid step by',
     pretreatmentAcidBasis: 'Sulfuric acid by',
     acidProofEquipment: 'Acid-proof equipment',
+    titrantKnownFrom: 'Strength known from',
+    burette: 'Burette',
+    repeatabilityBy: 'Repeatability from',
+    temperatureCorrected: 'Correct for temperature',
+    runsAreDear: 'A further run is dear',
+    portionTable: 'Portions after',
   },
   options: {
     acidKnownFrom: {
@@ -100,6 +110,15 @@ export const en = {
       'by-acidity': 'acidity: 10 or 5 % of the acid', 'of-acid': '% of the free acid', 'of-oil': '% of the oil’s mass', 'oil-volume': '% of the oil’s volume',
     },
     acidProofEquipment: { yes: 'yes', no: 'no' },
+    titrantKnownFrom: { label: 'label', weighing: 'weighing', standardised: 'standardisation on KHP' },
+    burette: {
+      'A-10': 'class A, 10 mL', 'A-25': 'class A, 25 mL', 'A-50': 'class A, 50 mL', 'B-10': 'class B, 10 mL', 'B-25': 'class B, 25 mL', 'B-50': 'class B, 50 mL',
+      other: 'another, own figures',
+    },
+    repeatabilityBy: { 'd664-used': 'ASTM D664, used oil', 'd664-fresh': 'ASTM D664, fresh oil', typed: 'own figure', 'typed-share': 'own figure, % of the result' },
+    temperatureCorrected: { yes: 'yes, where it is read', no: 'never' },
+    runsAreDear: { yes: 'yes', no: 'no' },
+    portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
   },
   problems: {
     ambiguous: '“{typed}” can be read in two ways. Which one is meant?',
@@ -146,12 +165,10 @@ export const en = {
     acidValue: 'acid value, as KOH',
     ffa: 'free fatty acid, as {acid}',
     alkali: '{alkali} to neutralise a litre of oil',
-    oneRun: 'One run, not checked by a second.',
-    mean: 'Mean of {runs} runs.',
-    incomplete: 'Run {run} is not complete and does not count yet.',
     certificate: 'Taken from the certificate.',
     openWorking: 'Show the working',
-    lauric: 'Coconut-like fat counted on another acid: choose lauric acid.',
+    plusMinus: '± {expanded}',
+    plusMinusNote: '± is the expanded uncertainty, U = 2 u, about 95 %.',
   },
   runs: {
     caption: 'Runs',
@@ -164,6 +181,8 @@ export const en = {
     strikeReasons: ['overshot', 'spilled', 'wrong portion', 'misread'],
     otherReason: 'another reason',
     ofRetest: 'Runs of the retest',
+    ofTitrant: 'Runs of the standardisation',
+    standard: 'KHP',
     hint: 'Enter goes on, arrows change the run; rows can be pasted from a sheet.',
   },
   verdicts: {
@@ -174,22 +193,13 @@ export const en = {
     'no-acid-step': 'Needs the acid step, which this site cannot run: blend down, or decline',
     'not-known': 'Not known yet',
   },
-  reasons: {
-    'at-or-below-direct-limit': 'FFA {ffa} % is within this site’s direct limit of {limit} %.',
-    'above-direct-limit': 'FFA {ffa} % is above this site’s direct limit of {limit} %.',
-    'above-pretreatment-limit': 'FFA {ffa} % is above the {limit} % that the acid step takes here.',
-    'within-guard-band': 'FFA {ffa} % is within {guard} % of the limit of {limit} %; the safe route is named.',
-    'extra-negligible': 'At or below {limit} % the extra catalyst is negligible.',
-    'no-acid-proof-equipment': 'The site profile says there is no acid-proof equipment.',
-    'dry-before-base-step': 'Dry the oil first: water {water} % is above {limit} % for the base step.',
-    'dry-before-acid-step': 'Dry the oil first: water {water} % is above {limit} % for the acid step.',
-    'water-not-measured': 'Water was not measured: the usual {water} % is assumed, and the water limit is not checked.',
-    'pretreatment-misses-target': 'Even {passes} passes are expected to leave up to {left} % FFA, above the target of {target} %.',
-    'ffa-not-known': 'The route follows from the free fatty acid.',
-  },
+  reasons: enReasons,
+  notices: enNotices,
+  replicates: enReplicates,
   route: {
     scale: 'FFA {ffa} % on a scale from 0 to {most} %; direct limit {limit} %.',
     scaleEmpty: 'Scale from 0 to {most} %; direct limit {limit} %. FFA not known yet.',
+    odds: 'The true figure is at or below {limit} % with a probability of {below} %, above it with {above} %.',
     directMark: 'direct limit',
     pretreatmentMark: 'acid step limit',
     directAllTheSame: 'Direct all the same',
@@ -298,9 +308,12 @@ export const en = {
       prediction: 'Prediction of the acid step',
       oil: 'Oil',
       bench: 'Bench',
+      equipment: 'Equipment and its tolerances',
+      vessel: 'Vessel',
     },
     source: '{title} ({mark})',
   },
+  titrant: enTitrant,
   quantities: enQuantities,
 };
 

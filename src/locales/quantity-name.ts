@@ -3,10 +3,10 @@ import type { Texts } from './en.js';
 
 type Words = Readonly<Record<string, string>>;
 
-/** `retest.run1.titre`, `pass2.conversion.slow`, `direct.catalyst`: where, and which run or pass, and what. */
-const KEY = /^(retest\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
+/** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: where, and which run or pass, and what. */
+const KEY = /^(retest\.|titrant\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
 /** A site value that each catalyst product has for itself: `KOH.assay`. */
-const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density)$/;
+const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility)$/;
 
 /** The name of a quantity in words, `run 1: net titre`; the key itself where it has no name. */
 export function quantityName(key: string, texts: Texts): string {

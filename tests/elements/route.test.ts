@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { page } from 'vitest/browser';
 import type { EsterwayRoute, LotEntry, SiteProfile } from '../../src/index.js';
 import { click, controls, deep, nameOf, place, words } from './tools/page.js';
-import { certified, lot, site } from './tools/lots.js';
+import { certified, lot, run, site } from './tools/lots.js';
 import { de, en, fill } from './tools/texts.js';
 
 const placeRoute = (entry: LotEntry, profile: SiteProfile = site({}), lang = 'en') =>
@@ -18,7 +18,7 @@ const noAcid = site({ options: { acidProofEquipment: 'no' } });
 describe('the verdict', () => {
   test.each([
     ['direct', certified('1.20', dry), site({}), fill(en.reasons['at-or-below-direct-limit'], { ffa: '1.20', limit: '3.0' })],
-    ['direct', certified('3.0', dry), site({}), fill(en.reasons['at-or-below-direct-limit'], { ffa: '3.00', limit: '3.0' })],
+    ['direct', certified('2.80', dry), site({}), fill(en.reasons['at-or-below-direct-limit'], { ffa: '2.80', limit: '3.0' })],
     ['direct', certified('0.30', dry), site({}), fill(en.reasons['extra-negligible'], { limit: '0.50' })],
     ['two-step', certified('4.30', dry), site({}), fill(en.reasons['above-direct-limit'], { ffa: '4.30', limit: '3.0' })],
     ['outside', certified('60', dry), site({}), fill(en.reasons['above-pretreatment-limit'], { ffa: '60.0', limit: '40' })],
@@ -57,6 +57,27 @@ describe('the verdict', () => {
   });
 });
 
+describe('a close call', () => {
+  const close = certified('3.0', dry); // ± 5 % of a certificate is ± 0.15 % here
+
+  test('names the safe route, how likely either side is, and that no run would settle a certificate', async () => {
+    const text = said(await placeRoute(close));
+    expect(text).toContain(en.verdicts['too-close']);
+    expect(text).toContain(en.verdicts['two-step']);
+    expect(text).toContain(fill(en.route.odds, { limit: '3.0', below: '50', above: '50' }));
+    expect(text).toContain(fill(en.reasons['no-runs-settle'], { source: en.quantities['u.certificate'] }));
+  });
+
+  test('of scattered runs tells how many more would do', async () => {
+    // 2.90 % by two runs: r = 0.117 X leaves u = 0.086 % of scatter, a good burette hardly anything; four runs make it 0.061 %, 1.645 times that is 0.100 %
+    const runs = [run('2.500 g', '0.00', '2.56'), run('2.500 g', '2.56', '5.12')];
+    const good = site({ options: { burette: 'A-10' } });
+    const text = said(await placeRoute(lot({ figures: { titrantStrength: '0.1000 mol/L', waterContent: '0.05 %', oilAmount: '900 kg' }, runs }), good));
+    expect(text).toContain(en.verdicts['too-close']);
+    expect(text).toContain(fill(en.reasons['more-runs-settle'], { runs: '2' }));
+  });
+});
+
 describe('the water gate', () => {
   test.each([
     ['1.20', '0.25', 'dry-before-base-step', '0.10'],
@@ -88,7 +109,7 @@ describe('the burette scale', () => {
 
   test('is told in words', async () => {
     await placeRoute(certified('4.30', dry));
-    await expect.element(page.getByRole('img', { name: fill(en.route.scale, { ffa: '4.30', most: '6', limit: '3.0' }) })).toBeVisible();
+    await expect.element(page.getByRole('img', { name: fill(en.route.scale, { ffa: '4.30 ± 0.25', most: '6', limit: '3.0' }) })).toBeVisible();
   });
 
   test('without a result, too', async () => {
@@ -163,5 +184,5 @@ test('in German, with German figures', async () => {
   const element = await placeRoute(certified('4.30', dry), site({}), 'de');
   expect(said(element)).toContain(de.verdicts['two-step']);
   expect(said(element)).toContain(fill(de.reasons['above-direct-limit'], { ffa: '4,30', limit: '3,0' }));
-  await expect.element(page.getByRole('img', { name: fill(de.route.scale, { ffa: '4,30', most: '6', limit: '3,0' }) })).toBeVisible();
+  await expect.element(page.getByRole('img', { name: fill(de.route.scale, { ffa: '4,30 ± 0,25', most: '6', limit: '3,0' }) })).toBeVisible();
 });

@@ -86,7 +86,7 @@ describe('rows from a sheet', () => {
     const element = await placeRuns('en', { ...clean, runs: [] });
     expect(await paste(input(element, cell(1, 'sample')), rows)).toBe(false);
     expect(element.entry.runs).toEqual(three);
-    expect(words(element)).toContain(fill(en.result.mean, { runs: '3' }));
+    expect(words(element)).toContain(`Mean of 3 runs`);
     expect(input(element, cell(3, 'end')).value).toBe('11.17');
     expect(hasField(element, cell(4, 'sample'))).toBe(true);
   });
@@ -137,7 +137,7 @@ describe('striking out', () => {
     expect(element.value).not.toBe(mean);
     expect(input(element, cell(3, 'end')).value).toBe('12.00');
     expect(words(element)).toContain(fill(en.runs.struck, { reason: en.runs.strikeReasons[0]! }));
-    expect(words(element)).toContain(fill(en.result.mean, { runs: '2' }));
+    expect(words(element)).toContain(`Mean of 2 runs`);
 
     await click(button(element, restore(3)));
     expect(element.entry.runs[2]).toEqual(run('2.501 g', '7.44', '12.00'));

@@ -12,20 +12,20 @@ const firstCell = fill(en.field.cellOf, { run: '1', cell: en.fields.sample });
 describe('the result', () => {
   test('is acid value and free fatty acid, with what it rests on', async () => {
     const text = words(await placeTitration(sour));
-    expect(text).toContain(`8.5 mg/g ${en.result.acidValue}`);
-    expect(text).toContain(`4.29 % ${fill(en.result.ffa, { acid: en.options.referenceAcid.oleic })}`);
-    expect(text).toContain(fill(en.result.mean, { runs: '2' }));
+    expect(text).toContain(`8.5 mg/g ± 0.5 mg/g ${en.result.acidValue}`);
+    expect(text).toContain(`4.29 % ± 0.27 % ${fill(en.result.ffa, { acid: en.options.referenceAcid.oleic })}`);
+    expect(text).toContain(`Mean of 2 runs`);
     expect(text).toContain(fill(en.result.alkali, { alkali: 'KOH' }));
   });
 
   test('of one run says that no second has checked it', async () => {
-    expect(words(await placeTitration({ ...sour, runs: sour.runs.slice(0, 1) }))).toContain(en.result.oneRun);
+    expect(words(await placeTitration({ ...sour, runs: sour.runs.slice(0, 1) }))).toContain(en.notices['one-run']);
   });
 
   test('stays while the next run is being typed', async () => {
     const element = await placeTitration({ ...sour, runs: [...sour.runs, { sample: figure('2.5 g') }] });
     expect(element.value).toBe('4.29');
-    expect(words(element)).toContain(fill(en.result.incomplete, { run: '3' }));
+    expect(words(element)).toContain(fill(en.notices['run-incomplete'], { run: '3' }));
   });
 
   test('opens its working', async () => {
@@ -130,8 +130,8 @@ test('g/L and mol/L of the titrant are both understood', async () => {
 
 test('coconut counted on another acid is remarked', async () => {
   const coconut = { glyceridesBy: 'profile', fat: 'coconut' };
-  expect(words(await placeTitration({ ...sour, options: coconut }))).toContain(en.result.lauric);
-  expect(words(await placeTitration({ ...sour, options: { ...coconut, referenceAcid: 'lauric' } }))).not.toContain(en.result.lauric);
+  expect(words(await placeTitration({ ...sour, options: coconut }))).toContain(en.notices['lauric-on-other-basis']);
+  expect(words(await placeTitration({ ...sour, options: { ...coconut, referenceAcid: 'lauric' } }))).not.toContain(en.notices['lauric-on-other-basis']);
 });
 
 describe('standing alone', () => {

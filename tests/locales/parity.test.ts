@@ -6,13 +6,15 @@ import { REASON_CODES } from '../../src/decision/route.js';
 import { NUMBER_DOUBTS } from '../../src/exchange/number-text.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../src/lot/defaults.js';
 import { KNOWN_KEYS, fieldOf } from '../../src/lot/keys.js';
+import { NOTICE_CODES } from '../../src/lot/lot-reading.js';
 import { de } from '../../src/locales/de.js';
 import { en, fill } from '../../src/locales/en.js';
 import type { Texts } from '../../src/locales/en.js';
 import { fieldLabel, fieldName, quantityName } from '../../src/locales/quantity-name.js';
 
 const languages: Readonly<Record<string, Texts>> = { en, de };
-const sheet = lotFormulas({ runs: 2, counted: [0, 1] }, { runs: 1, counted: [0] });
+const two = { runs: 2, counted: [0, 1] };
+const sheet = lotFormulas({ lot: two, retest: { runs: 1, counted: [0] }, titrant: two });
 
 /** Every text of a language by its path, `problems.ambiguous`. */
 function textsOf(part: unknown, path = ''): [string, string][] {
@@ -37,7 +39,7 @@ describe('German says what English says', () => {
 
   it('everything is translated but signs and words that are alike', () => {
     const alike = english.filter(([path, text]) => /\p{L}{4}/u.test(text.replace(/\{\w+\}/g, '')) && german.get(path) === text).map(([path]) => path);
-    expect(alike).toEqual(['sections › titration', 'fields › start', 'options › titrantAlkali › NaOH', 'charge › forRun › methanol']);
+    expect(alike).toEqual(['sections › titration', 'fields › start', 'options › titrantAlkali › NaOH', 'options › portionTable › d664', 'options › portionTable › d974', 'charge › forRun › methanol']);
   });
 });
 
@@ -75,6 +77,7 @@ describe.each(Object.entries(languages))('%s', (language, texts) => {
     expect(codes.filter((code) => !(code in texts.problems))).toEqual([]);
     expect(Object.keys(texts.problems).filter((code) => code !== 'other' && !codes.includes(code))).toEqual([]);
     expect(Object.keys(texts.reasons).sort()).toEqual([...REASON_CODES].sort());
+    expect(Object.keys(texts.notices).sort()).toEqual([...NOTICE_CODES].sort());
     expect(Object.keys(texts.cautions).filter((code) => code !== 'title').sort()).toEqual([...CAUTIONS].sort());
   });
 

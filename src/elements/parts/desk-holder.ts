@@ -101,7 +101,7 @@ export class DeskHolder {
     if (this.#outer) return;
     event.stopPropagation();
     if (!event.ofSite) return this.edit(event.edit);
-    if (event.edit.kind !== 'figure' && event.edit.kind !== 'option') return;
+    if (event.edit.kind === 'replace') return;
     const site = applySiteEdit(this.#desk.site, event.edit);
     this.setSite(site);
     this.#host.dispatchEvent(new EsterwaySiteChangeEvent(site));

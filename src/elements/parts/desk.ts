@@ -19,10 +19,17 @@ export interface Desk {
 export const deskContext = createContext<Desk>(Symbol('esterway-desk'));
 
 export function deskOf(entry: LotEntry, site: SiteProfile, units: UnitSystem, canUndo = false): Desk {
-  const reading = readLot(entry, site);
+  const reading = readLot(entry, site, { today: today() });
   const rest = { reading, units, canUndo };
   if ('faults' in reading) return { entry, site, ...rest };
   return { entry: whole(EMPTY_LOT, entry), site: whole(EMPTY_SITE, site), ...rest };
+}
+
+/** The day by the clock of the machine, ISO 8601. */
+function today(): string {
+  const now = new Date();
+  const two = (part: number): string => String(part).padStart(2, '0');
+  return `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
 }
 
 /** Parts left out of a document count as empty. */

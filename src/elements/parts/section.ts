@@ -9,6 +9,7 @@ import { fill } from '../../locales/en.js';
 import { fieldLabel, fieldName } from '../../locales/quantity-name.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { Figure } from '../../lot/figure.js';
+import type { Notice } from '../../lot/lot-reading.js';
 import { LotElement } from './base.js';
 import { EsterwayEditEvent, EsterwayOpenEvent } from './events.js';
 import { faultsBox } from './faults.js';
@@ -132,6 +133,24 @@ export abstract class SectionElement extends LotElement {
     });
   }
 
+  /** The remarks that stand at some of the fields, as boxes. */
+  protected noticesAt(at: (field: string) => boolean): readonly TemplateResult[] {
+    const said = this.lot?.notices.filter(({ code, quantity }) => at(quantity) && !IN_PASSING.includes(code)) ?? [];
+    return said.map((notice) => html`<p class="gate">${this.noticeText(notice)}</p>`);
+  }
+
+  protected noticeText({ code, params = {} }: Notice): string {
+    const words = Object.entries(params).map(([name, value]) => [name, /^-?[\d.]+$/.test(value) ? this.number(roundText(value)) : value]);
+    return fill(this.texts.notices[code], Object.fromEntries(words) as Record<string, string>);
+  }
+
+  /** The expanded uncertainty of a result, `± 0.4 mg/g`; undefined while it is not known. */
+  protected plusMinus(key: string): string | undefined {
+    const shown = this.lot?.uncertainties[key]?.shown;
+    const unit = this.reading(key)?.unit;
+    return shown === undefined ? undefined : fill(this.texts.result.plusMinus, { expanded: `${this.number(shown)}\u00a0${unit ?? ''}`.trim() });
+  }
+
   /** Why a figure is not known, as a sentence. */
   protected whyUnknown(key: string): string {
     const reading = this.reading(key);
@@ -182,6 +201,9 @@ export abstract class SectionElement extends LotElement {
     this.dispatchEvent(new EsterwayOpenEvent(key));
   }
 }
+
+/** Remarks that a section makes in the line under its result. */
+const IN_PASSING: readonly string[] = ['one-run', 'run-incomplete', 'target-not-reached'];
 
 /** Bounds can be results with 34 digits; a sentence needs four. */
 const roundText = (text: string): string => new Decimal(text).toSignificantDigits(4).toString();

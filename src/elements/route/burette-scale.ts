@@ -5,6 +5,8 @@ import type { TemplateResult } from 'lit';
 export interface ScaleReading {
   /** FFA, %; undefined while it is not known. */
   readonly ffa: number | undefined;
+  /** Expanded uncertainty of it, %. */
+  readonly expanded?: number;
   readonly directLimit: number;
   readonly pretreatmentLimit: number;
   /** Words at the two marks. */
@@ -44,6 +46,7 @@ export function buretteScale(reading: ScaleReading): TemplateResult {
       ${majors.map((value, i) => svg`
         <path class="tick" d="M${RIGHT} ${y(value)} h-9" />
         <text x=${RIGHT + 5} y=${y(value) + 4}>${write(value)}${i === majors.length - 1 ? ' %' : ''}</text>`)}
+      ${ffa === undefined || reading.expanded === undefined ? '' : svg`<path class="spread" d="M${LEFT + 5} ${y(ffa - reading.expanded)} H${RIGHT - 5} M${(LEFT + RIGHT) / 2} ${y(ffa - reading.expanded)} V${y(ffa + reading.expanded)} M${LEFT + 5} ${y(ffa + reading.expanded)} H${RIGHT - 5}" />`}
       ${mark(y(directLimit), reading.directMark)}
       ${pretreatmentLimit < most ? mark(y(pretreatmentLimit), reading.pretreatmentMark) : ''}
       ${level === undefined ? '' : svg`<path class="meniscus" d="M${LEFT + 1} ${level} q${(RIGHT - LEFT - 2) / 2} 6 ${RIGHT - LEFT - 2} 0" />`}
@@ -89,6 +92,11 @@ export const buretteStyles = css`
     stroke: var(--_pink);
     stroke-width: 2.4;
   }
+  .burette .spread {
+    fill: none;
+    stroke: var(--_ink);
+    stroke-width: 1.6;
+  }
   .burette .limit {
     stroke: var(--_amber);
     stroke-width: 1.6;
@@ -109,6 +117,9 @@ export const buretteStyles = css`
     }
     .burette .oil {
       fill: none;
+    }
+    .burette .spread {
+      stroke: CanvasText;
     }
     .burette .meniscus {
       stroke: Highlight;

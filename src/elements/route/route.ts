@@ -3,6 +3,7 @@ import type { Reason } from '../../decision/route.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { fill } from '../../locales/en.js';
+import { quantityName } from '../../locales/quantity-name.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
 
@@ -112,6 +113,7 @@ export class EsterwayRoute extends SectionElement {
           <p class="verdict" part="verdict">${this.verdict}</p>
           ${safe ? html`<p class="why"><b>${this.texts.verdicts[safe]}</b></p>` : nothing}
           ${route?.reasons.map((reason) => html`<p class="why">${this.reason(reason)}</p>`)}
+          ${this.odds()}
           ${route?.verdict === 'not-known' ? html`<p class="why quiet">${this.whyUnknown('freeFattyAcid')}</p>` : nothing}
         </div>
       </div>
@@ -125,8 +127,17 @@ export class EsterwayRoute extends SectionElement {
     `;
   }
 
+  /** In a close call, how likely the true figure lies on either side. */
+  private odds(): unknown {
+    const odds = this.lot?.route.odds;
+    if (!odds) return nothing;
+    const percent = (part: number): string => this.number(String(Math.min(99, Math.max(1, Math.round(part * 100)))));
+    return html`<p class="why">${fill(this.texts.route.odds, { below: percent(Number(odds.below)), above: percent(1 - Number(odds.below)), limit: this.siteText(odds.limit) ?? this.share(odds.limit, undefined) })}</p>`;
+  }
+
   private reason({ code, params }: Reason): string {
-    const shown = Object.entries(params).map(([name, value]) => [name, name === 'passes' ? value : (this.siteText(value) ?? this.share(value, params['limit'] ?? params['target']))] as const);
+    const words = (name: string, value: string): string | undefined => (name === 'passes' || name === 'runs' ? value : name === 'source' ? quantityName(value, this.texts) : undefined);
+    const shown = Object.entries(params).map(([name, value]) => [name, words(name, value) ?? this.siteText(value) ?? this.share(value, params['limit'] ?? params['target'])] as const);
     const water = this.reading('waterContent')?.shown;
     return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });
   }
@@ -154,12 +165,14 @@ export class EsterwayRoute extends SectionElement {
     const ffa = figure('freeFattyAcid');
     const directLimit = figure('directLimit') ?? 0;
     const words = {
-      ffa: this.amountPlain('freeFattyAcid'),
+      ffa: [this.amountPlain('freeFattyAcid'), this.plusMinus('freeFattyAcid')].filter(Boolean).join(' ').replace(/\s%$/, ''),
       limit: this.amountPlain('directLimit'),
       most: this.number(String(scaleOf(ffa, directLimit).most)),
     };
+    const expanded = this.lot?.uncertainties['freeFattyAcid']?.expanded;
     return buretteScale({
       ffa,
+      ...(expanded !== undefined && { expanded: Number(expanded) }),
       directLimit,
       pretreatmentLimit: figure('pretreatmentLimit') ?? 100,
       directMark: texts.route.directMark,

@@ -1,13 +1,8 @@
 import { css, html } from 'lit';
-import type { TemplateResult } from 'lit';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
-import { fill } from '../../locales/en.js';
-import { fieldLabel } from '../../locales/quantity-name.js';
-import type { FigureInputEvent } from '../parts/figure-field.js';
-import type { OptionInputEvent } from '../parts/option-field.js';
-import { SectionElement } from '../parts/section.js';
+import { SiteSectionElement } from '../parts/site-section.js';
 
-type Group = 'limits' | 'catalyst' | 'methanol' | 'acidStep' | 'prediction' | 'oil' | 'bench';
+type Group = 'limits' | 'catalyst' | 'methanol' | 'acidStep' | 'prediction' | 'oil' | 'bench' | 'equipment' | 'vessel';
 
 /** Keys of a group, choices first, in the order a site would set them. */
 const GROUPS: Readonly<Record<Group, readonly string[]>> = {
@@ -21,12 +16,13 @@ const GROUPS: Readonly<Record<Group, readonly string[]>> = {
   ],
   prediction: Object.keys(DEFAULT_FIGURES).filter((key) => key.startsWith('esterification.')),
   oil: ['glyceridesBy', 'fat', 'oilDensityBy', 'saponificationValue', 'iodineValue', 'typicalOilDensity', 'measuredOilDensity', 'waterContent', 'insolubles', 'oilTemperature'],
-  bench: ['titrantAlkali', 'titrantSolvent', 'blankPolicy', 'sampleTakenBy', 'referenceAcid', 'titrantStrength', 'standardisationTemperature', 'sampleDensity'],
-};
-
-/** Units of figures that have no usual value. */
-const UNIT_OF: Readonly<Record<string, readonly string[]>> = {
-  titrantStrength: ['mol/L', 'g/L'], iodineValue: [''], measuredOilDensity: ['kg/m³'],
+  bench: ['titrantAlkali', 'titrantSolvent', 'blankPolicy', 'sampleTakenBy', 'referenceAcid', 'standardisationTemperature', 'sampleDensity', 'temperatureCorrected', 'repeatabilityBy', 'runsAreDear', 'portionTable'],
+  equipment: [
+    'burette', 'dropVolume', 'balanceLinearity', 'standardBalanceLinearity', 'sampleVolumeTolerance', 'sampleDensityTolerance', 'thermometerTolerance', 'temperatureSpread',
+    'titrantLabelTolerance', 'titrantWeighingTolerance', 'khpPurityTolerance', 'standardisationRepeatability', 'certificateTolerance', 'oilAmountTolerance',
+    'catalystAssayTolerance', 'sulfuricAssayTolerance', 'saponificationTolerance',
+  ],
+  vessel: ['vesselVolume', 'vesselFill'],
 };
 
 /**
@@ -44,9 +40,9 @@ const UNIT_OF: Readonly<Record<string, readonly string[]>> = {
  * @csspart field-line - the ruled line of a field
  * @csspart field-input - the input of a field
  */
-export class EsterwaySiteValues extends SectionElement {
+export class EsterwaySiteValues extends SiteSectionElement {
   static override styles = [
-    ...SectionElement.styles,
+    ...SiteSectionElement.styles,
     css`
       .fields {
         grid-template-columns: repeat(auto-fill, minmax(min(100%, 11em), 1fr));
@@ -78,46 +74,28 @@ export class EsterwaySiteValues extends SectionElement {
       <p class="note">${site.note}</p>
       ${(Object.keys(GROUPS) as Group[]).map((group) => html`
         <h3>${site.groups[group]}</h3>
-        <div class="fields">${this.keysOf(group).map((key) => (key in DEFAULT_OPTIONS ? this.siteOption(key) : this.siteFigure(key)))}</div>
+        <div class="fields">${this.keysOf(group).map((key) => (key in DEFAULT_OPTIONS ? this.siteOptionField(key) : this.siteFigureField(key)))}</div>
       `)}
     `;
   }
 
-  /** The catalyst group shows the product in use: its assay, its base load, and the density of a solution. */
+  /** A group shows what the options in force need: the product in use, own figures where they count. */
   private keysOf(group: Group): readonly string[] {
-    if (group !== 'catalyst') return GROUPS[group];
-    const product = this.siteOptionValue('catalyst');
-    return [...GROUPS.catalyst, ...['assay', 'baseLoad', 'density'].map((name) => `${product}.${name}`).filter((key) => key in DEFAULT_FIGURES)];
-  }
-
-  private siteOptionValue(key: string): string {
-    return this.desk.site.options[key] ?? DEFAULT_OPTIONS[key] ?? '';
-  }
-
-  private siteOption(key: string): TemplateResult {
-    return html`<esterway-option
-      exportparts="line: field-line, input: field-input"
-      .label=${(this.texts.choices as Readonly<Record<string, string>>)[key] ?? key}
-      .options=${this.optionWords(key)}
-      .value=${this.siteOptionValue(key)}
-      @option-input=${(event: OptionInputEvent) => this.editSite({ kind: 'option', key, option: event.option })}
-    ></esterway-option>`;
-  }
-
-  private siteFigure(key: string): TemplateResult {
-    const { texts } = this;
-    const usual = DEFAULT_FIGURES[key];
-    const note = usual && fill(texts.site.source, { title: usual.source.title, mark: texts.marks[usual.source.mark] });
-    return html`<esterway-figure
-      exportparts="line: field-line, input: field-input"
-      .label=${fieldLabel(key, texts)}
-      .figure=${this.desk.site.figures[key]}
-      .standing=${usual}
-      .units=${usual ? [usual.unit] : (UNIT_OF[key] ?? [''])}
-      .problem=${key in this.desk.entry.figures ? undefined : this.problemAt(key)}
-      .note=${usual?.source.mark === 'practice' ? texts.marks.practice : note}
-      @figure-input=${(event: FigureInputEvent) => this.editSite({ kind: 'figure', key, figure: event.figure })}
-    ></esterway-figure>`;
+    const keys = GROUPS[group];
+    switch (group) {
+      case 'catalyst': {
+        const product = this.siteOption('catalyst');
+        return [...keys, ...['assay', 'baseLoad', 'density', 'solubility'].map((name) => `${product}.${name}`).filter((key) => key in DEFAULT_FIGURES)];
+      }
+      case 'bench': {
+        const own = { typed: ['repeatabilityTyped'], 'typed-share': ['repeatabilityShare'] }[this.siteOption('repeatabilityBy')] ?? [];
+        return keys.flatMap((key) => (key === 'repeatabilityBy' ? [key, ...own] : [key]));
+      }
+      case 'equipment':
+        return keys.flatMap((key) => (key === 'burette' && this.siteOption(key) === 'other' ? [key, 'buretteCapacityTyped', 'buretteToleranceTyped'] : [key]));
+      default:
+        return keys;
+    }
   }
 }
 

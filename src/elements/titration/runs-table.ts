@@ -4,17 +4,17 @@ import { decimalMark, showNumber } from '../../exchange/number-format.js';
 import { readNumber } from '../../exchange/number-text.js';
 import { fill } from '../../locales/en.js';
 import type { Texts } from '../../locales/en.js';
-import type { CellEdit, Edit, RunCell, RunList } from '../../lot/edit.js';
+import type { CellEdit, Edit, RunCell } from '../../lot/edit.js';
 import type { RunEntry } from '../../lot/entry.js';
 import type { Figure } from '../../lot/figure.js';
+import type { RunList } from '../../lot/keys.js';
 import { runState } from '../../lot/runs.js';
-import type { Desk } from '../parts/desk.js';
 import { FigureField, readFigureText } from '../parts/figure-field.js';
 import type { FigureInputEvent, FigurePasteEvent } from '../parts/figure-field.js';
 
 /** What the table needs of the section around it. */
 export interface RunsTableHost {
-  desk(): Desk;
+  runs(): readonly RunEntry[];
   texts(): Texts;
   tag(): string;
   /** A figure without its unit. */
@@ -25,6 +25,10 @@ export interface RunsTableHost {
 
 const CELLS: readonly RunCell[] = ['sample', 'start', 'end'];
 const MOST_RUNS = 20;
+const PREFIXES = { runs: '', retestRuns: 'retest.', titrantRuns: 'titrant.' } as const;
+const CAPTIONS = {
+  runs: ({ runs }: Texts) => runs.caption, retestRuns: ({ runs }: Texts) => runs.ofRetest, titrantRuns: ({ runs }: Texts) => runs.ofTitrant,
+} as const;
 
 /** The runs as a small sheet: Enter goes on, the arrows change the row, rows can be pasted. */
 export class RunsTable implements ReactiveController {
@@ -128,21 +132,21 @@ export class RunsTable implements ReactiveController {
 
   render(list: RunList, sampleUnit: 'g' | 'mL'): TemplateResult {
     const texts = this.#section.texts();
-    const runs = this.#section.desk().entry[list];
+    const runs = this.#section.runs();
     // one empty row at the end to type the next run in
     const rows = runs.length < MOST_RUNS ? [...runs, {}] : runs;
     return html`
       <table @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }} @focusout=${this.#onLeave}>
         <caption class="unseen">
-          ${list === 'runs' ? texts.runs.caption : texts.runs.ofRetest}
+          ${CAPTIONS[list](texts)}
         </caption>
         <thead>
           <tr>
             <th scope="col">${texts.runs.run}</th>
-            <th scope="col">${texts.fields.sample} <span class="unit">${sampleUnit}</span></th>
+            <th scope="col">${list === 'titrantRuns' ? texts.runs.standard : texts.fields.sample} <span class="unit">${sampleUnit}</span></th>
             <th scope="col">${texts.fields.start} <span class="unit">mL</span></th>
             <th scope="col">${texts.fields.end} <span class="unit">mL</span></th>
-            <th scope="col">${texts.runs.acidValue}</th>
+            <th scope="col">${list === 'titrantRuns' ? html`c <span class="unit">mol/L</span>` : texts.runs.acidValue}</th>
           </tr>
         </thead>
         <tbody>
@@ -155,7 +159,7 @@ export class RunsTable implements ReactiveController {
 
   #row(list: RunList, run: RunEntry, index: number, sampleUnit: string): TemplateResult {
     const texts = this.#section.texts();
-    const key = `${list === 'runs' ? '' : 'retest.'}run${index + 1}`;
+    const key = `${PREFIXES[list]}run${index + 1}`;
     const number = String(index + 1);
     const state = runState(run);
     const left = CELLS.filter((cell) => `${index}.${cell}` !== this.#typing);
@@ -184,7 +188,7 @@ export class RunsTable implements ReactiveController {
             ></esterway-figure>
           </td>`,
         )}
-        <td>${state === 'empty' || state === 'incomplete' ? nothing : this.#section.figure(`${key}.acidValue`)}</td>
+        <td>${state === 'empty' || state === 'incomplete' ? nothing : this.#section.figure(`${key}.${list === 'titrantRuns' ? 'concentration' : 'acidValue'}`)}</td>
       </tr>
       ${problems.length || open || run.struck !== undefined
         ? html`<tr>

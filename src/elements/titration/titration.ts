@@ -1,10 +1,12 @@
 import { css, html, nothing } from 'lit';
 import { property } from 'lit/decorators.js';
-import type { RunList } from '../../lot/edit.js';
+import type { RunList } from '../../lot/keys.js';
 import { fill } from '../../locales/en.js';
 import { SectionElement } from '../parts/section.js';
 import { RunsTable } from './runs-table.js';
 
+/** Fields whose remarks stand under the result. */
+const TITRATED = /^(?:run\d+\.|acidValue$|titrantStrength$|titrantDate$|khpPurity$|blank$|titrationTemperature$|referenceAcid$)/;
 /** Units offered for each figure of the bench. */
 const STRENGTH_UNITS = ['mol/L', 'g/L'];
 const TEMPERATURE_UNITS = { metric: ['°C', '°F'], us: ['°F', '°C'] } as const;
@@ -69,6 +71,9 @@ export class EsterwayTitration extends SectionElement {
       :host([bare]) {
         background: transparent;
       }
+      .spread {
+        font-variant-numeric: tabular-nums;
+      }
       .kind {
         color: var(--_quiet);
         font-size: 0.9em;
@@ -90,7 +95,7 @@ export class EsterwayTitration extends SectionElement {
 
   readonly #internals: ElementInternals | undefined;
   readonly #table = new RunsTable(this, {
-    desk: () => this.desk,
+    runs: () => this.desk.entry[this.list],
     texts: () => this.texts,
     tag: () => this.languageTag,
     figure: (key) => this.figure(key, false),
@@ -122,7 +127,7 @@ export class EsterwayTitration extends SectionElement {
     return this.retest ? 'retest.' : '';
   }
 
-  private get list(): RunList {
+  private get list(): Exclude<RunList, 'titrantRuns'> {
     return this.retest ? 'retestRuns' : 'runs';
   }
 
@@ -153,6 +158,7 @@ export class EsterwayTitration extends SectionElement {
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
         ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
+      ${from === 'titration' && !this.retest ? this.titrant() : nothing}
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
       ${this.results()}
     `;
@@ -182,7 +188,19 @@ export class EsterwayTitration extends SectionElement {
   /** A blank typed beside neutralised solvent stays in sight, with what is wrong about it. */
   private strengthAndBlank(): unknown {
     const blankMatters = this.option('blankPolicy') === 'blank-subtracted' || 'blank' in this.desk.entry.figures;
-    return html`${this.figureField('titrantStrength', STRENGTH_UNITS)} ${blankMatters ? this.figureField('blank', ['mL']) : nothing}`;
+    const ofSite = !('titrantStrength' in this.desk.entry.figures) && this.option('titrantKnownFrom') !== 'label';
+    const strength = this.figureField('titrantStrength', STRENGTH_UNITS, ofSite ? this.texts.titrant.ownStrength : undefined);
+    return html`${ofSite ? html`<p class="wide">${this.texts.titrant.ofSite}: ${this.figure('titrantConcentration')} ${this.plusMinus('titrantConcentration')}</p>` : nothing} ${strength} ${blankMatters ? this.figureField('blank', ['mL']) : nothing}`;
+  }
+
+  /** The site's titrant, to standardise where the titration is done. */
+  private titrant(): unknown {
+    const { texts } = this;
+    const from = this.optionText('titrantKnownFrom');
+    return html`<details class="no-print">
+      <summary>${texts.sections.titrant}: ${from}</summary>
+      <esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>
+    </details>`;
   }
 
   private results(): unknown {
@@ -192,10 +210,12 @@ export class EsterwayTitration extends SectionElement {
       <div class="result" part="result" role="status">
         <div>
           <div class="value">${this.figure(`${prefix}acidValue`)}</div>
+          <div class="spread">${this.plusMinus(`${prefix}acidValue`)}</div>
           <div class="kind">${texts.result.acidValue}</div>
         </div>
         <div>
           <div class="value">${this.figure(`${prefix}freeFattyAcid`)}</div>
+          <div class="spread">${this.plusMinus(`${prefix}freeFattyAcid`)}</div>
           <div class="kind">${fill(texts.result.ffa, { acid })}</div>
         </div>
       </div>
@@ -203,7 +223,7 @@ export class EsterwayTitration extends SectionElement {
       ${prefix || !this.reading('alkaliPerLitreOfOil')?.value
         ? nothing
         : html`<p class="note">${this.figure('alkaliPerLitreOfOil')} ${fill(texts.result.alkali, { alkali: this.optionText('titrantAlkali') })}</p>`}
-      ${this.lot?.notices.some(({ code }) => code === 'lauric-on-other-basis') && !prefix ? html`<p class="gate">${texts.result.lauric}</p>` : nothing}
+      ${this.noticesAt((field) => (prefix ? field.startsWith(prefix) : TITRATED.test(field)))}
     `;
   }
 
@@ -216,13 +236,24 @@ export class EsterwayTitration extends SectionElement {
       return this.whyUnknown(key);
     }
     if (this.option(`${prefix}acidKnownFrom`) !== 'titration') return texts.result.certificate;
-    const states = this.lot?.[this.list] ?? [];
-    const runs = states.filter((state) => state === 'counted').length;
-    const incomplete = states.indexOf('incomplete');
+    const incomplete = (this.lot?.[this.list] ?? []).indexOf('incomplete');
     return [
-      runs === 1 ? texts.result.oneRun : fill(texts.result.mean, { runs: String(runs) }),
-      incomplete >= 0 && runs ? fill(texts.result.incomplete, { run: String(incomplete + 1) }) : '',
+      this.made(),
+      incomplete >= 0 ? fill(texts.notices['run-incomplete'], { run: String(incomplete + 1) }) : '',
+      this.lot?.uncertainties[key] ? texts.result.plusMinusNote : '',
     ].join(' ').trim();
+  }
+
+  /** What was made of the runs, and the next step. */
+  private made(): string {
+    const { texts } = this;
+    const judged = this.lot?.replicates[this.retest ? 'retest' : 'lot'];
+    if (!judged || judged.state === 'none') return '';
+    const next = judged.next === 'nothing' ? '' : texts.replicates.next[judged.next];
+    if (judged.state === 'one') return `${texts.notices['one-run']} ${next}`;
+    const sentence = judged.state === 'agree' ? texts.replicates.agree : judged.average === 'mean' ? texts.replicates.differMean : texts.replicates.differMedian;
+    const figure = (key: string): string => this.number(this.reading(`${this.keyPrefix}${key}`)?.shown ?? '–');
+    return `${fill(sentence, { runs: String(judged.runs), range: figure('runRange'), critical: figure('criticalRange') })} ${next}`;
   }
 
   protected override updated(): void {

@@ -1,0 +1,49 @@
+import { html } from 'lit';
+import type { TemplateResult } from 'lit';
+import { fill } from '../../locales/en.js';
+import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
+import type { FigureInputEvent } from './figure-field.js';
+import type { OptionInputEvent } from './option-field.js';
+import { SectionElement } from './section.js';
+
+/** Units of site figures that have no usual value, and of those that are typed in several. */
+const UNITS: Readonly<Record<string, readonly string[]>> = {
+  titrantStrength: ['mol/L', 'g/L'], titrantWeighedMass: ['g'], titrantFlaskVolume: ['L', 'mL'], buretteCapacityTyped: ['mL'], buretteToleranceTyped: ['mL'],
+  iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'],
+};
+
+/** A section that edits the site profile: fields for its figures and options. */
+export abstract class SiteSectionElement extends SectionElement {
+  /** The option in force for the site: its own, else the usual one. */
+  protected siteOption(key: string): string {
+    return this.desk.site.options[key] ?? DEFAULT_OPTIONS[key] ?? '';
+  }
+
+  protected siteOptionField(key: string, wide = false): TemplateResult {
+    return html`<esterway-option
+      class=${wide ? 'wide' : ''}
+      exportparts="line: field-line, input: field-input"
+      .label=${(this.texts.choices as Readonly<Record<string, string>>)[key] ?? key}
+      .options=${this.optionWords(key)}
+      .value=${this.siteOption(key)}
+      @option-input=${(event: OptionInputEvent) => this.editSite({ kind: 'option', key, option: event.option })}
+    ></esterway-option>`;
+  }
+
+  /** A field for a figure of the site; what is usual stands in it with its source. */
+  protected siteFigureField(key: string): TemplateResult {
+    const { texts } = this;
+    const usual = DEFAULT_FIGURES[key];
+    const note = usual && fill(texts.site.source, { title: usual.source.title, mark: texts.marks[usual.source.mark] });
+    return html`<esterway-figure
+      exportparts="line: field-line, input: field-input"
+      .label=${this.fieldLabel(key)}
+      .figure=${this.desk.site.figures[key]}
+      .standing=${usual}
+      .units=${UNITS[key] ?? [usual?.unit ?? '']}
+      .problem=${key in this.desk.entry.figures ? undefined : this.problemAt(key)}
+      .note=${usual?.source.mark === 'practice' ? texts.marks.practice : note}
+      @figure-input=${(event: FigureInputEvent) => this.editSite({ kind: 'figure', key, figure: event.figure })}
+    ></esterway-figure>`;
+  }
+}
