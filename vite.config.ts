@@ -5,7 +5,7 @@ import { transform } from 'lightningcss';
 import type { Plugin, UserConfig } from 'vite';
 import { defineConfig, type ViteUserConfig } from 'vitest/config';
 import { chromiumArgs, chromiumPath, pageDefaults } from './tests/tools/browser.ts';
-import { coreMeasured, printSizes, scriptFile } from './tests/tools/sizes.ts';
+import { coreMeasured, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
 
 const at = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
 
@@ -19,6 +19,7 @@ const runtime = [
   ),
   '@lit/context',
   'decimal.js',
+  'simple-statistics',
 ];
 
 const shared: UserConfig = {
@@ -26,7 +27,7 @@ const shared: UserConfig = {
     alias: [
       // demo pages and tests may import the package by its public name
       { find: /^esterway$/, replacement: at('./src/index.ts') },
-      { find: /^esterway\/(define|core)$/, replacement: at('./src') + '/$1.ts' },
+      { find: /^esterway\/(define|core|working)$/, replacement: at('./src') + '/$1.ts' },
     ],
     dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
   },
@@ -36,12 +37,15 @@ const shared: UserConfig = {
 const plainFiles: Readonly<Record<string, string>> = {
   ...Object.fromEntries(['script.html', 'script.css', 'base.css', 'icon.svg'].map((file) => [file, at(`./demo/${file}`)])),
   'esterway.min.js': scriptFile,
+  'esterway-worker.min.js': workerFile,
 };
 
 const asTheyLie: Plugin = {
   name: 'as-they-lie',
   configureServer({ middlewares }) {
-    const types: Readonly<Record<string, string>> = { 'script.html': 'text/html', 'esterway.min.js': 'text/javascript' };
+    const types: Readonly<Record<string, string>> = {
+      'script.html': 'text/html', 'esterway.min.js': 'text/javascript', 'esterway-worker.min.js': 'text/javascript',
+    };
     middlewares.use((request, response, next) => {
       const name = (request.url ?? '').slice(1).replace(/[?#].*/, '');
       const [file, type] = [plainFiles[name], types[name]];
@@ -74,6 +78,7 @@ const builds: Record<string, () => UserConfig> = {
   lib: () => ({
     ...shared,
     publicDir: false,
+    plugins: [workerFrom("new Worker(new URL('../../../browser/esterway-worker.min.js', import.meta.url), { type: 'module' })")],
     build: {
       target: 'es2022',
       outDir: 'dist',
@@ -81,11 +86,11 @@ const builds: Record<string, () => UserConfig> = {
       minify: false,
       sourcemap: true,
       lib: {
-        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts') },
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts') },
         formats: ['es'],
       },
       rolldownOptions: {
-        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js'],
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics'],
         output: {
           preserveModules: true,
           preserveModulesRoot: at('./src'),
@@ -97,6 +102,8 @@ const builds: Record<string, () => UserConfig> = {
   }),
   /** The self-contained file for a page without a build step. */
   script: () => bundle('./src/define.ts', 'Esterway', scriptFile),
+  /** What computes Monte Carlo off the page's thread: one file for the script file and for the ES modules. Built after the script file. */
+  worker: () => bundle('./src/monte-carlo-worker.ts', 'EsterwayWorker', workerFile),
   /** What `esterway/core` weighs with its dependency inside; only measured, never shipped. */
   core: () => bundle('./src/core.ts', 'EsterwayCore', coreMeasured),
   /** The demo pages as static files. */
@@ -116,24 +123,25 @@ const builds: Record<string, () => UserConfig> = {
 };
 
 function bundle(entry: string, name: string, file: string): UserConfig {
+  const beside = file === workerFile;
   const { version } = JSON.parse(readFileSync(at('./package.json'), 'utf8')) as { version: string };
   return {
     ...shared,
     publicDir: false,
-    plugins: [smallTemplates, ...(file === scriptFile ? [sizeTable] : [])],
+    plugins: [smallTemplates, workerFrom('undefined'), ...(beside ? [sizeTable] : [])],
     build: {
       target: 'es2022',
       outDir: dirname(file),
-      emptyOutDir: true,
+      emptyOutDir: !beside,
       // a hundredth smaller than the default minifier's output, which counts against the budgets
       minify: 'terser',
       terserOptions: { ecma: 2020, compress: { passes: 3 } },
       sourcemap: true,
       reportCompressedSize: false,
-      license: { fileName: 'LICENSES.md' }, // minifying drops the notices of what is inside
+      ...(!beside && { license: { fileName: 'LICENSES.md' } }), // minifying drops the notices of what is inside
       lib: { entry: at(entry), name, formats: ['iife'], fileName: () => basename(file) },
       rolldownOptions: {
-        output: { postBanner: `/*! Esterway ${version}, MIT. Holds Lit (BSD-3-Clause) and decimal.js (MIT): LICENSES.md */` },
+        output: { postBanner: `/*! Esterway ${version}, MIT. Holds ${beside ? '' : 'Lit (BSD-3-Clause) and '}decimal.js (MIT): LICENSES.md */` },
       },
     },
   };
@@ -152,6 +160,25 @@ const smallTemplates: Plugin = {
     return { code: withSmallStyles.replace(/\n[ \t]+/g, '\n'), map: null };
   },
 };
+
+/**
+ * The sources start their worker as Vite serves it; a build starts the built one. The words are put in at
+ * the end, since Vite would bundle a worker of its own for what it sees.
+ */
+function workerFrom(built: string): Plugin {
+  const written = /new Worker\(new URL\('\.\.\/\.\.\/monte-carlo-worker\.ts', import\.meta\.url\), \{ type: 'module' \}\)/;
+  const standIn = '__esterway_worker__';
+  return {
+    name: 'worker-from',
+    enforce: 'pre',
+    transform(code, id) {
+      if (!id.endsWith('/worker-place.ts')) return undefined;
+      if (!written.test(code)) throw new Error('worker-place.ts starts its worker in other words');
+      return { code: code.replace(written, standIn), map: null };
+    },
+    renderChunk: (code) => (code.includes(standIn) ? { code: code.replace(standIn, built), map: null } : undefined),
+  };
+}
 
 const sizeTable: Plugin = { name: 'size-table', closeBundle: printSizes };
 

@@ -17,12 +17,15 @@ const folders = {
 /** Files that stand in src itself. */
 const entries = {
   core: { values: below },
-  index: { values: [...Object.keys(folders), 'core'] },
+  'monte-carlo-worker': { values: below },
+  working: { values: below },
+  'monte-carlo-worker': { values: below },
+  index: { values: [...Object.keys(folders), 'core', 'working'] },
   define: { values: [...Object.keys(folders), 'core', 'index'] },
 };
 
 /** What knows no page: no DOM, no Lit. */
-export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts'];
+export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts', 'src/working.ts'];
 
 /** @param {string} path with forward slashes, below src */
 function roomOf(path) {
@@ -56,7 +59,7 @@ const order = {
     function fault(specifier, typeOnly) {
       if (/^esterway(\/|$)/.test(specifier)) return ['self', specifier];
       if (!specifier.startsWith('.')) {
-        if (below.includes(from) || from === 'core') {
+        if (below.includes(from) || from === 'core' || from === 'working') {
           return /^(lit|lit-.*|@lit|@lit-labs)(\/|$)/.test(specifier) ? ['lit', specifier] : undefined;
         }
         return allowed.packages === false ? ['packages', specifier] : undefined;

@@ -13,3 +13,4 @@ export { defineEsterway } from './elements/define-all.js';
 export { EsterwayChangeEvent, EsterwayOpenEvent, EsterwaySiteChangeEvent } from './elements/parts/events.js';
 export type { UnitSystem } from './exchange/amount.js';
 export * from './core.js';
+export * from './working.js';

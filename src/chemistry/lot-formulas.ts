@@ -20,6 +20,7 @@ import * as standard from './standardisation.js';
 import * as site from './site-limits.js';
 import { STOICHIOMETRY } from './sources.js';
 import * as titration from './titration.js';
+import * as titrationPlan from './titration-plan.js';
 
 /** How many runs a titration has, and which of them count (by index from 0). */
 export interface RunPlan {
@@ -80,7 +81,7 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
 
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
-    ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard),
+    ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan),
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
     ...direct, ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),

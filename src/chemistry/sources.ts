@@ -34,4 +34,7 @@ export const D664_USED = source('ASTM D664, repeatability of used oils, buffer e
 export const D664_FRESH = source('ASTM D664, repeatability of fresh oils: 0.044 · (X + 1)', 'found');
 export const MEDIAN_SPREAD = source('Standard error of the median of normal results, √(π/2) times that of the mean', 'derived');
 export const METHANOL_SOLUBILITY = source('Handbook solubilities in methanol near 25 °C: KOH 55, NaOH 24 g/100 mL, methoxides about a third by mass', 'memory');
+export const CD_3D_PORTIONS = source('AOCS Cd 3d-63, table of portions, as in ISO 660, table 1', 'found');
+export const D664_PORTIONS = source('ASTM D664, method A, table of portions', 'memory');
+export const D974_PORTIONS = source('ASTM D974, table of portions', 'memory');
 export const PRACTICE = source('Common practice, no source', 'practice');

@@ -1,3 +1,6 @@
+import { deBudget } from './de-budget.js';
+import { deMonteCarlo } from './de-monte-carlo.js';
+import { dePlan } from './de-plan.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
 import { deTitrant } from './de-titrant.js';
@@ -315,5 +318,8 @@ export const de: Texts = {
     source: '{title} ({mark})',
   },
   titrant: deTitrant,
+  plan: dePlan,
+  monteCarlo: deMonteCarlo,
+  budget: deBudget,
   quantities: deQuantities,
 };

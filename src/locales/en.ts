@@ -1,3 +1,6 @@
+import { enBudget } from './en-budget.js';
+import { enMonteCarlo } from './en-monte-carlo.js';
+import { enPlan } from './en-plan.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
 import { enTitrant } from './en-titrant.js';
@@ -314,6 +317,9 @@ export const en = {
     source: '{title} ({mark})',
   },
   titrant: enTitrant,
+  plan: enPlan,
+  monteCarlo: enMonteCarlo,
+  budget: enBudget,
   quantities: enQuantities,
 };
 

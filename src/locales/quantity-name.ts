@@ -4,7 +4,7 @@ import type { Texts } from './en.js';
 type Words = Readonly<Record<string, string>>;
 
 /** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: where, and which run or pass, and what. */
-const KEY = /^(retest\.|titrant\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
+const KEY = /^(retest\.|titrant\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
 /** A site value that each catalyst product has for itself: `KOH.assay`. */
 const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility)$/;
 
@@ -12,6 +12,14 @@ const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility)$/;
 export function quantityName(key: string, texts: Texts): string {
   const quantities: Words = texts.quantities;
   return inContext(key, texts, (context, base) => own(quantities, context + base) ?? own(quantities, base)) ?? labelOf(key, texts) ?? key;
+}
+
+/** The name of a source of uncertainty, as a budget lists it: `burette`. */
+export function sourceName(key: string, texts: Texts): string {
+  const { quantities } = texts;
+  const source = key.replace('retest.', '');
+  const name = own(quantities, source) ?? quantityName(key, texts);
+  return source === key ? name : `${quantities['retest.']}: ${name}`;
 }
 
 /** The name of a field or a choice as a sentence puts it, `amount of oil`: its label, else the name of its quantity. */

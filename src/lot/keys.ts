@@ -1,5 +1,4 @@
 import { lotFormulas } from '../chemistry/lot-formulas.js';
-import { PORTIONS } from '../decision/portion-table.js';
 import type { Unit } from '../formula/unit.js';
 import { gramPerLitre, litre } from '../formula/units.js';
 import type { KnownKeys } from './check.js';
@@ -59,7 +58,7 @@ function knownKeys(): KnownKeys {
   const sheet = lotFormulas({ lot: none, retest: none, titrant: none });
   const figures = new Set<string>();
   for (const [key, quantity] of sheet.quantities) if (!quantity.is && !RUN_KEY.test(key)) figures.add(fieldOf(key));
-  const options = new Map<string, readonly string[]>([['acidProofEquipment', YES_NO], ['temperatureCorrected', YES_NO], ['runsAreDear', YES_NO], ['portionTable', Object.keys(PORTIONS)]]);
+  const options = new Map<string, readonly string[]>([['acidProofEquipment', YES_NO], ['temperatureCorrected', YES_NO], ['runsAreDear', YES_NO]]);
   for (const [key, { options: known }] of sheet.choices) {
     if (!DECIDED.has(key)) options.set(key, known);
   }

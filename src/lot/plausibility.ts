@@ -1,7 +1,7 @@
 import { runKey } from '../chemistry/lot-formulas.js';
 import type { RunPrefix } from '../chemistry/lot-formulas.js';
-import { PORTIONS, portionFits, portionFor } from '../decision/portion-table.js';
-import type { PortionTable } from '../decision/portion-table.js';
+import { PORTIONS } from '../chemistry/titration-plan.js';
+import { portionFits, portionFor } from '../decision/portion-table.js';
 import { Decimal, decimal } from '../formula/decimal.js';
 import { isKnown } from '../formula/reading.js';
 import type { LotEntry, SiteProfile } from './entry.js';
@@ -52,7 +52,7 @@ export function implausibilities(entry: LotEntry, site: SiteProfile, run: LotRun
 /** Titres in the good part of the burette, portions as the method has them, runs of one order of size. */
 function runs(prefix: RunPrefix, counted: readonly number[], { givens }: LotRun, find: Find, say: Say): void {
   const capacity = find('buretteCapacity');
-  const table = PORTIONS[givens.chosen('portionTable') as PortionTable];
+  const table = PORTIONS[givens.chosen('portionTable') as keyof typeof PORTIONS];
   for (const index of counted) {
     const key = (name: string): string => runKey(prefix, index, name);
     const [titre, end, mass, acidValue] = ['titre', 'buretteEnd', 'sampleMass', 'acidValue'].map((name) => find(key(name)));

@@ -5,6 +5,8 @@ import type { Digits } from '../formula/quantity.js';
 import { isKnown } from '../formula/reading.js';
 import type { Unknown } from '../formula/reading.js';
 import type { UncertaintyJson } from './lot-reading.js';
+import type { LotEntry, SiteProfile } from './entry.js';
+import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
 import { uncertaintySources } from './uncertainty-sources.js';
 
@@ -56,6 +58,38 @@ export function uncertaintyOf(run: LotRun, key: string): Uncertainty | Unknown {
   const total = [...variances.values()].reduce((sum, variance) => sum.plus(variance), ZERO);
   const budget = [...variances].map(([source, variance]) => ({ key: source, u: variance.sqrt(), share: variance.div(total) }));
   return { u: total.sqrt(), budget: budget.sort((a, b) => b.share.cmp(a.share)) };
+}
+
+/** A line of a budget, as JSON. */
+export interface BudgetLine {
+  /** Key of the source's standard uncertainty. */
+  readonly source: string;
+  /** Standard uncertainty that it alone would leave, in the unit of the result. */
+  readonly u: string;
+  /** Its share of the variance, 0 to 1. */
+  readonly share: string;
+}
+
+/** The uncertainty of a reading with what it is made of, as JSON. */
+export interface Budget extends UncertaintyJson {
+  /** Largest first. */
+  readonly budget: readonly BudgetLine[];
+}
+
+/**
+ * How well any figure of a lot is known, with the budget.
+ *
+ * @returns undefined where the figure, or a source of its uncertainty, is not known
+ * @throws SheetFault for a key that no quantity has
+ */
+export function uncertainty(entry: LotEntry, site: SiteProfile, key: string): Budget | undefined {
+  const run = lotRun(entry, site);
+  const { digits } = run.sheet.quantity(key);
+  const found = uncertaintyOf(run, key);
+  const value = run.findings.outcome(key);
+  if (!('budget' in found) || !isKnown(value)) return undefined;
+  const budget = found.budget.map(({ key: source, u, share }) => ({ source, u: u.toString(), share: share.toString() }));
+  return { ...uncertaintyJson(found, value, digits), budget };
 }
 
 /** As JSON, U shown to the decimals of the result it stands beside, but to no less than its first digit. */

@@ -30,7 +30,7 @@ describe('the default figures', () => {
   it('leave only what belongs to a lot or is not always needed', () => {
     const without = [...KNOWN_KEYS.figures].filter((key) => !(key in DEFAULT_FIGURES)).sort();
     expect(without).toEqual([
-      'blank', 'buretteCapacityTyped', 'buretteToleranceTyped', 'certificateAcidValue', 'certificateFfa', 'iodineValue', 'measuredOilDensity', 'oilAmount',
+      'blank', 'buretteCapacityTyped', 'buretteToleranceTyped', 'certificateAcidValue', 'certificateFfa', 'expectedAcidValue', 'iodineValue', 'measuredOilDensity', 'oilAmount',
       'otherAcidMolarMass', 'retest.certificateAcidValue', 'retest.certificateFfa', 'titrantFlaskVolume', 'titrantStrength', 'titrantWeighedMass',
       'titrationTemperature', 'vesselVolume',
     ]);

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { DEFAULT_FIGURES, EMPTY_SITE, cellFormulaOf, working, workingFigure } from '../../src/core.js';
+import { DEFAULT_FIGURES, EMPTY_SITE } from '../../src/core.js';
 import type { LotEntry } from '../../src/core.js';
+import { cellFormulaOf, working, workingFigure } from '../../src/working.js';
 import { one } from '../../src/formula/units.js';
 import type { WriteFigure } from '../../src/formula/working-text.js';
 import { onlyDigits } from '../formula/given.js';

@@ -3,7 +3,7 @@ import type { Reason } from '../../decision/route.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { fill } from '../../locales/en.js';
-import { quantityName } from '../../locales/quantity-name.js';
+import { sourceName } from '../../locales/quantity-name.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
 
@@ -136,7 +136,7 @@ export class EsterwayRoute extends SectionElement {
   }
 
   private reason({ code, params }: Reason): string {
-    const words = (name: string, value: string): string | undefined => (name === 'passes' || name === 'runs' ? value : name === 'source' ? quantityName(value, this.texts) : undefined);
+    const words = (name: string, value: string): string | undefined => (name === 'passes' || name === 'runs' ? value : name === 'source' ? sourceName(value, this.texts) : undefined);
     const shown = Object.entries(params).map(([name, value]) => [name, words(name, value) ?? this.siteText(value) ?? this.share(value, params['limit'] ?? params['target'])] as const);
     const water = this.reading('waterContent')?.shown;
     return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });

@@ -1,8 +1,10 @@
 import { css, html, nothing } from 'lit';
-import { property } from 'lit/decorators.js';
+import { property, state } from 'lit/decorators.js';
 import type { RunList } from '../../lot/keys.js';
 import { fill } from '../../locales/en.js';
+import { planTitration } from '../../lot/titration-plan.js';
 import { SectionElement } from '../parts/section.js';
+import { planView } from './plan-view.js';
 import { RunsTable } from './runs-table.js';
 
 /** Fields whose remarks stand under the result. */
@@ -93,6 +95,9 @@ export class EsterwayTitration extends SectionElement {
   @property({ type: Boolean, reflect: true }) retest = false;
   @property({ type: Boolean, reflect: true }) required = false;
 
+  /** Whether the plan is open; it is worked out only then. */
+  @state() private planning = false;
+
   readonly #internals: ElementInternals | undefined;
   readonly #table = new RunsTable(this, {
     runs: () => this.desk.entry[this.list],
@@ -158,7 +163,7 @@ export class EsterwayTitration extends SectionElement {
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
         ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
-      ${from === 'titration' && !this.retest ? this.titrant() : nothing}
+      ${from === 'titration' && !this.retest ? html`${this.titrant()} ${this.plan()}` : nothing}
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
       ${this.results()}
     `;
@@ -201,6 +206,24 @@ export class EsterwayTitration extends SectionElement {
       <summary>${texts.sections.titrant}: ${from}</summary>
       <esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>
     </details>`;
+  }
+
+  /** Portion and titrant for the acid value to expect. */
+  private plan(): unknown {
+    const { texts } = this;
+    const { entry, site } = this.desk;
+    const plan = this.planning ? planTitration(entry, site) : undefined;
+    const words = { texts, tag: this.languageTag, byVolume: this.option('sampleTakenBy') === 'volume' };
+    const lacking = this.reading('titrantConcentration')?.value === undefined && 'expectedAcidValue' in entry.figures ? texts.plan.noTitrant : texts.plan.none;
+    return html`<details class="no-print" @toggle=${this.onPlan}>
+      <summary>${texts.plan.title} <span class="quiet">${texts.plan.closed}</span></summary>
+      <div class="fields">${this.figureField('expectedAcidValue', ['mg/g'])} ${this.optionField('portionTable')}</div>
+      <div role="status">${plan ? planView(plan, words) : html`<p class="note">${lacking}</p>`}</div>
+    </details>`;
+  }
+
+  private onPlan(event: Event): void {
+    this.planning = (event.target as HTMLDetailsElement).open;
   }
 
   private results(): unknown {

@@ -5,9 +5,11 @@ import { guard } from 'lit/directives/guard.js';
 import type { Decimal } from '../../formula/decimal.js';
 import type { Unit } from '../../formula/unit.js';
 import { quantityName } from '../../locales/quantity-name.js';
+import { uncertainty } from '../../lot/uncertainty.js';
 import { working, workingFigure } from '../../lot/working.js';
 import type { Working } from '../../lot/working.js';
 import { SectionElement } from '../parts/section.js';
+import { budgetStyles, budgetView } from './budget.js';
 import { mathElement } from './math.js';
 
 /**
@@ -30,6 +32,7 @@ import { mathElement } from './math.js';
 export class EsterwayWorking extends SectionElement {
   static override styles = [
     ...SectionElement.styles,
+    budgetStyles,
     css`
       .pick {
         display: block;
@@ -151,9 +154,16 @@ export class EsterwayWorking extends SectionElement {
               <p class="small quiet full">${this.number(reading.value)} ${reading.unit}</p>
             </details>`
           : nothing}
-        ${this.sources(shown)} ${this.rests(shown)}
+        ${this.budget()} ${this.sources(shown)} ${this.rests(shown)}
       </div>
     `;
+  }
+
+  /** The ± with its budget, for a figure that anything measured enters. */
+  private budget(): unknown {
+    const { entry, site } = this.desk;
+    const known = uncertainty(entry, site, this.of);
+    return known?.budget.length ? budgetView(known, this.reading(this.of)?.unit ?? '', this.texts, this.languageTag, (key) => (this.of = key)) : nothing;
   }
 
   private sources({ sources }: Working): unknown {
