@@ -58,7 +58,7 @@ export function replicates(prefix: '' | 'retest.', contents: readonly Expression
   const n = contents.length;
   const mark = prefix ? ',r' : '';
   const like = (key: string, symbol: string, is: Expression, cites = [ISO_5725_6]): Quantity =>
-    quantity({ key: prefix + key, symbol: symbol + mark, ...acidValueLike, digits: { significant: 3 }, cites, is });
+    quantity({ key: prefix + key, symbol: symbol + mark, ...acidValueLike, digits: { decimals: 2 }, cites, is });
   const averageBy = choice(`${prefix}averageBy`, ['mean', 'median']);
   const runsAgree = choice(`${prefix}runsAgree`, ['yes', 'no']);
 

@@ -3,7 +3,6 @@ import type { Texts } from './en.js';
 /** Eine Titration planen. */
 export const dePlan: Texts['plan'] = {
   title: 'Titration planen',
-  closed: 'Einwaage und Verbrauch zu einer erwarteten Säurezahl',
   none: 'Erwartete Säurezahl angeben, nach den letzten Partien dieser Herkunft oder nach Augenschein.',
   noTitrant: 'Für einen Plan fehlt der Gehalt der Maßlösung.',
   weigh: 'Etwa {portion} g einwägen: Verbrauch um {titre} mL bei {strength} mol/L.',

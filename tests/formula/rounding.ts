@@ -15,7 +15,7 @@ export interface Rounding {
 }
 
 /** Above half a unit in the last of 34 digits. */
-const ROUND = 1e-33;
+export const ROUND = 1e-33;
 
 /**
  * Running error analysis: the rounding of every step, carried on to the result. It tells how many
@@ -27,6 +27,8 @@ export class RoundingOf {
   constructor(
     private readonly sheet: Sheet,
     private readonly findings: Findings,
+    /** Units of its last digit by which a figure given may be off already. */
+    private readonly given = 0,
   ) {}
 
   quantity(key: string): Rounding {
@@ -38,9 +40,13 @@ export class RoundingOf {
       ? { value: NaN, error: Infinity, corner: 0 }
       : is
         ? this.of(is)
-        : { value: outcome.toNumber(), error: 0, corner: Infinity };
+        : this.leaf(outcome.toNumber());
     this.#known.set(key, found);
     return found;
+  }
+
+  private leaf(value: number): Rounding {
+    return { value, error: this.given * ROUND * Math.abs(value), corner: Infinity };
   }
 
   private of(expression: Expression): Rounding {
@@ -49,7 +55,7 @@ export class RoundingOf {
       case 'named':
         return this.quantity(node.key);
       case 'constant':
-        return { value: node.constant.value.toNumber(), error: 0, corner: Infinity };
+        return this.leaf(node.constant.value.toNumber());
       case 'choice':
         return this.of(branch(node, this.sheet, this.findings));
       case 'threshold': {

@@ -78,7 +78,7 @@ export class EsterwayTitrant extends SiteSectionElement {
       ${from === 'standardised' ? this.standardisation() : html`<div class="fields">${this.given(from).map((key) => this.siteFigureField(key))}</div>`}
       <div class="result" part="result" role="status">
         <div class="value">${this.figure('titrantConcentration')}</div>
-        <p class="small quiet">${[this.texts.titrant.result, this.plusMinus('titrantConcentration')].filter(Boolean).join(' ')}</p>
+        <p class="small quiet">${this.texts.titrant.result} ${this.plusMinus('titrantConcentration') ?? `· ${this.whyUnknown('titrantConcentration')}`}</p>
       </div>
       ${this.noticesAt((field) => OF_TITRANT.test(field))}
       <p class="note">${this.texts.titrant.note}</p>

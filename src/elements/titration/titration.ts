@@ -203,7 +203,7 @@ export class EsterwayTitration extends SectionElement {
     const { texts } = this;
     const from = this.optionText('titrantKnownFrom');
     return html`<details class="no-print">
-      <summary>${texts.sections.titrant}: ${from}</summary>
+      <summary>${texts.sections.titrant} · ${from}</summary>
       <esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>
     </details>`;
   }
@@ -216,7 +216,7 @@ export class EsterwayTitration extends SectionElement {
     const words = { texts, tag: this.languageTag, byVolume: this.option('sampleTakenBy') === 'volume' };
     const lacking = this.reading('titrantConcentration')?.value === undefined && 'expectedAcidValue' in entry.figures ? texts.plan.noTitrant : texts.plan.none;
     return html`<details class="no-print" @toggle=${this.onPlan}>
-      <summary>${texts.plan.title} <span class="quiet">${texts.plan.closed}</span></summary>
+      <summary>${texts.plan.title}</summary>
       <div class="fields">${this.figureField('expectedAcidValue', ['mg/g'])} ${this.optionField('portionTable')}</div>
       <div role="status">${plan ? planView(plan, words) : html`<p class="note">${lacking}</p>`}</div>
     </details>`;
