@@ -17,7 +17,6 @@ const folders = {
 /** Files that stand in src itself. */
 const entries = {
   core: { values: below },
-  'monte-carlo-worker': { values: below },
   working: { values: below },
   'monte-carlo-worker': { values: below },
   index: { values: [...Object.keys(folders), 'core', 'working'] },

@@ -2,7 +2,7 @@
 
 export { cellFormulaOf, working, workingFigure } from './lot/working.js';
 export type { Working } from './lot/working.js';
-export { uncertainty } from './lot/uncertainty.js';
+export { uncertainties, uncertainty } from './lot/uncertainty.js';
 export type { Budget, BudgetLine } from './lot/uncertainty.js';
 export { mathMarkup } from './formula/working-mathml.js';
 export type { MathNode } from './formula/working-mathml.js';

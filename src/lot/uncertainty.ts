@@ -92,6 +92,16 @@ export function uncertainty(entry: LotEntry, site: SiteProfile, key: string): Bu
   return { ...uncertaintyJson(found, value, digits), budget };
 }
 
+/** The same without budgets, for several figures of one lot at once; those that are not known are left out. */
+export function uncertainties(entry: LotEntry, site: SiteProfile, keys: readonly string[]): Readonly<Record<string, UncertaintyJson>> {
+  const run = lotRun(entry, site);
+  return Object.fromEntries(keys.flatMap((key) => {
+    const found = uncertaintyOf(run, key);
+    const value = run.findings.outcome(key);
+    return 'budget' in found && isKnown(value) ? [[key, uncertaintyJson(found, value, run.sheet.quantity(key).digits)] as const] : [];
+  }));
+}
+
 /** As JSON, U shown to the decimals of the result it stands beside, but to no less than its first digit. */
 export function uncertaintyJson({ u }: Uncertainty, value: Decimal, digits: Digits): UncertaintyJson {
   const expanded = u.times(COVERAGE_FACTOR);

@@ -63,6 +63,12 @@ export const chargeStyles = css`
     color: var(--_quiet);
     font-size: 0.9em;
   }
+  .spread {
+    display: block;
+    color: var(--_quiet);
+    font-size: 0.9em;
+    white-space: nowrap;
+  }
   .volume {
     grid-column: 3;
     color: var(--_quiet);

@@ -2,6 +2,10 @@ import { html, nothing } from 'lit';
 import { state } from 'lit/decorators.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import type { Verdict } from '../../decision/route.js';
+import { amountIn } from '../../exchange/amount.js';
+import { Decimal } from '../../formula/decimal.js';
+import { shownText } from '../../formula/digits.js';
+import { uncertainties } from '../../lot/uncertainty.js';
 import { fill, fillWith } from '../../locales/en.js';
 import { SectionElement } from '../parts/section.js';
 import { chargeStyles } from './charge-styles.js';
@@ -52,6 +56,16 @@ export class EsterwayCharge extends SectionElement {
   /** The lot and the verdict it was chosen for. */
   #chosenFor = '';
 
+  /** How well each amount of this reading is known. */
+  #spreads: ReturnType<typeof uncertainties> = {};
+  #spreadsOf: unknown;
+
+  /** Amounts that either route asks for. */
+  private get weighed(): readonly string[] {
+    const { direct = [], twoStep = [] } = this.lot?.charges ?? {};
+    return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ mass }) => mass ?? []));
+  }
+
   private get recommended(): RouteName {
     const route = this.lot?.route;
     const verdict = route?.verdict === 'too-close' ? route.safe : route?.verdict;
@@ -64,6 +78,12 @@ export class EsterwayCharge extends SectionElement {
 
   /** A choice stands for one lot and one verdict. */
   protected override willUpdate(): void {
+    const { entry, site, reading } = this.desk;
+    if (reading !== this.#spreadsOf && !this.folded) {
+      this.#spreads = this.lot ? uncertainties(entry, site, this.weighed) : {};
+      this.#spreadsOf = reading;
+    }
+
     const about = this.lot ? `${this.lot.route.verdict} ${this.desk.entry.name ?? ''}` : '';
     if (about !== this.#chosenFor) this.chosen = undefined;
     this.#chosenFor = about;
@@ -90,6 +110,7 @@ export class EsterwayCharge extends SectionElement {
       </div>
       ${this.gate(lot.route.verdict)} ${this.reagents()}
       ${this.known(`${this.looked}.catalyst`) ? nothing : html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>`}
+      ${this.noticesAt((field) => field === `${this.looked === 'direct' ? 'direct' : 'pass1'}.batchVolume` || field === `${this.looked}.catalyst`)}
       ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
     `;
   }
@@ -169,8 +190,19 @@ export class EsterwayCharge extends SectionElement {
     const volume = line.volume && Number(this.reading(line.volume)?.value ?? 0) > 0 ? this.figure(line.volume) : nothing;
     return html`<li>
       <span class="what">${this.instruction(line, step)}</span><span class="mass">${this.figure(line.mass)}</span>
-      <span class="how">${how}</span><span class="volume">${volume}</span>
+      <span class="how">${how}</span><span class="volume">${volume}${this.spread(line.mass)}</span>
     </li>`;
+  }
+
+  /** How well an amount to weigh is known, from the titration and the site's equipment. */
+  private spread(key: string): unknown {
+    const known = key === 'oilMass' ? undefined : this.#spreads[key];
+    const unit = this.reading(key)?.unit;
+    const expanded = known && new Decimal(known.expanded);
+    if (!expanded || expanded.isZero() || unit === undefined) return nothing;
+    const rounded = shownText(expanded, { significant: 2 });
+    const amount = amountIn(rounded, rounded, unit, this.desk.units);
+    return html` <span class="spread">± ${this.number(amount.text)}\u00a0${amount.unit}</span>`;
   }
 
   private instruction({ what }: ChargeLine, step?: ChargeStep): string {

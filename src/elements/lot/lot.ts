@@ -58,7 +58,7 @@ export class EsterwayLot extends SectionElement {
         ${this.figureField('oilAmount', AMOUNT_UNITS[units])} ${this.figureField('oilTemperature', TEMPERATURE_UNITS[units])}
         ${this.figureField('waterContent', SHARE_UNITS)} ${this.figureField('insolubles', SHARE_UNITS)}
       </div>
-      ${this.kindOfOil()}
+      ${this.noticesAt((field) => field === 'date')} ${this.kindOfOil()}
     `;
   }
 
