@@ -5,7 +5,8 @@ import { transform } from 'lightningcss';
 import type { Plugin, UserConfig } from 'vite';
 import { defineConfig, type ViteUserConfig } from 'vitest/config';
 import { chromiumArgs, chromiumPath, pageDefaults } from './tests/tools/browser.ts';
-import { coreMeasured, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
+import { scriptFiles } from './.config/script-files.ts';
+import { coreMeasured, moreFile, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
 
 const at = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
 
@@ -100,7 +101,7 @@ const builds: Record<string, () => UserConfig> = {
       },
     },
   }),
-  /** The self-contained file for a page without a build step. */
+  /** The script file for a page without a build step, and beside it what it fetches when asked for. */
   script: () => bundle('./src/define.ts', 'Esterway', scriptFile),
   /** What computes Monte Carlo off the page's thread: one file for the script file and for the ES modules. Built after the script file. */
   worker: () => bundle('./src/monte-carlo-worker.ts', 'EsterwayWorker', workerFile),
@@ -128,20 +129,29 @@ function bundle(entry: string, name: string, file: string): UserConfig {
   return {
     ...shared,
     publicDir: false,
-    plugins: [smallTemplates, workerFrom('undefined'), ...(beside ? [sizeTable] : [])],
+    plugins: [
+      smallTemplates,
+      workerFrom('undefined'),
+      ...(file === scriptFile ? [scriptFiles({ main: basename(file), more: basename(moreFile), name })] : []),
+      ...(beside ? [sizeTable] : []),
+    ],
     build: {
       target: 'es2022',
       outDir: dirname(file),
       emptyOutDir: !beside,
       // a hundredth smaller than the default minifier's output, which counts against the budgets
       minify: 'terser',
-      terserOptions: { ecma: 2020, compress: { passes: 3 } },
+      terserOptions: { ecma: 2020, module: true, compress: { passes: 3 } },
       sourcemap: true,
       reportCompressedSize: false,
       ...(!beside && { license: { fileName: 'LICENSES.md' } }), // minifying drops the notices of what is inside
-      lib: { entry: at(entry), name, formats: ['iife'], fileName: () => basename(file) },
+      lib: { entry: at(entry), name, formats: [file === scriptFile ? 'es' : 'iife'], fileName: () => basename(file) },
       rolldownOptions: {
-        output: { postBanner: `/*! Esterway ${version}, MIT. Holds ${beside ? '' : 'Lit (BSD-3-Clause) and '}decimal.js (MIT): LICENSES.md */` },
+        preserveEntrySignatures: 'allow-extension', // what the parts share stays in the script file
+        output: {
+          chunkFileNames: '[name].js',
+          postBanner: `/*! Esterway ${version}, MIT. Holds ${beside ? '' : 'Lit (BSD-3-Clause) and '}decimal.js (MIT): LICENSES.md */`,
+        },
       },
     },
   };

@@ -2,6 +2,7 @@ import { EsterwayCharge } from './charge/charge.js';
 import { EsterwayLot } from './lot/lot.js';
 import { EsterwayPanel } from './panel/panel.js';
 import { FigureField } from './parts/figure-field.js';
+import { LaterElement } from './parts/later.js';
 import { OptionField } from './parts/option-field.js';
 import { EsterwayRoute } from './route/route.js';
 import { EsterwaySite } from './site/site.js';
@@ -14,6 +15,7 @@ import { EsterwayWorking } from './working/working.js';
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
   ['esterway-figure', FigureField],
   ['esterway-option', OptionField],
+  ['esterway-later', LaterElement],
   ['esterway-site', EsterwaySite],
   ['esterway-panel', EsterwayPanel],
   ['esterway-lot', EsterwayLot],

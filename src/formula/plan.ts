@@ -31,6 +31,9 @@ export interface Findings {
 
 type Step = (run: Run) => Outcome;
 
+/** What takes the place of a quantity's outcome, by key; it is given the outcome that its formula or input has. */
+export type Replaced = ReadonlyMap<string, (normal: Outcome) => Outcome>;
+
 /**
  * The asked-for quantities of a sheet and all they may rest on, compiled once: an order in which
  * each comes after what it names, integer slots, and one closure a formula. No code is generated as text.
@@ -65,9 +68,26 @@ export class Plan {
     return this.#slot.has(key);
   }
 
-  /** Starts a reading of the givens. Never throws for bad figures: they are outcomes. */
-  evaluate(givens: Givens): Findings {
-    return new Run(givens, this, this.#steps, this.#slot, this.#choiceSlot);
+  /**
+   * Starts a reading of the givens. Never throws for bad figures: they are outcomes.
+   *
+   * @param replaced what some quantities are to come to instead, and all that rests on them with it; no limit is
+   *   held against what is put in
+   * @throws RangeError for a replaced key that the plan does not hold
+   */
+  evaluate(givens: Givens, replaced?: Replaced): Findings {
+    return new Run(givens, this, replaced?.size ? this.#with(replaced) : this.#steps, this.#slot, this.#choiceSlot);
+  }
+
+  #with(replaced: Replaced): readonly Step[] {
+    const steps = [...this.#steps];
+    for (const [key, change] of replaced) {
+      const slot = this.#slot.get(key);
+      if (slot === undefined) throw new RangeError(`${key} is not in this plan`);
+      const normal = this.#steps[slot]!;
+      steps[slot] = (run) => finite(change(normal(run)), key);
+    }
+    return steps;
   }
 }
 

@@ -3,6 +3,7 @@ import { deMonteCarlo } from './de-monte-carlo.js';
 import { dePlan } from './de-plan.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
+import { deSecondCheck } from './de-second-check.js';
 import { deTitrant } from './de-titrant.js';
 import type { Texts } from './en.js';
 
@@ -25,6 +26,7 @@ export const de: Texts = {
     print: 'Ansatz drucken',
     newLotDone: 'Neue Partie begonnen; Maßlösung und Methode bleiben. „Rückgängig“ holt die letzte zurück.',
     undone: 'Ein Schritt zurückgenommen.',
+    partMissing: 'Dieser Teil ließ sich nicht laden. Die Datei esterway-more.min.js muss neben der Skriptdatei liegen; zum erneuten Versuch noch einmal öffnen.',
   },
   lot: {
     name: 'Partie',
@@ -265,6 +267,7 @@ export const de: Texts = {
     perLitre: '{perLitre} g je Liter Öl, {perKilogram} g je kg',
     expected: 'Zu erwarten sind {low} bis {high} % FFA: eine Schätzung, vor der Umesterung nachtitrieren.',
     belowShown: 'unter {least}',
+    overTime: 'Was mit der Zeit übrig bleibt',
     outcome: 'Was zu erwarten ist',
     waterOf: 'Wasser im Ansatz',
     soapOf: 'Seife',
@@ -317,6 +320,7 @@ export const de: Texts = {
     },
     source: '{title} ({mark})',
   },
+  secondCheck: deSecondCheck,
   titrant: deTitrant,
   plan: dePlan,
   monteCarlo: deMonteCarlo,

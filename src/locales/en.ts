@@ -3,6 +3,7 @@ import { enMonteCarlo } from './en-monte-carlo.js';
 import { enPlan } from './en-plan.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
+import { enSecondCheck } from './en-second-check.js';
 import { enTitrant } from './en-titrant.js';
 
 /** English: every sentence a user can read. `{…}` stands for a figure or a word put in. */
@@ -24,6 +25,7 @@ export const en = {
     print: 'Print the charge',
     newLotDone: 'A new lot is begun; titrant and method stay. Undo brings the last one back.',
     undone: 'One step taken back.',
+    partMissing: 'This part could not be fetched. The file esterway-more.min.js must lie beside the script file; open it again to try once more.',
   },
   lot: {
     name: 'Lot',
@@ -264,6 +266,7 @@ export const en = {
     perLitre: '{perLitre} g per litre of oil, {perKilogram} g per kg',
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
     belowShown: 'below {least}',
+    overTime: 'What it leaves over time',
     outcome: 'What to expect',
     waterOf: 'Water in the batch',
     soapOf: 'Soap',
@@ -316,6 +319,7 @@ export const en = {
     },
     source: '{title} ({mark})',
   },
+  secondCheck: enSecondCheck,
   titrant: enTitrant,
   plan: enPlan,
   monteCarlo: enMonteCarlo,
@@ -326,7 +330,8 @@ export const en = {
 /** The shape of a language: the same keys as English, any words. */
 export type Texts = Widened<typeof en>;
 
-type Widened<T> = T extends string ? string : T extends readonly (infer Item)[] ? readonly Widened<Item>[] : { readonly [K in keyof T]: Widened<T[K]> };
+/** The same keys as an English text, any words. */
+export type Widened<T> = T extends string ? string : T extends readonly (infer Item)[] ? readonly Widened<Item>[] : { readonly [K in keyof T]: Widened<T[K]> };
 
 /** Puts figures and words into a sentence. */
 export function fill(text: string, params: Readonly<Record<string, string>>): string {

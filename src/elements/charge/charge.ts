@@ -12,6 +12,8 @@ import { chargeStyles } from './charge-styles.js';
 
 type RouteName = 'direct' | 'twoStep';
 
+const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
+
 /** What must be known for the steps to be shown. A retest that cannot be used yet takes none of its own fields away. */
 const FIRST_AMOUNT = { direct: 'direct.catalyst', twoStep: 'pass1.sulfuric' } as const;
 
@@ -279,6 +281,7 @@ export class EsterwayCharge extends SectionElement {
       <div class="gate">
         <b>${charge.forRun.retest}</b>
         ${low !== undefined && high !== undefined ? html`<p>${fill(charge.expected, { low: this.smallShare(low), high: this.number(high) })}</p>` : nothing}
+        <esterway-later .label=${charge.overTime} .content=${overTime}></esterway-later>
         <esterway-titration bare retest exportparts="figure, result"></esterway-titration>
       </div>
     `;

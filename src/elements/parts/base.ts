@@ -12,6 +12,12 @@ import { EsterwayEditEvent } from './events.js';
 import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
 
+/** What a part says in each language; it comes with the part. */
+export interface PartTexts<T> {
+  readonly en: T;
+  readonly de: T;
+}
+
 /**
  * An element that shows part of a lot. It takes the lot from the holder around it (a site or a
  * panel); standing alone, it holds one of its own.
@@ -85,6 +91,11 @@ export abstract class LotElement extends GuestElement {
 
   protected get texts(): Texts {
     return this.#language.texts;
+  }
+
+  /** The texts of a part that is fetched by itself, in the page's language. */
+  protected textsOf<T>(part: PartTexts<T>): T {
+    return part[this.languageTag.startsWith('de') ? 'de' : 'en'];
   }
 
   protected get languageTag(): string {
