@@ -34,6 +34,7 @@ export function balancedUnit(expression: Expression, unitOf: UnitOf): Unit {
       return same(unit(node.left), unit(node.right), node.op);
     case 'exponential':
     case 'logarithm':
+    case 'rounded':
       same(unit(node.of), one, node.op);
       return one;
     case 'choice':

@@ -1,4 +1,4 @@
-import type { Constant, Expression } from './expression.js';
+import type { Constant, Expression, FunctionOp } from './expression.js';
 import { InfixNotation, RANK, write } from './notation.js';
 import type { Printed } from './notation.js';
 import type { Sheet } from './sheet.js';
@@ -7,7 +7,7 @@ import type { Sheet } from './sheet.js';
 export type AddressOf = (key: string) => string;
 
 const SIGNS = {
-  plus: '+', minus: '-', times: '*', per: '/', least: 'MIN', greatest: 'MAX', exponential: 'EXP', logarithm: 'LN', median: 'MEDIAN', separator: ',',
+  plus: '+', minus: '-', times: '*', per: '/', least: 'MIN', greatest: 'MAX', exponential: 'EXP', logarithm: 'LN', rounded: 'ROUND', median: 'MEDIAN', separator: ',',
 } as const;
 
 /**
@@ -40,6 +40,10 @@ class CellNotation extends InfixNotation {
 
   override threshold(left: Printed<string>, right: Printed<string>, below: Printed<string>, otherwise: Printed<string>): Printed<string> {
     return { out: `IF(${left.out}<${right.out},${below.out},${otherwise.out})`, rank: RANK.atom };
+  }
+
+  override call(name: FunctionOp, of: Printed<string>): Printed<string> {
+    return name === 'rounded' ? this.function('ROUND', of, { out: '0', rank: RANK.atom }) : super.call(name, of);
   }
 
   override branch(): undefined {

@@ -88,6 +88,9 @@ class Adjoints {
         return this.spread(node.of, conversionFactor(node, this.sheet.unitOf).scale(adjoint));
       case 'exponential':
         return this.spread(node.of, adjoint.times(this.value(expression)));
+      case 'rounded':
+        // a staircase: what counts is the slope of the ramp along it, for an error is not rounded away
+        return this.spread(node.of, adjoint);
       case 'logarithm':
         return this.spread(node.of, adjoint.div(this.value(node.of)));
       case 'power':

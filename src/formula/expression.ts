@@ -21,7 +21,7 @@ export type Node =
   | { readonly op: 'named'; readonly key: string }
   | { readonly op: BinaryOp; readonly left: Expression; readonly right: Expression }
   | { readonly op: 'power'; readonly base: Expression; readonly exponent: Expression }
-  | { readonly op: 'exponential' | 'logarithm'; readonly of: Expression }
+  | { readonly op: FunctionOp; readonly of: Expression }
   | { readonly op: 'choice'; readonly by: string; readonly cases: Readonly<Record<string, Expression>> }
   | {
       readonly op: 'threshold';
@@ -35,6 +35,9 @@ export type Node =
 
 /** The kind of {@link Node} with the given `op`. */
 export type NodeOf<Op extends Node['op']> = Node extends infer N ? (N extends { op: Node['op'] } ? ([Op] extends [N['op']] ? N : never) : never) : never;
+
+/** Functions of one pure number. `rounded` is to the nearest whole number, halves away from zero. */
+export type FunctionOp = 'exponential' | 'logarithm' | 'rounded';
 
 export type BinaryOp = 'sum' | 'difference' | 'product' | 'quotient' | 'least' | 'greatest';
 
@@ -87,6 +90,9 @@ export const logarithm = (of: Operand): Expression => new Expression({ op: 'loga
 /** The middle one of all, or the mean of the middle two. */
 export const median = (all: readonly Operand[]): Expression => new Expression({ op: 'median', all: all.map(operand) });
 
+/** The nearest whole multiple of a step, as a scale or a meter gives it. */
+export const nearest = (of: Expression, step: Expression): Expression => new Expression({ op: 'rounded', of: of.per(step) }).times(step);
+
 /** `below` where `left < right`, else `otherwise`. */
 export function whereBelow(left: Operand, right: Operand, below: Operand, otherwise: Operand): Expression {
   return new Expression({
@@ -120,6 +126,7 @@ export function parts(node: Node): readonly Expression[] {
       return [node.base, node.exponent];
     case 'exponential':
     case 'logarithm':
+    case 'rounded':
     case 'converted':
       return [node.of];
     case 'choice':

@@ -1,5 +1,5 @@
 import { conversionFactor } from './balance.js';
-import type { BinaryOp, Constant, Expression, NodeOf } from './expression.js';
+import type { BinaryOp, Constant, Expression, FunctionOp, NodeOf } from './expression.js';
 import type { Rational } from './rational.js';
 import type { Sheet } from './sheet.js';
 import type { Unit } from './unit.js';
@@ -19,7 +19,7 @@ export interface Notation<Out> {
   named(key: string): Printed<Out>;
   binary(op: BinaryOp, left: Printed<Out>, right: Printed<Out>): Printed<Out>;
   power(base: Printed<Out>, exponent: Printed<Out>): Printed<Out>;
-  call(name: 'exponential' | 'logarithm', of: Printed<Out>): Printed<Out>;
+  call(name: FunctionOp, of: Printed<Out>): Printed<Out>;
   median(all: readonly Printed<Out>[]): Printed<Out>;
   /** A change of unit by an exact factor. */
   converted(of: Printed<Out>, factor: Rational, unit: Unit): Printed<Out>;
@@ -43,6 +43,7 @@ export function write<Out>(expression: Expression, sheet: Sheet, notation: Notat
       return notation.power(printed(node.base), printed(node.exponent));
     case 'exponential':
     case 'logarithm':
+    case 'rounded':
       return notation.call(node.op, printed(node.of));
     case 'median':
       return notation.median(node.all.map(printed));
@@ -73,6 +74,7 @@ export interface Signs {
   readonly greatest: string;
   readonly exponential: string;
   readonly logarithm: string;
+  readonly rounded: string;
   readonly median: string;
   /** Between the arguments of a function. */
   readonly separator: string;
@@ -111,7 +113,7 @@ export abstract class InfixNotation implements Notation<string> {
     return { out: `${bracketed(base, RANK.atom)}^${bracketed(exponent, RANK.atom)}`, rank: RANK.power };
   }
 
-  call(name: 'exponential' | 'logarithm', of: Printed<string>): Printed<string> {
+  call(name: FunctionOp, of: Printed<string>): Printed<string> {
     return this.function(this.signs[name], of);
   }
 

@@ -189,6 +189,8 @@ class Compiler {
         return this.both(node.base, node.exponent, key, remembered((base, exponent) => raise(base, exponent, key)));
       case 'exponential':
         return this.alone(node.of, key, remembered((value) => value.exp()));
+      case 'rounded':
+        return this.alone(node.of, key, (value) => value.toDecimalPlaces(0, Decimal.ROUND_HALF_UP));
       case 'logarithm':
         return this.alone(node.of, key, remembered((value) => (value.gt(0) ? value.ln() : refuse('logarithm-of-nothing', key))));
       default:

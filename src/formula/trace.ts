@@ -49,6 +49,8 @@ function computed(expression: Expression, sheet: Sheet, findings: Findings): Dec
       return value(node.base).pow(value(node.exponent));
     case 'exponential':
       return value(node.of).exp();
+    case 'rounded':
+      return value(node.of).toDecimalPlaces(0, Decimal.ROUND_HALF_UP);
     case 'logarithm':
       return value(node.of).ln();
     case 'converted':

@@ -1,4 +1,4 @@
-import type { BinaryOp, Constant, Expression, NodeOf } from './expression.js';
+import type { BinaryOp, Constant, Expression, FunctionOp, NodeOf } from './expression.js';
 import { RANK, write } from './notation.js';
 import type { Notation, Printed } from './notation.js';
 import type { Findings } from './plan.js';
@@ -54,7 +54,7 @@ function mathOf(quantity: Quantity, notation: WorkingMath, sheet: Sheet): MathNo
 type Part = Printed<MathNode>;
 
 const OPERATORS = { sum: '+', difference: '−', product: '·' } as const;
-const FUNCTIONS = { least: 'min', greatest: 'max', exponential: 'exp', logarithm: 'ln' } as const;
+const FUNCTIONS = { least: 'min', greatest: 'max', exponential: 'exp', logarithm: 'ln', rounded: 'round' } as const;
 
 class WorkingMath implements Notation<MathNode> {
   constructor(
@@ -95,7 +95,7 @@ class WorkingMath implements Notation<MathNode> {
     return { out: { tag: 'msup', content: [fenced(base, RANK.atom), exponent.out] }, rank: RANK.power };
   }
 
-  call(name: 'exponential' | 'logarithm', of: Part): Part {
+  call(name: FunctionOp, of: Part): Part {
     return this.function(FUNCTIONS[name], of);
   }
 

@@ -14,7 +14,7 @@ import { one, percent } from './units.js';
 export type WriteFigure = (value: Decimal, unit: Unit, quantity?: Quantity) => string;
 
 const SIGNS = {
-  plus: ' + ', minus: ' − ', times: ' · ', per: ' / ', least: 'min', greatest: 'max', exponential: 'exp', logarithm: 'ln', median: 'median', separator: '; ',
+  plus: ' + ', minus: ' − ', times: ' · ', per: ' / ', least: 'min', greatest: 'max', exponential: 'exp', logarithm: 'ln', rounded: 'round', median: 'median', separator: '; ',
 } as const;
 
 /** The general formula on one line: symbols, and figures for the constants. Choices show the branch taken. */

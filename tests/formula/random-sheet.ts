@@ -246,6 +246,7 @@ export function withLeaf(expression: Expression, at: number, exchange: (leaf: Ex
         return part;
       case 'exponential':
       case 'logarithm':
+      case 'rounded':
         return new Expression({ ...node, of: change(node.of) });
       case 'power':
         return new Expression({ ...node, base: change(node.base), exponent: change(node.exponent) });

@@ -87,6 +87,10 @@ export class RoundingOf {
         const of = this.of(node.of);
         return step(Math.log(of.value), of.error / (of.value - of.error), of);
       }
+      case 'rounded': {
+        const of = this.of(node.of);
+        return { value: Math.round(of.value), error: Math.abs((of.value % 1) - 0.5) < 1e-6 ? Infinity : 0, corner: of.corner };
+      }
       case 'converted': {
         const of = this.of(node.of);
         const { over, under } = conversionFactor(node, this.sheet.unitOf);
