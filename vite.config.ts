@@ -28,7 +28,7 @@ const shared: UserConfig = {
     alias: [
       // demo pages and tests may import the package by its public name
       { find: /^esterway$/, replacement: at('./src/index.ts') },
-      { find: /^esterway\/(define|core|working)$/, replacement: at('./src') + '/$1.ts' },
+      { find: /^esterway\/(define|core|working|more)$/, replacement: at('./src') + '/$1.ts' },
     ],
     dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
   },
@@ -87,7 +87,7 @@ const builds: Record<string, () => UserConfig> = {
       minify: false,
       sourcemap: true,
       lib: {
-        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts') },
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts') },
         formats: ['es'],
       },
       rolldownOptions: {
@@ -132,7 +132,7 @@ function bundle(entry: string, name: string, file: string): UserConfig {
     plugins: [
       smallTemplates,
       workerFrom('undefined'),
-      ...(file === scriptFile ? [scriptFiles({ main: basename(file), more: basename(moreFile), name })] : []),
+      ...(file === scriptFile ? [scriptFiles({ main: basename(file), more: basename(moreFile), name, start: 'defineMore' })] : []),
       ...(beside ? [sizeTable] : []),
     ],
     build: {

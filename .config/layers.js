@@ -20,6 +20,7 @@ const entries = {
   working: { values: below },
   'monte-carlo-worker': { values: below },
   index: { values: [...Object.keys(folders), 'core', 'working'] },
+  more: { values: Object.keys(folders) },
   define: { values: [...Object.keys(folders), 'core', 'index'] },
 };
 

@@ -8,6 +8,8 @@ interface Names {
   readonly more: string;
   /** Global name of the script file's exports. */
   readonly name: string;
+  /** What the second exports to be called once it is there. */
+  readonly start: string;
 }
 
 interface Chunk {
@@ -23,7 +25,7 @@ interface Chunk {
  * needs no `type="module"`. The second finds what it shares with the first in `globalThis.esterwayParts`;
  * of two copies on a page the first stays, as its elements do.
  */
-export function scriptFiles({ main, more, name }: Names): Plugin {
+export function scriptFiles({ main, more, name, start }: Names): Plugin {
   const shared = 'globalThis.esterwayParts';
   return {
     name: 'script-files',
@@ -44,7 +46,7 @@ export function scriptFiles({ main, more, name }: Names): Plugin {
         const given = exportsOf(second);
         second.code = wrapped(second.code, (code) => code.replace(/import\{([^}]*)\}from"[^"]*";?/, (_, names: string) => `const{${names.replaceAll(' as ', ':')}}=${shared}.main;`), {
           before: `(()=>{"use strict";if(${shared}?.stamp!=="${stamp}")throw new Error("${more} is of another build than ${main}");`,
-          after: `;${shared}.more={${given}}})();`,
+          after: `;(${shared}.more={${given}}).${start}()})();`,
         });
         second.code = second.code.replaceAll(second.fileName, more);
         const map = bundle[`${second.fileName}.map`];

@@ -12,6 +12,7 @@ import { acidity, alkaliPerLitreOfOil } from './lot-acidity.js';
 import * as methanol from './methanol.js';
 import * as oil from './oil.js';
 import * as pretreatment from './pretreatment.js';
+import * as dispensing from './dispensing.js';
 import * as equipment from './equipment.js';
 import * as replicate from './replicates.js';
 import { titrationRun } from './run.js';
@@ -81,10 +82,10 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
 
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
-    ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan),
+    ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan), ...members(dispensing),
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
-    ...direct, ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
+    ...direct, ...([1, 2, 3] as const).flatMap(dispensing.dispensedPass), ...(['direct', 'twoStep'] as const).flatMap(dispensing.dispensedBase), ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
   ]);
 }
 

@@ -7,7 +7,6 @@ import { OptionField } from './parts/option-field.js';
 import { EsterwayRoute } from './route/route.js';
 import { EsterwaySite } from './site/site.js';
 import { EsterwaySiteValues } from './site/site-values.js';
-import { EsterwayTitrant } from './titrant/titrant.js';
 import { EsterwayTitration } from './titration/titration.js';
 import { EsterwayWorking } from './working/working.js';
 
@@ -19,7 +18,6 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-site', EsterwaySite],
   ['esterway-panel', EsterwayPanel],
   ['esterway-lot', EsterwayLot],
-  ['esterway-titrant', EsterwayTitrant],
   ['esterway-titration', EsterwayTitration],
   ['esterway-route', EsterwayRoute],
   ['esterway-charge', EsterwayCharge],

@@ -1,7 +1,15 @@
 import { ResidualPlot } from './charge/residual.js';
+import { EsterwayCurve } from './curve/curve.js';
+import { EsterwayTitrant } from './titrant/titrant.js';
+import { PlanElement } from './titration/plan.js';
+import { SimulationElement } from './working/simulation.js';
 
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
+  ['esterway-titrant', EsterwayTitrant],
+  ['esterway-curve', EsterwayCurve],
+  ['esterway-plan', PlanElement],
   ['esterway-residual', ResidualPlot],
+  ['esterway-simulation', SimulationElement],
 ];
 
 /** Registers the elements that a page seldom needs. A tag that is taken already stays as it is. */

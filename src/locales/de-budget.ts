@@ -4,6 +4,7 @@ import type { Texts } from './en.js';
 export const deBudget: Texts['budget'] = {
   combined: 'erweiterte Messunsicherheit, U = 2 u, etwa 95 %; u = {u}',
   caption: 'Woher sie kommt, größter Beitrag zuerst',
+  simulation: 'Monte-Carlo',
   source: 'Quelle',
   share: 'Anteil an der Varianz',
   alone: 'u daraus allein',

@@ -83,4 +83,13 @@ export const deEvidenceQuantities: { readonly [Key in keyof typeof enEvidenceQua
   mostPortion: 'größte Einwaage für die Bürette',
   'planned.portion': 'geplante Einwaage',
   portionVolume: 'Probenvolumen',
+
+  'dispensed.methanolVolume': 'Methanol in ganzen Schritten',
+  'dispensed.catalyst': 'Katalysator in ganzen Schritten',
+  'dispensed.sulfuric': 'Schwefelsäure in ganzen Schritten',
+  'dispensed.methanolRatio': 'Methanol je mol Öl, in ganzen Schritten',
+  'dispensed.baseLoad': 'Grundmenge, in ganzen Schritten',
+  methanolStep: 'kleinster Schritt für Methanol',
+  catalystStep: 'kleinster Schritt für Katalysator',
+  sulfuricStep: 'kleinster Schritt für Schwefelsäure',
 };

@@ -1,7 +1,8 @@
-import type { Texts } from './en.js';
+import type { enMonteCarlo } from './en-monte-carlo.js';
+import type { Widened } from './en.js';
 
 /** Die Prüfung einer Messunsicherheit mit Monte Carlo. */
-export const deMonteCarlo: Texts['monteCarlo'] = {
+export const deMonteCarlo: Widened<typeof enMonteCarlo> = {
   start: 'Mit Monte Carlo prüfen',
   again: 'Noch einmal ziehen',
   stop: 'Abbrechen',

@@ -1,8 +1,8 @@
-import type { Texts } from './en.js';
+import type { Widened } from './en.js';
+import type { enPlan } from './en-plan.js';
 
 /** Eine Titration planen. */
-export const dePlan: Texts['plan'] = {
-  title: 'Titration planen',
+export const dePlan: Widened<typeof enPlan> = {
   none: 'Erwartete Säurezahl angeben, nach den letzten Partien dieser Herkunft oder nach Augenschein.',
   noTitrant: 'Für einen Plan fehlt der Gehalt der Maßlösung.',
   weigh: 'Etwa {portion} g einwägen: Verbrauch um {titre} mL bei {strength} mol/L.',

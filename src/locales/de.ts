@@ -1,10 +1,7 @@
 import { deBudget } from './de-budget.js';
-import { deMonteCarlo } from './de-monte-carlo.js';
-import { dePlan } from './de-plan.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
 import { deSecondCheck } from './de-second-check.js';
-import { deTitrant } from './de-titrant.js';
 import type { Texts } from './en.js';
 
 /** German. Labels begin with a noun, so that they can stand in a sentence as they are. */
@@ -264,6 +261,9 @@ export const de: Texts = {
     methanolCredit: '{mass} Methanol der Lösung sind angerechnet',
     parts: 'Grundmenge {base} + Zuschlag {extra}',
     mineral: 'davon {mass} für Schwefelsäure im Öl',
+    dispensed: 'in ganzen Schritten {amount}',
+    dispensedMethanol: 'in ganzen Schritten {amount}, {ratio} mol je mol Öl',
+    dispensedCatalyst: 'in ganzen Schritten {amount}, Grundmenge {load} %',
     perLitre: '{perLitre} g je Liter Öl, {perKilogram} g je kg',
     expected: 'Zu erwarten sind {low} bis {high} % FFA: eine Schätzung, vor der Umesterung nachtitrieren.',
     belowShown: 'unter {least}',
@@ -316,14 +316,16 @@ export const de: Texts = {
       oil: 'Öl',
       bench: 'Labor',
       equipment: 'Geräte und ihre Toleranzen',
-      vessel: 'Behälter',
+      vessel: 'Behälter und Dosierung',
     },
     source: '{title} ({mark})',
   },
   secondCheck: deSecondCheck,
-  titrant: deTitrant,
-  plan: dePlan,
-  monteCarlo: deMonteCarlo,
+  titrant: {
+    ofSite: 'Maßlösung des Betriebs',
+    ownStrength: 'Anderer Gehalt für diese Partie',
+    plan: 'Titration planen',
+  },
   budget: deBudget,
   quantities: deQuantities,
 };

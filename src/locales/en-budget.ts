@@ -2,6 +2,7 @@
 export const enBudget = {
   combined: 'expanded uncertainty, U = 2 u, about 95 %; u = {u}',
   caption: 'Where it comes from, largest first',
+  simulation: 'Monte Carlo',
   source: 'Source',
   share: 'Share of the variance',
   alone: 'u of it alone',

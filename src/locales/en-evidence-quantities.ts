@@ -81,4 +81,13 @@ export const enEvidenceQuantities = {
   mostPortion: 'largest portion for the burette',
   'planned.portion': 'portion to weigh in',
   portionVolume: 'portion to measure out',
+
+  'dispensed.methanolVolume': 'methanol in whole steps',
+  'dispensed.catalyst': 'catalyst in whole steps',
+  'dispensed.sulfuric': 'sulfuric acid in whole steps',
+  'dispensed.methanolRatio': 'methanol a mole of oil, in whole steps',
+  'dispensed.baseLoad': 'base load, in whole steps',
+  methanolStep: 'smallest step of methanol',
+  catalystStep: 'smallest step of catalyst',
+  sulfuricStep: 'smallest step of sulfuric acid',
 };

@@ -1,6 +1,5 @@
 /** Planning a titration. */
 export const enPlan = {
-  title: 'Plan the titration',
   none: 'Type the acid value to expect, from the source’s last lots or by its looks.',
   noTitrant: 'The titrant’s strength is needed for a plan.',
   weigh: 'Weigh in about {portion} g: it will take near {titre} mL of {strength} mol/L.',

@@ -1,10 +1,7 @@
 import { enBudget } from './en-budget.js';
-import { enMonteCarlo } from './en-monte-carlo.js';
-import { enPlan } from './en-plan.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
 import { enSecondCheck } from './en-second-check.js';
-import { enTitrant } from './en-titrant.js';
 
 /** English: every sentence a user can read. `{…}` stands for a figure or a word put in. */
 export const en = {
@@ -263,6 +260,9 @@ export const en = {
     methanolCredit: '{mass} methanol of the solution is counted',
     parts: 'base {base} + extra {extra}',
     mineral: 'of it {mass} for sulfuric acid left in the oil',
+    dispensed: 'in whole steps {amount}',
+    dispensedMethanol: 'in whole steps {amount}, {ratio} mol per mol oil',
+    dispensedCatalyst: 'in whole steps {amount}, base load {load} %',
     perLitre: '{perLitre} g per litre of oil, {perKilogram} g per kg',
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
     belowShown: 'below {least}',
@@ -315,14 +315,16 @@ export const en = {
       oil: 'Oil',
       bench: 'Bench',
       equipment: 'Equipment and its tolerances',
-      vessel: 'Vessel',
+      vessel: 'Vessel and dispensing',
     },
     source: '{title} ({mark})',
   },
   secondCheck: enSecondCheck,
-  titrant: enTitrant,
-  plan: enPlan,
-  monteCarlo: enMonteCarlo,
+  titrant: {
+    ofSite: 'The site’s titrant',
+    ownStrength: 'Another strength for this lot',
+    plan: 'Plan the titration',
+  },
   budget: enBudget,
   quantities: enQuantities,
 };

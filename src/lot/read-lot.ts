@@ -109,8 +109,10 @@ function passesOf({ findings }: LotRun): number | undefined {
 /** Results that nothing else in a plan asks for: the first pass is shown even where the charge is not known yet. */
 function compute({ plan, findings }: LotRun, entry: LotEntry, site: SiteProfile, passes: number | undefined): void {
   const hasTitrant = 'titrantStrength' in entry.figures || Boolean(site.titrantRuns?.length) || TITRANT_FIGURES.some((key) => key in site.figures);
+  const hasSteps = DISPENSING_STEPS.some((key) => key in entry.figures || key in site.figures);
   const shows = (key: string): boolean => {
     const pass = /^pass(\d)\./.exec(key);
+    if (key.includes('.dispensed.')) return hasSteps && (!pass || Number(pass[1]) <= (passes ?? 1));
     if (pass) return Number(pass[1]) <= (passes ?? 1);
     const run = /^(retest\.)?run(\d+)\.(acidValue|freeFattyAcid)$/.exec(key);
     if (run) return Number(run[2]) <= (run[1] ? entry.retestRuns : entry.runs).length;
@@ -120,6 +122,7 @@ function compute({ plan, findings }: LotRun, entry: LotEntry, site: SiteProfile,
   for (const key of plan.order) if (shows(key)) findings.outcome(key);
 }
 
+const DISPENSING_STEPS = ['methanolStep', 'catalystStep', 'sulfuricStep'];
 const TITRANT_FIGURES = ['titrantStrength', 'titrantWeighedMass'];
 const RESULTS = /^(?:(?:direct|twoStep|pretreated)\..*|acidValue|freeFattyAcid|alkaliPerLitreOfOil|oilVolume|blendOil|waterContent|insolubles|pretreatmentTarget|runRange|criticalRange)$/;
 

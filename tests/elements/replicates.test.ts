@@ -2,8 +2,9 @@ import { expect as expectPage } from '@open-wc/testing';
 import { html } from 'lit';
 import { describe, expect, test } from 'vitest';
 import type { EsterwayTitration, LotEntry, SiteProfile } from '../../src/index.js';
-import { click, controls, enter, place, words } from './tools/page.js';
+import { enter, openPart, place, words } from './tools/page.js';
 import { lot, run, site } from './tools/lots.js';
+import { enPlan } from '../../src/locales/en-plan.js';
 import { de, en, fill } from './tools/texts.js';
 
 // With 0.1 mol/L and 2.5 g a millilitre is 2.244 mg/g (56.1 · 0.1 / 2.5). ASTM D664, used oil: two results may differ by 0.117 of their mean.
@@ -57,12 +58,12 @@ describe('what is made of the runs', () => {
 
 describe('the plan', () => {
   const opened = async (element: EsterwayTitration): Promise<string> => {
-    await click(controls(element).find((control) => words(control) === en.plan.title)!);
+    await openPart(element, en.titrant.plan);
     return words(element);
   };
 
   test('asks for the acid value to expect', async () => {
-    expect(await opened(await placeRuns([]))).toContain(en.plan.none);
+    expect(await opened(await placeRuns([]))).toContain(enPlan.none);
   });
 
   test('says portion, titre and the ± to expect', async () => {
@@ -70,7 +71,7 @@ describe('the plan', () => {
     await opened(element);
     await enter(element, 'Expected acid value', '10'); // 10 · 2.5 / 5.61 is 4.46 mL
     const text = words(element);
-    expect(text).toContain(fill(en.plan.weigh, { portion: '2.5', titre: '4.5', strength: '0.100' }));
+    expect(text).toContain(fill(enPlan.weigh, { portion: '2.5', titre: '4.5', strength: '0.100' }));
     expect(text).toMatch(/Two runs should leave ± 0\.\d+ mg\/g/);
     await expectPage(element).to.be.accessible();
   });

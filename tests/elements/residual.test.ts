@@ -4,16 +4,14 @@ import { describe, expect, test } from 'vitest';
 import type { EsterwayCharge, LotEntry } from '../../src/index.js';
 import { enResidual } from '../../src/locales/en-residual.js';
 import { deResidual } from '../../src/locales/de-residual.js';
-import { click, controls, place, settled, words } from './tools/page.js';
+import { openPart, place, words } from './tools/page.js';
 import { certified, site } from './tools/lots.js';
 import { de, en } from './tools/texts.js';
 
 const opened = async (entry: LotEntry, profile = site({}), lang = 'en'): Promise<EsterwayCharge> => {
   const charge = await place<EsterwayCharge>(html`<esterway-charge lang=${lang} .entry=${entry} .site=${profile}></esterway-charge>`);
   const { charge: texts } = lang === 'de' ? de : en;
-  await click(controls(charge).find((control) => words(control) === texts.overTime)!);
-  await expect.poll(() => customElements.get('esterway-residual')).toBeDefined();
-  await settled();
+  await openPart(charge, texts.overTime);
   return charge;
 };
 

@@ -1,10 +1,14 @@
 import { expect as expectPage } from '@open-wc/testing';
 import { html } from 'lit';
 import { describe, expect, test } from 'vitest';
-import type { EsterwayPanel, EsterwaySiteChangeEvent, EsterwayTitrant, SiteProfile } from '../../src/index.js';
-import { choose, controls, enter, hasField, input, place, words, click, find } from './tools/page.js';
+import type { EsterwayPanel, EsterwaySiteChangeEvent, SiteProfile } from '../../src/index.js';
+import { deTitrant } from '../../src/locales/de-titrant.js';
+import { enTitrant } from '../../src/locales/en-titrant.js';
+import type { EsterwayTitrant } from '../../src/more.js';
+import '../../src/more.js';
+import { choose, enter, hasField, input, openPart, place, words, find } from './tools/page.js';
 import { run, site, sour } from './tools/lots.js';
-import { de, en, fill } from './tools/texts.js';
+import { en, fill } from './tools/texts.js';
 
 const placeTitrant = (profile: SiteProfile = site({}), lang = 'en') =>
   place<EsterwayTitrant>(html`<esterway-titrant lang=${lang} .site=${profile}></esterway-titrant>`);
@@ -21,7 +25,7 @@ describe('the strength', () => {
   test('from a label is typed', async () => {
     const element = await placeTitrant();
     await enter(element, en.fields.titrantStrength, '0.1003');
-    expect(words(element)).toContain(`0.1003 mol/L ${en.titrant.result} ± 0.0006 mol/L`);
+    expect(words(element)).toContain(`0.1003 mol/L ${enTitrant.result} ± 0.0006 mol/L`);
   });
 
   test('from weighing says that it was not standardised', async () => {
@@ -96,7 +100,7 @@ describe('in the panel', () => {
   test('can be standardised where the titration is done', async () => {
     const panel = await place<EsterwayPanel>(html`<esterway-panel .entry=${sour}></esterway-panel>`);
     const titration = find(panel, 'esterway-titration');
-    await click(controls(titration).find((control) => control.localName === 'summary' && words(control).startsWith(en.sections.titrant))!);
+    await openPart(titration, en.sections.titrant);
     await choose(find(titration, 'esterway-titrant'), en.choices.titrantKnownFrom, 'standardised');
     expect(panel.site.options['titrantKnownFrom']).toBe('standardised');
   });
@@ -104,6 +108,6 @@ describe('in the panel', () => {
 
 test.each(['en', 'de'])('is accessible in %s', async (lang) => {
   const element = await placeTitrant(STANDARDISED, lang);
-  expect(words(element)).toContain(lang === 'de' ? de.titrant.khp : en.titrant.khp);
+  expect(words(element)).toContain(lang === 'de' ? deTitrant.khp : enTitrant.khp);
   await expectPage(element).to.be.accessible();
 });

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { cellFormula } from '../../src/formula/cell-formula.js';
-import { Decimal } from '../../src/formula/decimal.js';
+import type { Decimal } from '../../src/formula/decimal.js';
 import { sensitivities } from '../../src/formula/derivative.js';
 import { doublesOf } from '../../src/formula/doubles.js';
 import { nearest } from '../../src/formula/expression.js';

@@ -50,9 +50,9 @@ describe.each(['en', 'de'] as const)('in %s', (language) => {
 
   it.each([
     ['clean', 'direct', 'direct'],
-    ['borderline', 'direct', 'direct'],
+    ['borderline', 'too-close', 'twoStep'],
     ['sour', 'two-step', 'twoStep'],
-  ] as const)('the %s lot ends in the charge of the %s route', async (lot, verdict, route) => {
+  ] as const)('the %s lot is %s and ends in that charge', async (lot, verdict, route) => {
     const { complaints, elsewhere } = await open(language);
     const reading = await load(lot);
     expect(reading.route.verdict).toBe(verdict);

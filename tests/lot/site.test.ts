@@ -30,8 +30,8 @@ describe('the default figures', () => {
   it('leave only what belongs to a lot or is not always needed', () => {
     const without = [...KNOWN_KEYS.figures].filter((key) => !(key in DEFAULT_FIGURES)).sort();
     expect(without).toEqual([
-      'blank', 'buretteCapacityTyped', 'buretteToleranceTyped', 'certificateAcidValue', 'certificateFfa', 'expectedAcidValue', 'iodineValue', 'measuredOilDensity', 'oilAmount',
-      'otherAcidMolarMass', 'retest.certificateAcidValue', 'retest.certificateFfa', 'titrantFlaskVolume', 'titrantStrength', 'titrantWeighedMass',
+      'blank', 'buretteCapacityTyped', 'buretteToleranceTyped', 'catalystStep', 'certificateAcidValue', 'certificateFfa', 'expectedAcidValue', 'iodineValue', 'measuredOilDensity', 'methanolStep', 'oilAmount',
+      'otherAcidMolarMass', 'retest.certificateAcidValue', 'retest.certificateFfa', 'sulfuricStep', 'titrantFlaskVolume', 'titrantStrength', 'titrantWeighedMass',
       'titrationTemperature', 'vesselVolume',
     ]);
   });

@@ -188,12 +188,24 @@ export class EsterwayCharge extends SectionElement {
 
   private line(line: ChargeLine, step: ChargeStep): unknown {
     if (!line.mass) return html`<li><span class="plain">${this.instruction(line)}</span></li>`;
-    const how = this.how(line, step);
+    const how = html`${this.how(line, step)}${this.dispensed(line, step)}`;
     const volume = line.volume && Number(this.reading(line.volume)?.value ?? 0) > 0 ? this.figure(line.volume) : nothing;
     return html`<li>
       <span class="what">${this.instruction(line, step)}</span><span class="mass">${this.figure(line.mass)}</span>
       <span class="how">${how}</span><span class="volume">${volume}${this.spread(line.mass)}</span>
     </li>`;
+  }
+
+  /** The amount that scale or meter can give, and what the rounding changes. */
+  private dispensed({ what }: ChargeLine, step: ChargeStep): unknown {
+    const { charge } = this.texts;
+    const from = step.step === 'base' ? this.looked : `pass${step.pass}`;
+    const name = { methanol: 'methanolVolume', catalyst: 'catalyst', 'sulfuric-acid': 'sulfuric' }[what as string];
+    const key = `${from}.dispensed.${name}`;
+    if (!name || !this.known(key)) return nothing;
+    const sentence = step.step !== 'base' ? charge.dispensed : what === 'methanol' ? charge.dispensedMethanol : charge.dispensedCatalyst;
+    const ratio = this.plain(`${from}.dispensed.methanolRatio`);
+    return html`<br />${fillWith(sentence, { amount: this.figure(key), ratio, load: this.plain(`${from}.dispensed.baseLoad`) })}`;
   }
 
   /** How well an amount to weigh is known, from the titration and the site's equipment. */

@@ -1,6 +1,7 @@
+import type * as defineMore from '../define-more.js';
 import { runBeside, script } from './beside.js';
 
-type More = typeof import('../define-more.js');
+type More = typeof defineMore;
 
 let loading: Promise<void> | undefined;
 
@@ -23,8 +24,10 @@ export function loadMore(): Promise<void> {
 
 async function fetched(): Promise<More> {
   if (script === undefined) return import('../define-more.js');
-  await runBeside('esterway-more.min.js');
-  const { more } = (globalThis as { esterwayParts?: { more?: More } }).esterwayParts ?? {};
+  const there = (): More | undefined => (globalThis as { esterwayParts?: { more?: More } }).esterwayParts?.more;
+  // a page may have loaded it by a tag of its own
+  if (!there()) await runBeside('esterway-more.min.js');
+  const more = there();
   if (!more) throw new Error('esterway-more.min.js did not run');
   return more;
 }

@@ -9,7 +9,7 @@ import { SectionElement } from './section.js';
 /** Units of site figures that have no usual value, and of those that are typed in several. */
 const UNITS: Readonly<Record<string, readonly string[]>> = {
   titrantStrength: ['mol/L', 'g/L'], titrantWeighedMass: ['g'], titrantFlaskVolume: ['L', 'mL'], buretteCapacityTyped: ['mL'], buretteToleranceTyped: ['mL'],
-  iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'],
+  iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'], methanolStep: ['L', 'mL', 'US gal'], catalystStep: ['g', 'kg', 'lb'], sulfuricStep: ['g', 'kg', 'lb'],
 };
 
 /** A section that edits the site profile: fields for its figures and options. */

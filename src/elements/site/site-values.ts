@@ -22,7 +22,7 @@ const GROUPS: Readonly<Record<Group, readonly string[]>> = {
     'titrantLabelTolerance', 'titrantWeighingTolerance', 'khpPurityTolerance', 'standardisationRepeatability', 'certificateTolerance', 'oilAmountTolerance',
     'catalystAssayTolerance', 'sulfuricAssayTolerance', 'saponificationTolerance',
   ],
-  vessel: ['vesselVolume', 'vesselFill'],
+  vessel: ['vesselVolume', 'vesselFill', 'methanolStep', 'catalystStep', 'sulfuricStep'],
 };
 
 /**

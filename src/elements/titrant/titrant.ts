@@ -2,9 +2,13 @@ import { css, html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
 import { live } from 'lit/directives/live.js';
+import { deTitrant } from '../../locales/de-titrant.js';
+import { enTitrant } from '../../locales/en-titrant.js';
 import { fieldStyles } from '../parts/field-styles.js';
 import { SiteSectionElement } from '../parts/site-section.js';
 import { RunsTable } from '../titration/runs-table.js';
+
+const TEXTS = { en: enTitrant, de: deTitrant };
 
 /**
  * The titrant of a site: its strength from a label, from weighing, or standardised on potassium
@@ -73,15 +77,16 @@ export class EsterwayTitrant extends SiteSectionElement {
 
   protected override body(): unknown {
     const from = this.siteOption('titrantKnownFrom');
+    const texts = this.textsOf(TEXTS);
     return html`
       <div class="fields">${this.siteOptionField('titrantKnownFrom', true)} ${this.siteOptionField('titrantAlkali')} ${this.siteOptionField('titrantSolvent')}</div>
       ${from === 'standardised' ? this.standardisation() : html`<div class="fields">${this.given(from).map((key) => this.siteFigureField(key))}</div>`}
       <div class="result" part="result" role="status">
         <div class="value">${this.figure('titrantConcentration')}</div>
-        <p class="small quiet">${this.texts.titrant.result} ${this.plusMinus('titrantConcentration') ?? `· ${this.whyUnknown('titrantConcentration')}`}</p>
+        <p class="small quiet">${texts.result} ${this.plusMinus('titrantConcentration') ?? `· ${this.whyUnknown('titrantConcentration')}`}</p>
       </div>
       ${this.noticesAt((field) => OF_TITRANT.test(field))}
-      <p class="note">${this.texts.titrant.note}</p>
+      <p class="note">${texts.note}</p>
     `;
   }
 
@@ -90,9 +95,8 @@ export class EsterwayTitrant extends SiteSectionElement {
   }
 
   private standardisation(): TemplateResult {
-    const { texts } = this;
     return html`
-      <p class="note">${texts.titrant.khp}</p>
+      <p class="note">${this.textsOf(TEXTS).khp}</p>
       <div class="fields">
         ${this.dateField()} ${this.siteFigureField('titrantAgeLimit')} ${this.siteFigureField('khpPurity')} ${this.siteFigureField('khpBlank')}
         ${this.siteFigureField('standardisationTemperature')}

@@ -4,12 +4,13 @@ import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { fill } from '../../locales/en.js';
-import type { Texts } from '../../locales/en.js';
+import type { Widened } from '../../locales/en.js';
+import type { enPlan } from '../../locales/en-plan.js';
 import type { TitrationPlan } from '../../lot/titration-plan.js';
 
 /** What the plan needs to be told in words. */
 export interface PlanWords {
-  readonly texts: Texts;
+  readonly texts: Widened<typeof enPlan>;
   readonly tag: string;
   /** Whether portions are measured out by volume. */
   readonly byVolume: boolean;
@@ -23,10 +24,10 @@ export function planView(plan: TitrationPlan, { texts, tag, byVolume }: PlanWord
     tablePortion: write(new Decimal(plan.tablePortion), 2), capacity: showNumber(plan.capacity, tag),
     expanded: plan.expanded === undefined ? '' : write(new Decimal(plan.expanded), 2),
   };
-  const sentence = plan.keep ? (byVolume ? texts.plan.measure : texts.plan.weigh) : texts.plan.change;
+  const sentence = plan.keep ? (byVolume ? texts.measure : texts.weigh) : texts.change;
   return html`
-    <p><b>${fill(sentence, words)}</b> ${plan.expanded === undefined ? nothing : fill(texts.plan.expect, words)}</p>
-    ${plan.likeTable ? nothing : html`<p class="gate">${fill(texts.plan.unlikeTable, words)}</p>`}
-    <p class="small quiet">${fill(texts.plan.goodPart, words)}</p>
+    <p><b>${fill(sentence, words)}</b> ${plan.expanded === undefined ? nothing : fill(texts.expect, words)}</p>
+    ${plan.likeTable ? nothing : html`<p class="gate">${fill(texts.unlikeTable, words)}</p>`}
+    <p class="small quiet">${fill(texts.goodPart, words)}</p>
   `;
 }

@@ -1,14 +1,14 @@
 import { css, html, nothing } from 'lit';
-import { property, state } from 'lit/decorators.js';
+import { property } from 'lit/decorators.js';
 import type { RunList } from '../../lot/keys.js';
 import { fill } from '../../locales/en.js';
-import { planTitration } from '../../lot/titration-plan.js';
 import { SectionElement } from '../parts/section.js';
-import { planView } from './plan-view.js';
 import { RunsTable } from './runs-table.js';
 
 /** Fields whose remarks stand under the result. */
 const TITRATED = /^(?:run\d+\.|acidValue$|titrantStrength$|titrantDate$|khpPurity$|blank$|titrationTemperature$|referenceAcid$)/;
+const planning = (): unknown => html`<esterway-plan></esterway-plan>`;
+
 /** Units offered for each figure of the bench. */
 const STRENGTH_UNITS = ['mol/L', 'g/L'];
 const TEMPERATURE_UNITS = { metric: ['°C', '°F'], us: ['°F', '°C'] } as const;
@@ -95,9 +95,6 @@ export class EsterwayTitration extends SectionElement {
   @property({ type: Boolean, reflect: true }) retest = false;
   @property({ type: Boolean, reflect: true }) required = false;
 
-  /** Whether the plan is open; it is worked out only then. */
-  @state() private planning = false;
-
   readonly #internals: ElementInternals | undefined;
   readonly #table = new RunsTable(this, {
     runs: () => this.desk.entry[this.list],
@@ -163,7 +160,7 @@ export class EsterwayTitration extends SectionElement {
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
         ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
-      ${from === 'titration' && !this.retest ? html`${this.titrant()} ${this.plan()}` : nothing}
+      ${from === 'titration' && !this.retest ? this.bench() : nothing}
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
       ${this.results()}
     `;
@@ -198,32 +195,14 @@ export class EsterwayTitration extends SectionElement {
     return html`${ofSite ? html`<p class="wide">${this.texts.titrant.ofSite}: ${this.figure('titrantConcentration')} ${this.plusMinus('titrantConcentration')}</p>` : nothing} ${strength} ${blankMatters ? this.figureField('blank', ['mL']) : nothing}`;
   }
 
-  /** The site's titrant, to standardise where the titration is done. */
-  private titrant(): unknown {
-    const { texts } = this;
-    const from = this.optionText('titrantKnownFrom');
-    return html`<details class="no-print">
-      <summary>${texts.sections.titrant} · ${from}</summary>
-      <esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>
-    </details>`;
-  }
-
-  /** Portion and titrant for the acid value to expect. */
-  private plan(): unknown {
-    const { texts } = this;
-    const { entry, site } = this.desk;
-    const plan = this.planning ? planTitration(entry, site) : undefined;
-    const words = { texts, tag: this.languageTag, byVolume: this.option('sampleTakenBy') === 'volume' };
-    const lacking = this.reading('titrantConcentration')?.value === undefined && 'expectedAcidValue' in entry.figures ? texts.plan.noTitrant : texts.plan.none;
-    return html`<details class="no-print" @toggle=${this.onPlan}>
-      <summary>${texts.plan.title}</summary>
-      <div class="fields">${this.figureField('expectedAcidValue', ['mg/g'])} ${this.optionField('portionTable')}</div>
-      <div role="status">${plan ? planView(plan, words) : html`<p class="note">${lacking}</p>`}</div>
-    </details>`;
-  }
-
-  private onPlan(event: Event): void {
-    this.planning = (event.target as HTMLDetailsElement).open;
+  /** The site's titrant, to standardise where the titration is done, and a plan for the next one. */
+  private bench(): unknown {
+    const { titrant, sections } = this.texts;
+    const standard = (): unknown => html`<esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>`;
+    return html`
+      <esterway-later .label=${`${sections.titrant} · ${this.optionText('titrantKnownFrom')}`} .content=${standard}></esterway-later>
+      <esterway-later .label=${titrant.plan} .content=${planning}></esterway-later>
+    `;
   }
 
   private results(): unknown {

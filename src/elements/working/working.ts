@@ -163,7 +163,10 @@ export class EsterwayWorking extends SectionElement {
   private budget(): unknown {
     const { entry, site } = this.desk;
     const known = uncertainty(entry, site, this.of);
-    return known?.budget.length ? budgetView(known, this.reading(this.of)?.unit ?? '', this.texts, this.languageTag, (key) => (this.of = key)) : nothing;
+    if (!known?.budget.length) return nothing;
+    const simulation = (): unknown => html`<esterway-simulation .of=${this.of}></esterway-simulation>`;
+    return html`${budgetView(known, this.reading(this.of)?.unit ?? '', this.texts, this.languageTag, (key) => (this.of = key))}
+      <esterway-later .label=${this.texts.budget.simulation} .content=${simulation}></esterway-later>`;
   }
 
   private sources({ sources }: Working): unknown {

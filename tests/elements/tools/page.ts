@@ -1,3 +1,4 @@
+import { loadMore } from '../../../src/elements/parts/more.js';
 import { fixture } from '@open-wc/testing';
 import type { LitElement, TemplateResult } from 'lit';
 import { cdp, userEvent } from 'vitest/browser';
@@ -114,6 +115,15 @@ export async function click(element: Element): Promise<void> {
 }
 
 /** Pastes text as a sheet puts it on the clipboard. Gives false where the element took it. */
+/** Opens a part that is fetched when it is opened, by the line it is folded to. */
+export async function openPart(root: Element | Document, line: string): Promise<void> {
+  const summary = controls(root).find((control) => control.localName === 'summary' && words(control).startsWith(line));
+  if (!summary) throw new Error(`no part “${line}”`);
+  await click(summary);
+  await loadMore();
+  await settled();
+}
+
 export async function paste(field: Element, text: string): Promise<boolean> {
   const clipboardData = new DataTransfer();
   clipboardData.setData('text/plain', text);
