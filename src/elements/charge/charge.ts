@@ -65,7 +65,7 @@ export class EsterwayCharge extends SectionElement {
   /** Amounts that either route asks for. */
   private get weighed(): readonly string[] {
     const { direct = [], twoStep = [] } = this.lot?.charges ?? {};
-    return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ mass }) => mass ?? []));
+    return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ what, mass }) => (mass && !what.endsWith('oil') ? mass : [])));
   }
 
   private get recommended(): RouteName {
@@ -210,7 +210,7 @@ export class EsterwayCharge extends SectionElement {
 
   /** How well an amount to weigh is known, from the titration and the site's equipment. */
   private spread(key: string): unknown {
-    const known = key === 'oilMass' ? undefined : this.#spreads[key];
+    const known = this.#spreads[key];
     const unit = this.reading(key)?.unit;
     const expanded = known && new Decimal(known.expanded);
     if (!expanded || expanded.isZero() || unit === undefined) return nothing;

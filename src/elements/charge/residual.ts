@@ -17,7 +17,7 @@ const WIDTH = 260;
 const HEIGHT = 150;
 const LEFT = 30;
 const TOP = 8;
-const BOTTOM = 22;
+const BOTTOM = 24;
 
 /** The predicted residual acid over the passes of the acid step, as a band against the target. Stands in the charge. */
 export class ResidualPlot extends LotElement {
@@ -72,8 +72,8 @@ export class ResidualPlot extends LotElement {
     return html`<svg class="plot" viewBox="0 0 ${WIDTH} ${HEIGHT}" role="img" aria-label=${label}>
       ${passes.map((pass) => svg`<path class="band" d="M${line(pass, 'slow')} L${line({ ...pass, points: [...pass.points].reverse() }, 'fast')} Z" />`)}
       ${ticks(most, 4).map((share) => svg`<path class="grid" d="M${LEFT} ${y(share)} H${WIDTH - 6}" /><text class="end" x=${LEFT - 4} y=${Number(y(share)) + 4}>${this.write(share, share % 1 ? 1 : 0)}</text>`)}
-      ${ticks(time, 4).map((minutes) => svg`<text class="middle" x=${x(minutes)} y=${HEIGHT - 6}>${this.write(minutes, 0)}</text>`)}
-      <text class="end" x=${WIDTH} y=${HEIGHT - 6}>min</text><text x="0" y="8">%</text>
+      ${ticks(time, 4).map((minutes) => svg`<text class="middle" x=${x(minutes)} y=${HEIGHT - 10}>${this.write(minutes, 0)}</text>`)}
+      <text class="end" x=${WIDTH - 6} y=${HEIGHT - 1}>min</text><text x="0" y="8">%</text>
       ${passes.slice(1).map(({ from }) => svg`<path class="grid" d="M${x(from)} ${TOP} V${HEIGHT - BOTTOM}" />`)}
       ${passes.map((pass) => svg`<path class="line" d="M${line(pass, 'slow')}" /><path class="line broken" d="M${line(pass, 'fast')}" />`)}
       <path class="limit" d="M${LEFT} ${y(target)} H${WIDTH - 6}" /><text class="limit-words end" x=${WIDTH - 8} y=${Number(y(target)) - 3}>${words}</text>
