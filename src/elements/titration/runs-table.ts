@@ -61,6 +61,12 @@ export class RunsTable implements ReactiveController {
       padding: 0 2px;
       text-align: end;
     }
+    .titrantRuns th:first-child {
+      inline-size: 1.5em;
+    }
+    .titrantRuns th:last-child {
+      inline-size: 5em;
+    }
     @container (max-width: 290px) {
       th,
       td {
@@ -136,7 +142,7 @@ export class RunsTable implements ReactiveController {
     // one empty row at the end to type the next run in
     const rows = runs.length < MOST_RUNS ? [...runs, {}] : runs;
     return html`
-      <table @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }} @focusout=${this.#onLeave}>
+      <table class=${list} @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }} @focusout=${this.#onLeave}>
         <caption class="unseen">
           ${CAPTIONS[list](texts)}
         </caption>

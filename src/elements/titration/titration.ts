@@ -221,7 +221,7 @@ export class EsterwayTitration extends SectionElement {
           <div class="kind">${fill(texts.result.ffa, { acid })}</div>
         </div>
       </div>
-      <p class="note">${this.remark()}</p>
+      <p class=${this.lot?.replicates[this.retest ? 'retest' : 'lot'].state === 'differ' ? 'gate' : 'note'}>${this.remark()}</p>
       ${prefix || !this.reading('alkaliPerLitreOfOil')?.value
         ? nothing
         : html`<p class="note">${this.figure('alkaliPerLitreOfOil')} ${fill(texts.result.alkali, { alkali: this.optionText('titrantAlkali') })}</p>`}
