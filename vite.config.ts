@@ -38,18 +38,17 @@ const shared: UserConfig = {
 const plainFiles: Readonly<Record<string, string>> = {
   ...Object.fromEntries(['script.html', 'script.css', 'base.css', 'icon.svg'].map((file) => [file, at(`./demo/${file}`)])),
   'esterway.min.js': scriptFile,
+  'esterway-more.min.js': moreFile,
   'esterway-worker.min.js': workerFile,
 };
 
 const asTheyLie: Plugin = {
   name: 'as-they-lie',
   configureServer({ middlewares }) {
-    const types: Readonly<Record<string, string>> = {
-      'script.html': 'text/html', 'esterway.min.js': 'text/javascript', 'esterway-worker.min.js': 'text/javascript',
-    };
     middlewares.use((request, response, next) => {
       const name = (request.url ?? '').slice(1).replace(/[?#].*/, '');
-      const [file, type] = [plainFiles[name], types[name]];
+      const file = plainFiles[name];
+      const type = { html: 'text/html', js: 'text/javascript' }[name.split('.').at(-1) ?? ''];
       if (!file || !type || !existsSync(file)) return next();
       response.setHeader('Content-Type', `${type}; charset=utf-8`).end(readFileSync(file));
     });

@@ -21,7 +21,6 @@ const run = (sample: string, start: string, end: string): LotEntry['runs'][numbe
   sample: figure(sample, 'g'), start: figure(start, 'mL'), end: figure(end, 'mL'),
 });
 
-const TITRANT = figure('0.1003', 'mol/L');
 const METHOD = { sampleTakenBy: 'weighing', titrantAlkali: 'KOH', titrantSolvent: 'alcoholic', blankPolicy: 'solvent-neutralised' };
 
 export const deliveries: readonly Delivery[] = [
@@ -37,7 +36,6 @@ export const deliveries: readonly Delivery[] = [
         oilAmount: figure('1250', 'kg'),
         waterContent: figure('0.06', '%'),
         insolubles: figure('0.03', '%'),
-        titrantStrength: TITRANT,
       },
       options: METHOD,
       runs: [run('10.042', '0.00', '2.14'), run('10.017', '2.14', '4.27')],
@@ -57,7 +55,6 @@ export const deliveries: readonly Delivery[] = [
         oilTemperature: figure('18', '°C'),
         waterContent: figure('0.09', '%'),
         insolubles: figure('0.08', '%'),
-        titrantStrength: TITRANT,
       },
       options: METHOD,
       runs: [run('3.021', '0.00', '3.18'), run('2.994', '3.18', '6.34')],
@@ -76,7 +73,6 @@ export const deliveries: readonly Delivery[] = [
         oilAmount: figure('640', 'kg'),
         waterContent: figure('0.31', '%'),
         insolubles: figure('0.40', '%'),
-        titrantStrength: TITRANT,
       },
       options: METHOD,
       runs: [run('1.004', '0.00', '5.82'), run('0.991', '5.82', '11.57')],
@@ -95,7 +91,6 @@ export const deliveries: readonly Delivery[] = [
         oilAmount: doubtful('1,500', 'ambiguous', 'kg'),
         waterContent: figure('130', '%'),
         insolubles: doubtful('0.3.1', 'two-marks', '%'),
-        titrantStrength: TITRANT,
       },
       options: METHOD,
       runs: [

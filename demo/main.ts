@@ -3,6 +3,7 @@ import { DeliveryList } from './delivery-list.ts';
 import { DAY, deliveries } from './lots.ts';
 import type { Delivery } from './lots.ts';
 import { dayWords, writeTexts } from './page-texts.ts';
+import { plant } from './plant.ts';
 import { applyToPage, keepSettings, lotInAddress, readSettings, settingsIn } from './settings.ts';
 import type { Settings } from './settings.ts';
 
@@ -12,6 +13,7 @@ const dock = document.querySelector('#dock')!;
 const list = new DeliveryList(document.querySelector('#deliveries')!, document.querySelector('#stray')!, deliveries, load);
 let settings = readSettings();
 
+panel.site = plant;
 panel.addEventListener('esterway-change', (event) => list.heard(event));
 form.addEventListener('change', () => {
   settings = settingsIn(form);

@@ -1,6 +1,7 @@
 import 'esterway/define';
 import type { LotEntry } from 'esterway/core';
 import { deliveries } from './lots.ts';
+import { plant } from './plant.ts';
 import { applyToPage, readSettings } from './settings.ts';
 
 const bench = document.querySelector<HTMLElementTagNameMap['esterway-site']>('#bench')!;
@@ -13,6 +14,7 @@ const sent = document.querySelector('#sent')!;
 const settings = { ...readSettings(), lang: 'en' } as const;
 applyToPage(settings);
 bench.units = settings.units;
+bench.site = plant;
 
 const { entry } = deliveries.find(({ id }) => id === 'borderline')!;
 const oil = { text: '900', unit: 'kg' };
@@ -24,11 +26,9 @@ bench.addEventListener('esterway-open', ({ key }) => {
   working.scrollIntoView({ block: 'nearest' });
 });
 
-/** A lot of which only the titrant is known. */
-const { titrantStrength } = entry.figures;
-const begun: LotEntry = {
-  version: 1, figures: titrantStrength ? { titrantStrength } : {}, options: entry.options, runs: [], retestRuns: [],
-};
+/** A lot of which nothing is known yet; the plant has its titrant. */
+const begun: LotEntry = { version: 1, figures: {}, options: entry.options, runs: [], retestRuns: [] };
+field.site = plant;
 field.entry = begun;
 
 form.addEventListener('submit', (event) => {

@@ -2,6 +2,7 @@ import type { Browser, Page } from 'playwright';
 import { afterAll, afterEach, beforeAll, describe, expect, inject, it } from 'vitest';
 import { readLot } from 'esterway/core';
 import { deliveries } from '../../demo/lots.ts';
+import { plant } from '../../demo/plant.ts';
 import type { LotName } from '../../demo/lots.ts';
 import { showNumber } from '../../src/exchange/number-format.js';
 import { de } from '../../src/locales/de.js';
@@ -39,7 +40,7 @@ async function load(lot: LotName) {
   await page.locator(`[data-lot=${lot}]`).click();
   const entry = deliveries.find(({ id }) => id === lot)!.entry;
   await page.locator('esterway-panel').getByText(entry.name, { exact: true }).first().waitFor();
-  const reading = readLot(entry);
+  const reading = readLot(entry, plant);
   if ('faults' in reading) throw new Error('the demo lot is no lot');
   return reading;
 }
