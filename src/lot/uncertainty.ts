@@ -40,11 +40,22 @@ export const COVERAGE_FACTOR = new Decimal(2);
  * @returns why it is not known, where the result or one of its sources is not
  */
 export function uncertaintyOf(run: LotRun, key: string): Uncertainty | Unknown {
+  let ofRun = FOUND.get(run);
+  if (!ofRun) FOUND.set(run, (ofRun = new Map()));
+  let found = ofRun.get(key);
+  if (!found) ofRun.set(key, (found = combined(run, key)));
+  return found;
+}
+
+/** What has been worked out for a lot at hand: its route and its result ask for the same. */
+const FOUND = new WeakMap<LotRun, Map<string, Uncertainty | Unknown>>();
+
+function combined(run: LotRun, key: string): Uncertainty | Unknown {
   const { plan, findings } = run;
   const found = slopes(plan, findings, key);
   if (!(found instanceof Map)) return found as Unknown;
   const slopeAt = found as ReadonlyMap<string, Decimal>;
-  const variances = new Map<string, Decimal>();
+  const contributions = new Map<string, Decimal[]>();
   for (const source of uncertaintySources(run.runs)) {
     const moved = source.at.flatMap((at) => slopeAt.get(at) ?? []);
     const slope = moved.reduce((sum, one) => sum.plus(one), ZERO);
@@ -52,13 +63,38 @@ export function uncertaintyOf(run: LotRun, key: string): Uncertainty | Unknown {
     const u = findings.outcome(source.key);
     if (!isKnown(u)) return u;
     if (u.isZero()) continue;
-    const variance = slope.times(u).pow(2);
-    variances.set(source.key, (variances.get(source.key) ?? ZERO).plus(variance));
+    const alone = slope.times(u).abs();
+    const others = contributions.get(source.key);
+    if (others) others.push(alone);
+    else contributions.set(source.key, [alone]);
   }
-  const total = [...variances.values()].reduce((sum, variance) => sum.plus(variance), ZERO);
-  const budget = [...variances].map(([source, variance]) => ({ key: source, u: variance.sqrt(), share: variance.div(total) }));
-  return { u: total.sqrt(), budget: budget.sort((a, b) => b.share.cmp(a.share)) };
+  return new Combined(contributions);
 }
+
+/** Roots are dear, and most who ask want the whole only: the budget is worked out when asked for. */
+class Combined implements Uncertainty {
+  readonly u: Decimal;
+  readonly #variance: Decimal;
+  readonly #contributions: ReadonlyMap<string, readonly Decimal[]>;
+
+  constructor(contributions: ReadonlyMap<string, readonly Decimal[]>) {
+    this.#contributions = contributions;
+    this.#variance = [...contributions.values()].reduce((sum, alike) => sum.plus(varianceOf(alike)), ZERO);
+    this.u = this.#variance.sqrt();
+  }
+
+  get budget(): readonly Contribution[] {
+    const lines = [...this.#contributions].map(([key, alike]) => {
+      const variance = varianceOf(alike);
+      const [first, ...more] = alike;
+      return { key, u: first && !more.length ? first : variance.sqrt(), share: variance.div(this.#variance) };
+    });
+    return lines.sort((a, b) => b.share.cmp(a.share));
+  }
+}
+
+/** Of errors that are new each time. */
+const varianceOf = (alike: readonly Decimal[]): Decimal => alike.reduce((sum, one) => sum.plus(one.times(one)), ZERO);
 
 /** A line of a budget, as JSON. */
 export interface BudgetLine {
