@@ -184,6 +184,7 @@ export const de: Texts = {
     strikeReasons: ['übertitriert', 'verschüttet', 'falsche Probenmenge', 'falsch abgelesen'],
     otherReason: 'anderer Grund',
     ofRetest: 'Bestimmungen der Nachtitration',
+    curve: 'Endpunkt aus einer Kurve',
     ofTitrant: 'Bestimmungen der Titerstellung',
     standard: 'KHP',
     hint: 'Enter geht weiter, Pfeiltasten wechseln die Zeile; ganze Zeilen lassen sich aus einer Tabelle einfügen.',

@@ -183,6 +183,7 @@ export const en = {
     strikeReasons: ['overshot', 'spilled', 'wrong portion', 'misread'],
     otherReason: 'another reason',
     ofRetest: 'Runs of the retest',
+    curve: 'End point from a curve',
     ofTitrant: 'Runs of the standardisation',
     standard: 'KHP',
     hint: 'Enter goes on, arrows change the run; rows can be pasted from a sheet.',

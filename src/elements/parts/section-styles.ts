@@ -6,6 +6,9 @@ export const sectionStyles = css`
     background: var(--_paper);
     container-type: inline-size;
   }
+  :host([bare]) {
+    background: transparent;
+  }
   .section {
     position: relative;
     padding: 4px 14px 14px 38px;

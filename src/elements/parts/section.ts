@@ -26,6 +26,9 @@ export abstract class SectionElement extends LotElement {
   /** Folded to its heading and a one-line summary. */
   @property({ type: Boolean, reflect: true }) folded = false;
 
+  /** Without heading, inside another section. */
+  @property({ type: Boolean, reflect: true }) bare = false;
+
   constructor() {
     super();
     groupsFields(this);
@@ -39,6 +42,8 @@ export abstract class SectionElement extends LotElement {
   protected abstract body(): unknown;
 
   protected override render(): unknown {
+    // a document that cannot be read is for the section around it to say
+    if (this.bare) return this.lot ? html`<div part="body">${this.body()}</div>` : nothing;
     const { reading } = this.desk;
     const faults = 'faults' in reading ? reading : undefined;
     return html`

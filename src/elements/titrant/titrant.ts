@@ -1,6 +1,5 @@
-import { css, html, nothing } from 'lit';
+import { css, html } from 'lit';
 import type { TemplateResult } from 'lit';
-import { property } from 'lit/decorators.js';
 import { live } from 'lit/directives/live.js';
 import { deTitrant } from '../../locales/de-titrant.js';
 import { enTitrant } from '../../locales/en-titrant.js';
@@ -36,9 +35,6 @@ export class EsterwayTitrant extends SiteSectionElement {
     fieldStyles,
     RunsTable.styles,
     css`
-      :host([bare]) {
-        background: transparent;
-      }
       .value {
         font-size: 1.25em;
         font-weight: 600;
@@ -51,7 +47,6 @@ export class EsterwayTitrant extends SiteSectionElement {
     `,
   ];
 
-  @property({ type: Boolean, reflect: true }) bare = false;
 
   readonly #table = new RunsTable(this, {
     runs: () => this.desk.site.titrantRuns ?? [],
@@ -68,11 +63,6 @@ export class EsterwayTitrant extends SiteSectionElement {
 
   protected override get summary(): string {
     return [this.siteWord('titrantAlkali'), this.amountWords('titrantConcentration')].filter(Boolean).join(' ');
-  }
-
-  protected override render(): unknown {
-    if (this.bare) return this.lot ? html`<div part="body">${this.body()}</div>` : nothing;
-    return super.render();
   }
 
   protected override body(): unknown {

@@ -12,9 +12,6 @@ export class PlanElement extends SectionElement {
   static override styles = [
     ...SectionElement.styles,
     css`
-      :host {
-        background: transparent;
-      }
       .note {
         color: var(--_quiet);
         font-size: 0.92em;
@@ -28,10 +25,6 @@ export class PlanElement extends SectionElement {
 
   protected override get summary(): string {
     return '';
-  }
-
-  protected override render(): unknown {
-    return this.lot ? this.body() : '';
   }
 
   protected override body(): unknown {

@@ -7,7 +7,7 @@ import { RunsTable } from './runs-table.js';
 
 /** Fields whose remarks stand under the result. */
 const TITRATED = /^(?:run\d+\.|acidValue$|titrantStrength$|titrantDate$|khpPurity$|blank$|titrationTemperature$|referenceAcid$)/;
-const planning = (): unknown => html`<esterway-plan></esterway-plan>`;
+const planning = (): unknown => html`<esterway-plan bare></esterway-plan>`;
 
 /** Units offered for each figure of the bench. */
 const STRENGTH_UNITS = ['mol/L', 'g/L'];
@@ -70,9 +70,6 @@ export class EsterwayTitration extends SectionElement {
       .value .unit {
         font-size: 0.55em;
       }
-      :host([bare]) {
-        background: transparent;
-      }
       .spread {
         font-variant-numeric: tabular-nums;
       }
@@ -91,7 +88,6 @@ export class EsterwayTitration extends SectionElement {
     `,
   ];
 
-  @property({ type: Boolean, reflect: true }) bare = false;
   @property({ type: Boolean, reflect: true }) retest = false;
   @property({ type: Boolean, reflect: true }) required = false;
 
@@ -145,12 +141,6 @@ export class EsterwayTitration extends SectionElement {
     return strength ? `${this.optionText('titrantAlkali')} ${strength}` : '';
   }
 
-  protected override render(): unknown {
-    // a document that cannot be read is for the section around it to say
-    if (this.bare) return this.lot ? html`<div part="body">${this.body()}</div>` : nothing;
-    return super.render();
-  }
-
   protected override body(): unknown {
     const from = this.option(`${this.keyPrefix}acidKnownFrom`);
     return html`
@@ -160,7 +150,7 @@ export class EsterwayTitration extends SectionElement {
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
         ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
-      ${from === 'titration' && !this.retest ? this.bench() : nothing}
+      ${from === 'titration' ? this.bench() : nothing}
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
       ${this.results()}
     `;
@@ -195,13 +185,17 @@ export class EsterwayTitration extends SectionElement {
     return html`${ofSite ? html`<p class="wide">${this.texts.titrant.ofSite}: ${this.figure('titrantConcentration')} ${this.plusMinus('titrantConcentration')}</p>` : nothing} ${strength} ${blankMatters ? this.figureField('blank', ['mL']) : nothing}`;
   }
 
-  /** The site's titrant, to standardise where the titration is done, and a plan for the next one. */
+  /** The site's titrant, to standardise where the titration is done; a plan for the next; the end point from a recorded curve. */
   private bench(): unknown {
     const { titrant, sections } = this.texts;
     const standard = (): unknown => html`<esterway-titrant bare exportparts="result, figure, field-line, field-input"></esterway-titrant>`;
+    const curve = (): unknown => html`<esterway-curve bare ?retest=${this.retest} exportparts="result, action, field-line, field-input"></esterway-curve>`;
+    const reading = html`<esterway-later .label=${this.texts.runs.curve} .content=${curve}></esterway-later>`;
+    if (this.retest) return reading;
     return html`
       <esterway-later .label=${`${sections.titrant} · ${this.optionText('titrantKnownFrom')}`} .content=${standard}></esterway-later>
       <esterway-later .label=${titrant.plan} .content=${planning}></esterway-later>
+      ${reading}
     `;
   }
 
