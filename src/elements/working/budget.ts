@@ -70,6 +70,8 @@ export const budgetStyles: CSSResult = css`
     text-align: start;
   }
   .budget th button {
+    overflow-wrap: anywhere;
+    hyphens: auto;
     min-block-size: var(--_target);
     text-align: start;
   }
