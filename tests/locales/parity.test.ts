@@ -1,4 +1,4 @@
-import { readFileSync } from 'node:fs';
+import { readFileSync, readdirSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { lotFormulas } from '../../src/chemistry/lot-formulas.js';
 import { CAUTIONS } from '../../src/decision/charge.js';
@@ -13,12 +13,10 @@ import type { Texts } from '../../src/locales/en.js';
 import { fieldLabel, fieldName, quantityName } from '../../src/locales/quantity-name.js';
 
 /** Texts that come with a part of their own, by the name of the file that they share in both languages. */
-const modules = import.meta.glob<Readonly<Record<string, unknown>>>('../../src/locales/*-*.ts', { eager: true });
+const files = readdirSync(new URL('../../src/locales/', import.meta.url)).filter((file) => /^(?:en|de)-/.test(file));
+const modules = await Promise.all(files.map(async (file) => [file, (await import(`../../src/locales/${file.replace('.ts', '')}.ts`)) as Readonly<Record<string, unknown>>] as const));
 const partsOf = (language: string) =>
-  Object.fromEntries(Object.entries(modules).flatMap(([path, module]) => {
-    const [, of, name = ''] = /\/(en|de)-([\w-]+)\.ts$/.exec(path) ?? [];
-    return of === language ? [[name, module] as const] : [];
-  }));
+  Object.fromEntries(modules.flatMap(([file, module]) => (file.startsWith(`${language}-`) ? [[file.slice(3), { ...module }] as const] : [])));
 const whole = (texts: Texts, language: 'en' | 'de') => ({ texts, parts: partsOf(language) });
 
 const languages: Readonly<Record<string, Texts>> = { en, de };
