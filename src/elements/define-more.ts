@@ -1,7 +1,10 @@
+import { ChargeSheet } from './charge/charge-sheet.js';
 import { ResidualPlot } from './charge/residual.js';
 import { EsterwayCurve } from './curve/curve.js';
 import { EsterwayTitrant } from './titrant/titrant.js';
 import { PlanElement } from './titration/plan.js';
+import { CheckSheetElement } from './working/check-sheet.js';
+import { SecondCheckElement } from './working/second-check.js';
 import { SimulationElement } from './working/simulation.js';
 
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
@@ -9,7 +12,10 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-curve', EsterwayCurve],
   ['esterway-plan', PlanElement],
   ['esterway-residual', ResidualPlot],
+  ['esterway-charge-sheet', ChargeSheet],
   ['esterway-simulation', SimulationElement],
+  ['esterway-second-check', SecondCheckElement],
+  ['esterway-check-sheet', CheckSheetElement],
 ];
 
 /** Registers the elements that a page seldom needs. A tag that is taken already stays as it is. */

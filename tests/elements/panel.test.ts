@@ -1,5 +1,5 @@
 import { html } from 'lit';
-import { describe, expect, test, vi } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import { page } from 'vitest/browser';
 import type { EsterwayPanel, LotEntry } from '../../src/index.js';
 import { button, choose, click, controls, deep, enter, find, focused, hasField, input, nameOf, place, press, settled, words } from './tools/page.js';
@@ -195,13 +195,6 @@ test('actions of the page stand beside the panel’s own', async () => {
   const row = [...deep(panel)].find((element) => element.getAttribute('part') === 'actions')!;
   expect(words(row)).toContain('Keep in the shift log');
   expect(words(row)).toContain(en.panel.print);
-});
-
-test('printing is asked of the browser', async () => {
-  const print = vi.spyOn(window, 'print').mockReturnValue();
-  await click(button(await placePanel(sour), en.panel.print));
-  expect(print).toHaveBeenCalledOnce();
-  print.mockRestore();
 });
 
 test('it takes no focus of its own, and fires nothing for what the page sets', async () => {

@@ -10,7 +10,7 @@ import { fill, fillWith } from '../../locales/en.js';
 import { SectionElement } from '../parts/section.js';
 import { chargeStyles } from './charge-styles.js';
 
-type RouteName = 'direct' | 'twoStep';
+export type RouteName = 'direct' | 'twoStep';
 
 const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
 
@@ -68,13 +68,14 @@ export class EsterwayCharge extends SectionElement {
     return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ what, mass }) => (mass && !what.endsWith('oil') ? mass : [])));
   }
 
-  private get recommended(): RouteName {
+  protected get recommended(): RouteName {
     const route = this.lot?.route;
     const verdict = route?.verdict === 'too-close' ? route.safe : route?.verdict;
     return verdict === 'direct' || verdict === 'not-known' ? 'direct' : 'twoStep';
   }
 
-  private get looked(): RouteName {
+  /** The route that is shown: the one that follows for the lot, unless a person looked at the other. */
+  get looked(): RouteName {
     return this.chosen ?? this.recommended;
   }
 
@@ -125,7 +126,7 @@ export class EsterwayCharge extends SectionElement {
     return html`<p class="gate small">${neither ? nothing : texts.charge.notThisRoute} ${texts.verdicts[verdict]}.</p>`;
   }
 
-  private known(key: string): boolean {
+  protected known(key: string): boolean {
     return this.reading(key)?.value !== undefined;
   }
 
@@ -166,8 +167,7 @@ export class EsterwayCharge extends SectionElement {
 
   private step(step: ChargeStep, all: readonly ChargeStep[]): unknown {
     const { texts, looked } = this;
-    const passes = all.filter(({ step: kind }) => kind === 'acid').length;
-    const title = step.step === 'base' ? texts.charge.baseStep : passes > 1 ? fill(texts.charge.acidStepPass, { pass: String(step.pass), passes: String(passes) }) : texts.charge.acidStep;
+    const title = this.titleOf(step, all);
     const resting = step.step === 'base' && looked === 'twoStep' ? (this.hasRetest ? texts.charge.onRetest : texts.charge.onEstimate) : '';
     const weighed = step.lines.filter(({ what }) => what !== 'retest');
     const retest = step.lines.some(({ what }) => what === 'retest');
@@ -182,7 +182,14 @@ export class EsterwayCharge extends SectionElement {
     `;
   }
 
-  private get hasRetest(): boolean {
+  protected titleOf(step: ChargeStep, all: readonly ChargeStep[]): string {
+    const { charge } = this.texts;
+    const passes = all.filter(({ step: kind }) => kind === 'acid').length;
+    if (step.step === 'base') return charge.baseStep;
+    return passes > 1 ? fill(charge.acidStepPass, { pass: String(step.pass), passes: String(passes) }) : charge.acidStep;
+  }
+
+  protected get hasRetest(): boolean {
     return this.reading('retest.acidContent')?.value !== undefined;
   }
 
@@ -196,20 +203,31 @@ export class EsterwayCharge extends SectionElement {
     </li>`;
   }
 
-  /** The amount that scale or meter can give, and what the rounding changes. */
-  private dispensed({ what }: ChargeLine, step: ChargeStep): unknown {
-    const { charge } = this.texts;
-    const from = step.step === 'base' ? this.looked : `pass${step.pass}`;
+  /** What the keys of a step begin with. */
+  private partOf({ step, pass }: ChargeStep): string {
+    return step === 'base' ? this.looked : `pass${pass}`;
+  }
+
+  /** Key of the amount in whole steps, where the site has named a step. */
+  protected dispensedKey({ what }: ChargeLine, step: ChargeStep): string | undefined {
     const name = { methanol: 'methanolVolume', catalyst: 'catalyst', 'sulfuric-acid': 'sulfuric' }[what as string];
-    const key = `${from}.dispensed.${name}`;
-    if (!name || !this.known(key)) return nothing;
+    const key = `${this.partOf(step)}.dispensed.${name}`;
+    return name && this.known(key) ? key : undefined;
+  }
+
+  /** The amount that scale or meter can give, and what the rounding changes. */
+  protected dispensed({ what }: ChargeLine, step: ChargeStep): unknown {
+    const { charge } = this.texts;
+    const from = this.partOf(step);
+    const key = this.dispensedKey({ what }, step);
+    if (!key) return nothing;
     const sentence = step.step !== 'base' ? charge.dispensed : what === 'methanol' ? charge.dispensedMethanol : charge.dispensedCatalyst;
     const ratio = this.plain(`${from}.dispensed.methanolRatio`);
     return html`<br />${fillWith(sentence, { amount: this.figure(key), ratio, load: this.plain(`${from}.dispensed.baseLoad`) })}`;
   }
 
   /** How well an amount to weigh is known, from the titration and the site's equipment. */
-  private spread(key: string): unknown {
+  protected spread(key: string): unknown {
     const known = this.#spreads[key];
     const unit = this.reading(key)?.unit;
     const expanded = known && new Decimal(known.expanded);
@@ -219,7 +237,7 @@ export class EsterwayCharge extends SectionElement {
     return html` <span class="spread">± ${this.number(amount.text)}\u00a0${amount.unit}</span>`;
   }
 
-  private instruction({ what }: ChargeLine, step?: ChargeStep): string {
+  protected instruction({ what }: ChargeLine, step?: ChargeStep): string {
     const { forRun } = this.texts.charge;
     const key = what === 'oil' && step?.step === 'base' ? 'oil-direct' : what;
     return fill(forRun[key], {
@@ -241,7 +259,7 @@ export class EsterwayCharge extends SectionElement {
   }
 
   /** What an amount is counted on. */
-  private how({ what }: ChargeLine, step: ChargeStep): unknown {
+  protected how({ what }: ChargeLine, step: ChargeStep): unknown {
     const { charge } = this.texts;
     if (what === 'catalyst') return this.catalystParts();
     if (what === 'methanol' && step.step === 'base') {

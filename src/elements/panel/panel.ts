@@ -7,6 +7,9 @@ import { EsterwayOpenEvent, EsterwayUndoEvent } from '../parts/events.js';
 import { faultsBox } from '../parts/faults.js';
 import { groupsFields } from '../parts/focus-order.js';
 import { buttons, boxes, tokens } from '../parts/styles.js';
+import type {} from '../charge/charge-sheet.js';
+import type { EsterwayCharge } from '../charge/charge.js';
+import { loadMore } from '../parts/more.js';
 import type { EsterwayWorking } from '../working/working.js';
 
 /**
@@ -101,6 +104,7 @@ export class EsterwayPanel extends LotElement {
   ];
 
   @query('esterway-working') private readonly working!: EsterwayWorking | null;
+  @query('esterway-charge') private readonly charge!: EsterwayCharge | null;
   /** What was just done, for those who do not see it happen. */
   @state() private said = '';
 
@@ -148,8 +152,18 @@ export class EsterwayPanel extends LotElement {
     void working.updateComplete.then(() => working.showOpened());
   };
 
-  private onPrint(): void {
-    window.print();
+  /** The charge on paper, a page a step; the panel as it stands where there is no charge yet, or its page cannot be had. */
+  private async onPrint(): Promise<void> {
+    const { entry, site, units, languageTag, charge } = this;
+    const route = charge?.looked;
+    if (!route || this.reading(`${route}.catalyst`)?.value === undefined) return window.print();
+    try {
+      await loadMore();
+      const sheet = document.createElement('esterway-charge-sheet');
+      await Object.assign(sheet, { entry, site, units, route }).print(languageTag);
+    } catch {
+      window.print();
+    }
   }
 
   private onNewLot(): void {

@@ -1,16 +1,8 @@
 import { css, html, nothing } from 'lit';
-import type { Reason } from '../../decision/route.js';
-import { Decimal } from '../../formula/decimal.js';
-import { shownText } from '../../formula/digits.js';
 import { fill } from '../../locales/en.js';
-import { sourceName } from '../../locales/quantity-name.js';
+import { ReasonWords } from '../parts/reason-words.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
-
-const LIMITS = ['directLimit', 'pretreatmentLimit', 'pretreatmentTarget', 'waterLimitBase', 'waterLimitAcid'];
-
-/** Shares in a sentence: two decimals, or more where one would look equal to a limit that it misses. */
-const SHARE_DIGITS = [{ bands: [{ below: '10', decimals: 2 }, { decimals: 1 }] }, { decimals: 2 }, { decimals: 3 }, { decimals: 4 }, { decimals: 6 }] as const;
 
 /**
  * The route of a lot: the verdict in one sentence with its reasons, beside it the burette scale with
@@ -91,6 +83,8 @@ export class EsterwayRoute extends SectionElement {
     `,
   ];
 
+  readonly #reasons = new ReasonWords({ texts: () => this.texts, tag: () => this.languageTag, reading: (key) => this.reading(key) });
+
   protected override get heading(): string {
     return this.texts.sections.route;
   }
@@ -112,7 +106,7 @@ export class EsterwayRoute extends SectionElement {
         <div role="status">
           <p class="verdict" part="verdict">${this.verdict}</p>
           ${safe ? html`<p class="why"><b>${this.texts.verdicts[safe]}</b></p>` : nothing}
-          ${route?.reasons.map((reason) => html`<p class="why">${this.reason(reason)}</p>`)}
+          ${route?.reasons.map((reason) => html`<p class="why">${this.#reasons.sentence(reason)}</p>`)}
           ${this.odds()}
           ${route?.verdict === 'not-known' ? html`<p class="why quiet">${this.whyUnknown('freeFattyAcid')}</p>` : nothing}
         </div>
@@ -132,28 +126,7 @@ export class EsterwayRoute extends SectionElement {
     const odds = this.lot?.route.odds;
     if (!odds) return nothing;
     const percent = (part: number): string => this.number(String(Math.min(99, Math.max(1, Math.round(part * 100)))));
-    return html`<p class="why">${fill(this.texts.route.odds, { below: percent(Number(odds.below)), above: percent(1 - Number(odds.below)), limit: this.siteText(odds.limit) ?? this.share(odds.limit, undefined) })}</p>`;
-  }
-
-  private reason({ code, params }: Reason): string {
-    const words = (name: string, value: string): string | undefined => (name === 'passes' || name === 'runs' ? value : name === 'source' ? sourceName(value, this.texts) : undefined);
-    const shown = Object.entries(params).map(([name, value]) => [name, words(name, value) ?? this.siteText(value) ?? this.share(value, params['limit'] ?? params['target'])] as const);
-    const water = this.reading('waterContent')?.shown;
-    return fill(this.texts.reasons[code], { ...(water !== undefined && { water: this.number(water) }), ...Object.fromEntries(shown) });
-  }
-
-  /** A limit as the site wrote it. */
-  private siteText(value: string): string | undefined {
-    const key = LIMITS.find((limit) => this.reading(limit)?.value === value);
-    const shown = key && this.reading(key)?.shown;
-    return shown === undefined ? undefined : this.number(shown);
-  }
-
-  private share(value: string, limit: string | undefined): string {
-    const exact = new Decimal(value);
-    const texts = SHARE_DIGITS.map((digits) => shownText(exact, digits));
-    const apart = texts.find((text) => limit === undefined || !new Decimal(text).eq(limit));
-    return this.number(apart ?? texts[0] ?? value);
+    return html`<p class="why">${fill(this.texts.route.odds, { below: percent(Number(odds.below)), above: percent(1 - Number(odds.below)), limit: this.#reasons.limit(odds.limit) })}</p>`;
   }
 
   private scale(): unknown {
