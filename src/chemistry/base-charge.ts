@@ -89,6 +89,7 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   const waterShare = make('waterShare', 'w_H2O', waterInBatch.per(feedMass).in(percent), { unit: percent });
 
   const soap = make('soap', 'm_soap', acid.times(acidMolarMass.plus(soapGain)).in(kilogram));
+  const soapShare = make('soapShare', 'w_soap', soap.per(feedMass).in(percent), { unit: percent, digits: { significant: 3 } });
   const acidToSoap = make('acidToSoap', 'm_FFA', acid.times(acidMolarMass).in(kilogram));
   const esterEntrained = make('esterEntrained', 'm_ent', entrainedEster.times(soap), { cites: [PRACTICE] });
   const oilLost = make('oilLost', 'm_lost', acidToSoap.plus(esterEntrained), { cites: [PRACTICE, STOICHIOMETRY] });
@@ -101,6 +102,6 @@ export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { conten
   return [
     feedMass, acid, sulfuricAcid, basePure, acidPure, mineralPure, extraPure, baseProduct, extraProduct, mineralProduct, catalystProduct,
     catalystVolume, perLitre, perKilogram, glycerideAmount, methanolNeeded, methanolFromCatalyst, methanol, methanolVolume,
-    batchVolume, inMethanol, catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
+    batchVolume, inMethanol, catalystAmount, waterMade, waterBrought, waterInBatch, waterShare, soap, soapShare, acidToSoap, esterEntrained, oilLost, esterMade, ester, glycerol,
   ];
 }

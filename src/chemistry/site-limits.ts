@@ -21,6 +21,10 @@ export const pretreatmentLimit = share('pretreatmentLimit', 'FFA_max');
 export const pretreatmentTarget = share('pretreatmentTarget', 'FFA_target');
 export const waterLimitBase = share('waterLimitBase', 'w_max,base');
 export const waterLimitAcid = share('waterLimitAcid', 'w_max,acid');
+/** Water in the whole base-step batch, brought and made, as a share of the oil. */
+export const batchWaterLimit = share('batchWaterLimit', 'w_max,batch');
+/** Soap made in the base step, as a share of the oil, that settling and washing still cope with. */
+export const soapLimit = share('soapLimit', 'w_max,soap');
 /** FFA of the clean oil that a site keeps for blending. */
 export const cleanOilFfa = share('cleanOilFfa', 'FFA_clean');
 

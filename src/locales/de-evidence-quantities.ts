@@ -92,4 +92,8 @@ export const deEvidenceQuantities: { readonly [Key in keyof typeof enEvidenceQua
   methanolStep: 'kleinster Schritt für Methanol',
   catalystStep: 'kleinster Schritt für Katalysator',
   sulfuricStep: 'kleinster Schritt für Schwefelsäure',
+
+  batchWaterLimit: 'höchster Wassergehalt des Umesterungsansatzes',
+  soapLimit: 'höchster Seifenanteil der Umesterung',
+  soapShare: 'Seife, als Anteil am Öl',
 };

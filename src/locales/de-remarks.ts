@@ -41,6 +41,8 @@ export const deNotices: Texts['notices'] = {
   'date-in-future': 'Dieser Tag liegt in der Zukunft. Datum prüfen.',
   'temperature-not-corrected': 'Die Maßlösung wich um {gap} °C von der Temperatur der Titerstellung ab, und hier wird nicht korrigiert. Temperieren oder korrigieren.',
   'batch-above-vessel': 'Der Ansatz von {volume} L übersteigt die {working} L, bis zu denen der Behälter gefüllt wird. Partie teilen.',
+  'batch-too-wet': 'Das Wasser im Ansatz macht {water} % des Öls aus, mehr als hier zulässig ({limit} %): weniger Ester, mehr Seife. Öl trocknen oder ein Methylat nehmen.',
+  'soap-above-limit': 'Die Seife macht {soap} % des Öls aus, mehr als hier zulässig ({limit} %): die Schichten trennen sich kaum. Zweistufig arbeiten oder verschneiden.',
   'methanol-little-for-catalyst': '{load} g Katalysator je Liter Methanol liegen nahe oder über den {solubility} g, die sich lösen. Mehr Methanol oder eine Lösung nehmen.',
 };
 

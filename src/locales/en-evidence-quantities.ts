@@ -90,4 +90,8 @@ export const enEvidenceQuantities = {
   methanolStep: 'smallest step of methanol',
   catalystStep: 'smallest step of catalyst',
   sulfuricStep: 'smallest step of sulfuric acid',
+
+  batchWaterLimit: 'most water in the base-step batch',
+  soapLimit: 'most soap in the base step',
+  soapShare: 'soap, as a share of the oil',
 };

@@ -39,6 +39,8 @@ export const enNotices = {
   'date-in-future': 'This day is still to come. Check the date.',
   'temperature-not-corrected': 'The titrant was {gap} °C away from the temperature of its standardisation and this site does not correct for it. Let it come to temperature, or correct.',
   'batch-above-vessel': 'The batch of {volume} L is above the {working} L that the vessel is filled to. Split the lot.',
+  'batch-too-wet': 'Water in the batch comes to {water} % of the oil, above this site’s {limit} %: less ester, more soap. Dry the oil, or take a methoxide.',
+  'soap-above-limit': 'Soap comes to {soap} % of the oil, above this site’s {limit} %: the layers will hardly part. Take the two-step route, or blend.',
   'methanol-little-for-catalyst': '{load} g of catalyst a litre of methanol is near or above the {solubility} g that dissolve. Take more methanol or a solution.',
 };
 

@@ -1,6 +1,8 @@
 import { source } from '../formula/source.js';
 import type { Source } from '../formula/source.js';
-import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, METHANOL_RATIO, METHANOL_SOLUBILITY, NREL_PRETREATMENT, PRACTICE, QUAM, WATER_INHIBITION } from '../chemistry/sources.js';
+import {
+  ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, HEAT_IN_WATER, METHANOL_RATIO, METHANOL_SOLUBILITY, NREL_PRETREATMENT, PRACTICE, PRODUCT_ACID, QUAM, WATER_INHIBITION,
+} from '../chemistry/sources.js';
 import type { Figure } from './figure.js';
 
 /** A figure that stands where neither the lot nor the site has one, with where it comes from. */
@@ -16,6 +18,12 @@ const ASSAYS = source('Commercial grades: KOH 85–90 %, NaOH 97–99 %, methoxi
 const SOLUTIONS = source('Commercial methoxide solutions: NaOCH3 30 %, 0.97 g/mL; KOCH3 32 %, about 0.99 g/mL', 'memory');
 const SULFURIC = source('Sulfuric acid 96 %, 1.8355 g/mL at 20 °C', 'memory');
 const QUAM_BALANCE = source('QUAM, example A2: ±0.15 mg for a balance that reads 0.1 mg, taken a little wider', 'derived');
+const ACIDS = source('Handbook densities at 20 °C: acetic acid 1.049, of 80 % 1.070; phosphoric acid 85 % 1.685; hydrochloric acid 37 % 1.184 g/mL; usual grades', 'memory');
+const ESTER_DENSITY = source('EN 14214: 0.860–0.900 g/mL at 15 °C; typical 0.88', 'found');
+const GLYCEROL_DENSITY = source('Density of glycerol, 1.2613 g/mL at 20 °C', 'memory');
+const DENSITY_OF_WATER = source('Density of water, 0.998 g/mL at 20 °C', 'memory');
+const METHANOL_HEAT_CAPACITY = source('Heat capacity of methanol, 2.53 kJ/(kg·K) at 25 °C', 'memory');
+const OIL_HEAT_CAPACITY = source('Heat capacity of vegetable oils, about 2.0 kJ/(kg·K)', 'memory');
 const BAND = source('Ends of a band that holds the published points that carry enough conditions', 'derived');
 
 /** Every default figure of a site; each can be set in the site profile, and most in a lot. */
@@ -57,6 +65,8 @@ export const DEFAULT_FIGURES: Readonly<Record<string, DefaultFigure>> = {
   pretreatmentTarget: given('1.0', '%', TARGET),
   waterLimitBase: given('0.10', '%'),
   waterLimitAcid: given('0.50', '%'),
+  batchWaterLimit: given('1.0', '%'),
+  soapLimit: given('4.0', '%'),
   cleanOilFfa: given('0.5', '%'),
 
   'KOH.assay': given('90', '%', ASSAYS),
@@ -98,6 +108,36 @@ export const DEFAULT_FIGURES: Readonly<Record<string, DefaultFigure>> = {
   sulfuricDensity: given('1.8355', 'g/mL', SULFURIC),
   carryOver: given('10', '%'),
 
+  reactionTemperature: given('60', '°C'),
+  reactionTime: given('60', 'min'),
+  settlingTime: given('24', 'h'),
+  'acetic.assay': given('99.8', '%', ACIDS),
+  'acetic-80.assay': given('80', '%', ACIDS),
+  'phosphoric.assay': given('85', '%', ACIDS),
+  'citric.assay': given('99.5', '%', ACIDS),
+  'hydrochloric.assay': given('37', '%', ACIDS),
+  'vinegar.strength': given('50', 'g/L'),
+  'acetic.density': given('1.049', 'g/mL', ACIDS),
+  'acetic-80.density': given('1.070', 'g/mL', ACIDS),
+  'vinegar.density': given('1.01', 'g/mL'),
+  'phosphoric.density': given('1.685', 'g/mL', ACIDS),
+  'hydrochloric.density': given('1.184', 'g/mL', ACIDS),
+  methanolInLower: given('60', '%'),
+  esterDensity: given('0.88', 'g/mL', ESTER_DENSITY),
+  glycerolDensity: given('1.2613', 'g/mL', GLYCEROL_DENSITY),
+  waterDensity: given('0.998', 'g/mL', DENSITY_OF_WATER),
+  saltDensity: given('2.0', 'g/mL'),
+  productAcidLimit: given('0.50', 'mg/g', PRODUCT_ACID),
+  productBlank: given('0', 'mL'),
+  phenolphthaleinBlank: given('0', 'mL'),
+  bromophenolBlank: given('0', 'mL'),
+
+  'KOH.heatOfSolution': given('57.6', 'kJ/mol', HEAT_IN_WATER),
+  'NaOH.heatOfSolution': given('44.5', 'kJ/mol', HEAT_IN_WATER),
+  sulfuricHeat: given('95', 'kJ/mol', HEAT_IN_WATER),
+  methanolHeatCapacity: given('2.53', 'kJ/(kg·K)', METHANOL_HEAT_CAPACITY),
+  oilHeatCapacity: given('2.0', 'kJ/(kg·K)', OIL_HEAT_CAPACITY),
+
   'esterification.equilibriumSlow': given('2', '', ESTERIFICATION_EQUILIBRIUM),
   'esterification.equilibriumFast': given('8', '', BAND),
   'esterification.rateSlow': given('0.032', '/min', ESTERIFICATION_RATE),
@@ -129,4 +169,6 @@ export const DEFAULT_OPTIONS: Readonly<Record<string, string>> = {
   pretreatmentMethanolBasis: 'by-acidity',
   pretreatmentAcidBasis: 'by-acidity',
   acidProofEquipment: 'yes',
+  neutralisingAcid: 'phosphoric-dihydrogen',
+  productAcidFrom: 'titration',
 };

@@ -120,6 +120,12 @@ function batch(find: Find, say: Say): void {
     const volume = find(`${step}.batchVolume`);
     if (working && volume?.gt(working)) say('batch-above-vessel', `${step}.batchVolume`, { volume, working });
   }
+  for (const route of ['direct', 'twoStep']) {
+    const [water, most] = [find(`${route}.waterShare`), find('batchWaterLimit')];
+    if (water && most && water.gt(most)) say('batch-too-wet', `${route}.waterShare`, { water, limit: most });
+    const [soap, bearable] = [find(`${route}.soapShare`), find('soapLimit')];
+    if (soap && bearable && soap.gt(bearable)) say('soap-above-limit', `${route}.soapShare`, { soap, limit: bearable });
+  }
   const solubility = find('catalystSolubility');
   for (const route of ['direct', 'twoStep']) {
     const load = find(`${route}.catalystInMethanol`);

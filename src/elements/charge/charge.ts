@@ -113,7 +113,7 @@ export class EsterwayCharge extends SectionElement {
       </div>
       ${this.gate(lot.route.verdict)} ${this.reagents()}
       ${this.known(`${this.looked}.catalyst`) ? nothing : html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>`}
-      ${this.noticesAt((field) => field === `${this.looked === 'direct' ? 'direct' : 'pass1'}.batchVolume` || field === `${this.looked}.catalyst`)}
+      ${this.noticesAt((field) => (this.looked === 'twoStep' && field === 'pass1.batchVolume') || field.startsWith(`${this.looked}.`))}
       ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
     `;
   }
@@ -332,7 +332,7 @@ export class EsterwayCharge extends SectionElement {
         <dt>${charge.waterOf}</dt>
         <dd>${this.figure(`${looked}.waterShare`)}</dd>
         <dt>${charge.soapOf}</dt>
-        <dd>${this.figure(`${looked}.soap`)}</dd>
+        <dd>${this.figure(`${looked}.soap`)} <span class="quiet">${this.figure(`${looked}.soapShare`)}</span></dd>
         <dt>${charge.lostOf}</dt>
         <dd>${this.figure(`${looked}.oilLost`)}</dd>
         <dt>${fill(charge.esterOf, { conversion: this.plain('conversion') })}</dt>

@@ -6,7 +6,7 @@ type Group = 'limits' | 'catalyst' | 'methanol' | 'acidStep' | 'prediction' | 'o
 
 /** Keys of a group, choices first, in the order a site would set them. */
 const GROUPS: Readonly<Record<Group, readonly string[]>> = {
-  limits: ['acidProofEquipment', 'directLimit', 'pretreatmentLimit', 'pretreatmentTarget', 'waterLimitBase', 'waterLimitAcid', 'cleanOilFfa'],
+  limits: ['acidProofEquipment', 'directLimit', 'pretreatmentLimit', 'pretreatmentTarget', 'waterLimitBase', 'waterLimitAcid', 'batchWaterLimit', 'soapLimit', 'cleanOilFfa'],
   catalyst: ['catalyst'],
   methanol: ['methanolRatio', 'methanolAssay', 'methanolTemperature', 'conversion', 'entrainedEster'],
   acidStep: [
