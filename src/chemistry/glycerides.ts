@@ -43,7 +43,7 @@ export function glycerides(acidContent: Quantity): Glycerides {
   });
   const molarMassByProfile = constant('3').times(profileMolarMass).plus(M_GLYCERYL);
   const content = quantity({
-    key: 'glycerideContent', symbol: 'n_TG', unit: molePerKilogram, cites: [SAPONIFICATION, GLYCERIDE_MASS],
+    key: 'glycerideContent', symbol: 'b_TG', unit: molePerKilogram, cites: [SAPONIFICATION, GLYCERIDE_MASS],
     is: glyceridesBy.of({
       // the saponification value spends one KOH a free acid, and three a triglyceride
       'saponification-value': saponificationValue.minus(M_KOH.times(acidContent)).per(constant('3').times(M_KOH)),

@@ -21,7 +21,10 @@ export async function printAlone(element: HTMLElement, { title, lang }: Paper): 
   for (const [name, value] of [['position', 'fixed'], ['inset', '0 auto auto -1px'], ['width', '1px'], ['height', '1px'], ['border', '0'], ['opacity', '0']] as const) {
     frame.style.setProperty(name, value);
   }
+  // some browsers put a new empty page in the frame after a while: what was written before would be lost
+  const loaded = new Promise((done) => frame.addEventListener('load', done, { once: true }));
   document.body.append(frame);
+  await loaded;
   const view = frame.contentWindow as (Window & typeof globalThis) | null;
   if (!view) throw new Error('this page allows no frame to print from');
   const paper = view.document;

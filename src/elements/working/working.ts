@@ -11,6 +11,7 @@ import type { Working } from '../../lot/working.js';
 import { SectionElement } from '../parts/section.js';
 import { budgetStyles, budgetView } from './budget.js';
 import { mathElement } from './math.js';
+import type { SecondCheckElement } from './second-check.js';
 
 /**
  * The working of one figure: its formula, the figures in it, the result, the source, and what it
@@ -92,6 +93,8 @@ export class EsterwayWorking extends SectionElement {
 
   /** The figures opened one after the other, to step back through. */
   #trail: string[] = [];
+  /** Kept, so that what was typed in it stays while it is folded. */
+  #secondCheck: SecondCheckElement | undefined;
 
   protected override get heading(): string {
     return this.texts.sections.working;
@@ -115,7 +118,14 @@ export class EsterwayWorking extends SectionElement {
         ${guard([lot, this.of, texts], () => this.groups())}
       </select>
       ${Object.hasOwn(lot.readings, this.of) ? this.opened() : html`<p class="small quiet">${texts.working.none}</p>`}
+      <esterway-later .label=${texts.working.secondCheck} .content=${() => this.secondCheck()}></esterway-later>
     `;
+  }
+
+  private secondCheck(): SecondCheckElement {
+    const check = (this.#secondCheck ??= document.createElement('esterway-second-check'));
+    check.of = this.of;
+    return check;
   }
 
   /** Every reading, grouped as it is named: `run 1: titre`. */
