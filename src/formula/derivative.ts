@@ -30,20 +30,40 @@ export function sensitivities(plan: Plan, findings: Findings, key: string): Read
 export function slopes(plan: Plan, findings: Findings, key: string): ReadonlyMap<string, Decimal> | Unknown {
   const value = findings.outcome(key);
   if (!isKnown(value)) return value;
-  const walker = new Adjoints(plan.sheet, findings);
-  walker.add(key, ONE);
-  const found = new Map<string, Decimal>();
+  const gradients = gradientsOf(plan, findings);
+  const found = new Map<string, Decimal>([[key, ONE]]);
   for (let i = plan.order.length - 1; i >= 0; i--) {
     const at = plan.order[i]!;
-    const adjoint = walker.of(at);
+    const adjoint = found.get(at);
     if (!adjoint) continue;
-    found.set(at, adjoint);
-    const { is } = plan.sheet.quantity(at);
-    if (is) walker.spread(is, adjoint);
+    for (const [named, slope] of gradients(at)) {
+      const part = adjoint.times(slope);
+      const sum = found.get(named);
+      found.set(named, sum ? sum.plus(part) : part);
+    }
   }
   const finite = [...found.values()].every((slope) => slope.isFinite());
   return finite ? found : new Refused({ code: 'no-slope', quantity: key });
 }
+
+/** How a quantity moves with those that its formula names. Worked out once for an evaluation, however many quantities are asked about. */
+function gradientsOf({ sheet }: Plan, findings: Findings): (key: string) => ReadonlyMap<string, Decimal> {
+  let known = GRADIENTS.get(findings);
+  if (!known) GRADIENTS.set(findings, (known = new Map()));
+  const gradients = known;
+  return (key) => {
+    let gradient = gradients.get(key);
+    if (!gradient) {
+      const { is } = sheet.quantity(key);
+      const walker = new Adjoints(sheet, findings);
+      if (is) walker.spread(is, ONE);
+      gradients.set(key, (gradient = walker.sums));
+    }
+    return gradient;
+  };
+}
+
+const GRADIENTS = new WeakMap<Findings, Map<string, ReadonlyMap<string, Decimal>>>();
 
 /** Derivative of one quantity with respect to one input; zero when it does not rest on it. */
 export function derivative(plan: Plan, findings: Findings, key: string, input: string): Decimal | Unknown {
@@ -57,20 +77,16 @@ const ONE = new Decimal(1);
 type BinaryNode = NodeOf<BinaryOp>;
 
 class Adjoints {
-  readonly #sums = new Map<string, Decimal>();
+  readonly sums = new Map<string, Decimal>();
 
   constructor(
     private readonly sheet: Sheet,
     private readonly findings: Findings,
   ) {}
 
-  of(key: string): Decimal | undefined {
-    return this.#sums.get(key);
-  }
-
   add(key: string, adjoint: Decimal): void {
-    const sum = this.#sums.get(key);
-    this.#sums.set(key, sum ? sum.plus(adjoint) : adjoint);
+    const sum = this.sums.get(key);
+    this.sums.set(key, sum ? sum.plus(adjoint) : adjoint);
   }
 
   /** Hands the adjoint of an expression on to the quantities it names. */

@@ -37,7 +37,9 @@ const SITE = {
   methanolTemperature: F('20'), methanolRatio: F('6'), conversion: F('98'), entrainedEster: F('1.0'), pretreatmentTemperature: F('60'),
   pretreatmentTime: F('60'), sulfuricAssay: F('96'), sulfuricDensity: F('1.8355'), carryOver: F('10'), loadExponent: F('0.35'),
   waterExponent: F('0.83'), activationEnergy: F('48000'), equilibriumSlow: F('2'), equilibriumFast: F('8'), rateSlow: F('0.032'), rateFast: F('0.25'),
+  balanceLinearity: F('0.002'), dropVolume: F('0.05'), thermometerTolerance: F('0.5'), titrantLabelTolerance: F('0.5'),
 };
+const [ROOT_2, ROOT_3, ROOT_6, OF_95, OF_TWO, REPEATABILITY, MEAN_RANGE, BURETTE] = [TWO.sqrt(), THREE.sqrt(), D('6').sqrt(), D('1.96'), D('2.8'), D('0.117'), D('1.128'), D('0.1')];
 
 /** @throws where the lot is not the case that this is written for. */
 export function straightLine({ figures: typed, runs }: LotEntry): Figures {
@@ -74,6 +76,8 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   const reference = sig('referenceAcidMolarMass', OLEIC_BY_METHOD);
   const acidMolarMass = sig('acidMolarMass', M_OLEIC);
   const greatest = sig('greatestAcidContent', HUNDRED.div(reference).times(TEN));
+  const masses: Decimal[] = [];
+  const titres: Decimal[] = [];
   const run = (number: 1 | 2): Decimal => {
     const { sample, start, end } = runs[number - 1]!;
     const key = `run${number}.`;
@@ -82,14 +86,47 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
     const titre = fix(`${key}titre`, 2, given(`${key}buretteEnd`, F(text(end))).minus(from));
     const net = fix(`${key}netTitre`, 3, fix(`${key}correctedTitre`, 3, titre.times(volumeFactor)).minus(blank));
     const content = sig(`${key}acidContent`, c.times(net).div(mass));
+    masses.push(mass);
+    titres.push(titre);
     if (net.lte(ZERO) || content.gt(greatest)) throw new RangeError('a run that is refused');
     av(`${key}acidValue`, KOH_BY_METHOD.times(content));
     ffa(`${key}freeFattyAcid`, reference.times(content).div(TEN));
     return content;
   };
-  const b = sig('acidContent', run(1).plus(run(2)).div(TWO));
+  const contents = [run(1), run(2)] as const;
+  const b = sig('acidContent', sig('titratedAcidContent', contents[0].plus(contents[1]).div(TWO)));
   av('acidValue', KOH_BY_METHOD.times(b));
   const freeFattyAcid = ffa('freeFattyAcid', reference.times(b).div(TEN));
+  // how well it is known
+  const meanValue = fix('meanAcidValue', 2, KOH_BY_METHOD.times(b));
+  const repeatability = fix('repeatabilityLimit', 2, REPEATABILITY.times(meanValue));
+  const range = fix('runRange', 2, KOH_BY_METHOD.times(Decimal.max(...contents).minus(Decimal.min(...contents))));
+  const critical = fix('criticalRange', 2, OF_TWO.times(repeatability.div(OF_TWO)));
+  const single = repeatability.div(OF_TWO);
+  const deviation = fix('runDeviation', 2, range.lte(critical) ? single : Decimal.max(single, range.div(MEAN_RANGE)));
+  const doubts = {
+    scatter: sig('u.repeatability', deviation.div(KOH_BY_METHOD).times(ONE.div(ROOT_2)), 2),
+    endPoint: sig('u.endPoint', given('dropVolume', SITE.dropVolume).div(TWO).div(ROOT_3), 2),
+    burette: sig('u.burette', sig('buretteTolerance', BURETTE, 2).div(ROOT_6), 2),
+    balance: sig('u.balance', ROOT_2.times(given('balanceLinearity', SITE.balanceLinearity).div(ROOT_3)), 2),
+    temperature: sig('u.temperature', expansion.times(given('thermometerTolerance', SITE.thermometerTolerance).div(OF_95)), 2),
+    titrant: sig('u.titrant', c.times(given('titrantLabelTolerance', SITE.titrantLabelTolerance)).div(HUNDRED).div(ROOT_3), 2),
+  };
+  sig('u.certificate', ZERO, 2);
+  const perMillilitre = masses.map((mass) => c.times(volumeFactor).div(mass).div(TWO));
+  const parts = [
+    doubts.scatter,
+    ...perMillilitre.map((slope) => slope.times(doubts.endPoint)),
+    perMillilitre[0]!.plus(perMillilitre[1]!).times(doubts.burette),
+    contents[0].div(masses[0]!).plus(contents[1].div(masses[1]!)).div(TWO).times(doubts.balance),
+    c.times(titres[0]!.div(masses[0]!).plus(titres[1]!.div(masses[1]!))).div(TWO).times(doubts.temperature),
+    b.div(c).times(doubts.titrant),
+  ];
+  const whole = (slope: Decimal): Decimal => TWO.times(parts.reduce((sum, part) => sum.plus(part.times(slope).pow(2)), ZERO).sqrt());
+  out['± acidValue'] = { value: whole(KOH_BY_METHOD).toString(), shown: '' };
+  out['± freeFattyAcid'] = { value: whole(reference.div(TEN)).toString(), shown: '' };
+  out['± titrantConcentration'] = { value: TWO.times(doubts.titrant).toString(), shown: '' };
+
   sig('alkaliPerLitreOfOil', b.times(sampleDensity).times(titrantMolarMass), 3);
 
   // oil
@@ -148,9 +185,10 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
     const amount = put('glycerideAmount', glycerideAmount);
     const needed = put('methanolNeeded', ratio.times(amount).times(M_METHANOL).div(THOUSAND));
     const rest = product.times(HUNDRED.minus(assay));
+    put('catalystInMethanol', basePure.plus(extraPure).div(needed.div(methanolDensity)).times(THOUSAND));
     const brought = put('methanolFromCatalyst', rest.times(methanolInRest).div(TEN_THOUSAND));
     const methanol = put('methanol', Decimal.max(ZERO, needed.minus(brought).div(methanolAssay).times(HUNDRED)));
-    put('methanolVolume', methanol.div(methanolDensity));
+    put('batchVolume', mass.div(density).times(THOUSAND).plus(put('methanolVolume', methanol.div(methanolDensity))));
     const catalystAmount = put('catalystAmount', basePure.plus(extraPure).div(catalystMass).times(THOUSAND));
     const made = put('waterMade', catalystAmount.times(waterPerCatalyst).times(M_WATER).div(THOUSAND));
     const waterBrought = put('waterBrought', feed.water
@@ -158,6 +196,7 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
       .plus(methanol.times(HUNDRED.minus(methanolAssay)).div(HUNDRED)));
     put('waterShare', put('waterInBatch', made.plus(waterBrought)).div(mass).times(HUNDRED));
     const soap = put('soap', acid.times(acidMolarMass.plus(soapGain)).div(THOUSAND));
+    sig(`${route}.soapShare`, soap.div(mass).times(HUNDRED), 3);
     const acidToSoap = put('acidToSoap', acid.times(acidMolarMass).div(THOUSAND));
     put('oilLost', acidToSoap.plus(put('esterEntrained', entrainment.times(soap))));
     const esterMade = put('esterMade', THREE.times(amount).times(conversion).times(meanAcid.plus(M_METHYLENE)).div(HUNDRED_THOUSAND));
@@ -181,10 +220,10 @@ export function straightLine({ figures: typed, runs }: LotEntry): Figures {
   if (!ffa('pass1.ffaAtStart', acidMass.div(oil).times(HUNDRED)).lt(FIFTEEN)) throw new RangeError('more acid than this is written for');
   const methanolPure = sig('pass1.methanolPure', fix('pass1.methanolRule', 0, FORTY).times(acidAmount).times(M_METHANOL).div(THOUSAND));
   const methanol = sig('pass1.methanol', methanolPure.div(methanolAssay).times(HUNDRED));
-  sig('pass1.methanolVolume', methanol.div(methanolDensity));
+  const methanolVolume = sig('pass1.methanolVolume', methanol.div(methanolDensity));
   const sulfuricPure = sig('pass1.sulfuricPure', fix('pass1.acidRule', 0, TEN).times(acidMass).div(HUNDRED));
   const sulfuric = sig('pass1.sulfuric', sulfuricPure.div(sulfuricAssay).times(HUNDRED));
-  sig('pass1.sulfuricVolume', sulfuric.div(sulfuricDensity));
+  sig('pass1.batchVolume', oilVolume.plus(methanolVolume).plus(sig('pass1.sulfuricVolume', sulfuric.div(sulfuricDensity))));
   const sulfuricPresent = sig('pass1.sulfuricPresent', sulfuricPure);
   const sulfuricCarried = sig('pass1.sulfuricCarried', carryOver.times(sulfuricPresent).div(HUNDRED));
   const freshWater = methanol.times(HUNDRED.minus(methanolAssay)).div(HUNDRED)
