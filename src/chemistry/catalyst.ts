@@ -16,7 +16,7 @@ export const CATALYST_PRODUCTS: readonly CatalystProduct[] = PRODUCTS;
 export const catalyst = choice('catalyst', PRODUCTS);
 
 /** A site value that each product has for itself, e.g. `KOH.assay`. */
-const perProduct = <Product extends CatalystProduct>(products: readonly Product[], make: (product: Product) => Quantity): Readonly<Record<Product, Quantity>> =>
+export const perProduct = <Product extends CatalystProduct>(products: readonly Product[], make: (product: Product) => Quantity): Readonly<Record<Product, Quantity>> =>
   Object.fromEntries(products.map((product) => [product, make(product)])) as Record<Product, Quantity>;
 
 const percentLimits = [limit('above', '0', 'not-above-zero'), limit('atMost', '100', 'above-100-percent')];

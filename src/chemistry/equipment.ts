@@ -52,7 +52,10 @@ export const khpBuretteDoubt = doubt('khpBurette', 'bur,KHP', millilitre, triang
 
 /** The end point is passed by anything up to one drop. */
 export const dropVolume = tolerance('dropVolume', 'V_drop', millilitre, '1');
-export const endPointDoubt = doubt('endPoint', 'end', millilitre, rectangular(dropVolume.per('2')), [GUM_SHAPES, PRACTICE]);
+const endPointOf = (key: string, mark: string): Quantity => doubt(key, `end${mark}`, millilitre, rectangular(dropVolume.per('2')), [GUM_SHAPES, PRACTICE]);
+export const endPointDoubt = endPointOf('endPoint', '');
+/** Of the blank: titrated once, it errs alike in every run, and further runs take nothing from it. */
+export const blankEndPointDoubt = endPointOf('blankEndPoint', ',0');
 
 // -- the portion ------------------------------------------------------------
 
@@ -84,7 +87,7 @@ export const titrantDoubt = doubt('titrant', 'c', molePerLitre, rectangular(titr
   standardised: constant('0', molePerLitre),
 })), [GUM_SHAPES, PRACTICE]);
 
-export const khpEndPointDoubt = doubt('khpEndPoint', 'end,KHP', millilitre, rectangular(dropVolume.per('2')), [GUM_SHAPES, PRACTICE]);
+export const khpEndPointDoubt = endPointOf('khpEndPoint', ',KHP');
 
 /** Linearity of the balance that weighs the standard. */
 export const standardBalanceLinearity = tolerance('standardBalanceLinearity', 'a_KHP', gram, '1');

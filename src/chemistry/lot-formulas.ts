@@ -1,17 +1,23 @@
-import { constant } from '../formula/expression.js';
+import { constant, named } from '../formula/expression.js';
 import { Choice, Quantity, quantity } from '../formula/quantity.js';
 import { Sheet } from '../formula/sheet.js';
 import { kilogram, mole } from '../formula/units.js';
 import * as acid from './acidity.js';
 import { afterPretreatment } from './after-pretreatment.js';
+import * as after from './after-reaction.js';
 import { baseCharge, conversion, entrainedEster } from './base-charge.js';
 import * as catalystProduct from './catalyst.js';
+import * as cost from './cost.js';
 import * as esterification from './esterification.js';
 import { fat, glycerides, glyceridesBy } from './glycerides.js';
+import * as heat from './heat.js';
 import { acidity, alkaliPerLitreOfOil } from './lot-acidity.js';
 import * as methanol from './methanol.js';
+import * as neutralising from './neutralising.js';
 import * as oil from './oil.js';
 import * as pretreatment from './pretreatment.js';
+import * as prices from './prices.js';
+import * as productCheck from './product-check.js';
 import * as dispensing from './dispensing.js';
 import * as equipment from './equipment.js';
 import * as replicate from './replicates.js';
@@ -83,6 +89,9 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
     ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan), ...members(dispensing),
+    ...members(neutralising), ...members(after), ...members(productCheck), ...members(heat), ...members(prices), ...members(cost),
+    ...after.afterReaction('direct', constant('0', mole)), ...after.afterReaction('twoStep', named('pretreated.methanolLeft')),
+    ...(['direct', 'twoStep'] as const).flatMap(heat.methoxideHeat), ...([1, 2, 3] as const).flatMap(heat.sulfuricAcidHeat), ...(['direct', 'twoStep'] as const).flatMap(cost.routeCost),
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
     ...direct, ...([1, 2, 3] as const).flatMap(dispensing.dispensedPass), ...(['direct', 'twoStep'] as const).flatMap(dispensing.dispensedBase), ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),

@@ -6,7 +6,7 @@ import { ATOMIC_WEIGHTS } from './sources.js';
 
 /** IUPAC conventional atomic weights, g/mol. */
 const ATOMIC_WEIGHT = {
-  C: '12.011', H: '1.008', O: '15.999', K: '39.0983', Na: '22.98977', S: '32.06',
+  C: '12.011', H: '1.008', O: '15.999', K: '39.0983', Na: '22.98977', S: '32.06', P: '30.973762', Cl: '35.45',
 } as const;
 
 /** How many atoms of each element make one formula unit. */

@@ -37,4 +37,12 @@ export const METHANOL_SOLUBILITY = source('Handbook solubilities in methanol nea
 export const CD_3D_PORTIONS = source('AOCS Cd 3d-63, table of portions, as in ISO 660, table 1', 'found');
 export const D664_PORTIONS = source('ASTM D664, method A, table of portions', 'memory');
 export const D974_PORTIONS = source('ASTM D974, table of portions', 'memory');
+export const DISSOCIATION = source('Handbook pKa at 25 °C: acetic 4.76; phosphoric 2.15, 7.20; citric 3.13, 4.76, 6.40; soap is split below pH 4', 'memory');
+export const PRODUCT_ACID = source('EN 14214:2012+A1:2014 and ASTM D6751: acid value at most 0.50 mg/g', 'found');
+export const TWO_INDICATORS = source('Van Gerpen et al. 2004, NREL/SR-510-36240, soap and catalyst by two indicators', 'memory');
+export const AOCS_CC_17 = source('AOCS Cc 17-95, Soap in oil: as sodium oleate, 304.4 g/mol', 'memory');
+export const HEAT_IN_WATER = source('Heat of solution in water at infinite dilution, a marker for methanol: NaOH 44.5, KOH 57.6, H2SO4 95 kJ/mol', 'memory');
+export const METHANOL_BOILING = source('Methanol boils at 64.7 °C at 1 atm', 'memory');
+export const ENERGY_BALANCE = source('Energy balance without loss to the surroundings: Q = m · c_p · ΔT', 'derived');
+export const COSTING = source('Amounts of the batch, each at the site’s own price', 'definition');
 export const PRACTICE = source('Common practice, no source', 'practice');

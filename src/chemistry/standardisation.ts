@@ -1,12 +1,12 @@
-import { constant } from '../formula/expression.js';
+import { constant, whereBelow } from '../formula/expression.js';
 import type { Expression } from '../formula/expression.js';
 import { limit, quantity } from '../formula/quantity.js';
 import type { Quantity } from '../formula/quantity.js';
 import { gram, gramPerMole, millilitre, molePerLitre, percent } from '../formula/units.js';
-import { ofNearlyAll, standardisationRepeatability, temperatureSpread } from './equipment.js';
+import { dropVolume, ofNearlyAll, rectangular, standardisationRepeatability, temperatureSpread } from './equipment.js';
 import { RANGE_FACTORS, factorOf, meanOf, rangeOfRuns } from './replicates.js';
 import { buretteReadings } from './run.js';
-import { ATOMIC_WEIGHTS, ISO_5725_6, QUAM } from './sources.js';
+import { ATOMIC_WEIGHTS, GUM_SHAPES, ISO_5725_6, PRACTICE, QUAM } from './sources.js';
 import { M_KHP } from './substances.js';
 import { titrantExpansion } from './titration.js';
 
@@ -23,6 +23,11 @@ export const khpMolarMass = quantity({
 export const khpBlank = quantity({
   key: 'khpBlank', symbol: 'V_0,KHP', unit: millilitre, digits: { decimals: 2 },
   limits: [limit('atLeast', '0', 'negative'), limit('atMost', '1000', 'out-of-range')],
+});
+/** A blank of nothing was not titrated, and has no end point to overshoot. */
+export const khpBlankEndPointDoubt = quantity({
+  key: 'u.khpBlankEndPoint', symbol: 'u_end,0,KHP', unit: millilitre, cites: [GUM_SHAPES, PRACTICE], digits: { significant: 2 },
+  is: whereBelow(constant('0', millilitre), khpBlank, rectangular(dropVolume.per('2')), constant('0', millilitre)),
 });
 
 /** One weighed portion of KHP and the titrant it took. */

@@ -12,6 +12,10 @@ export const COMPOSITION = {
   KOCH3: { K: 1, O: 1, C: 1, H: 3 },
   sulfuricAcid: { H: 2, S: 1, O: 4 },
   potassiumHydrogenPhthalate: { K: 1, H: 5, C: 8, O: 4 },
+  aceticAcid: { C: 2, H: 4, O: 2 },
+  phosphoricAcid: { H: 3, P: 1, O: 4 },
+  citricAcid: { C: 6, H: 8, O: 7 },
+  hydrochloricAcid: { H: 1, Cl: 1 },
 } as const satisfies Record<string, Composition>;
 
 export const M_METHANOL = molarMassOf(COMPOSITION.methanol, 'MeOH');
@@ -23,6 +27,10 @@ export const M_NAOCH3 = molarMassOf(COMPOSITION.NaOCH3, 'NaOCH3');
 export const M_KOCH3 = molarMassOf(COMPOSITION.KOCH3, 'KOCH3');
 export const M_KHP = molarMassOf(COMPOSITION.potassiumHydrogenPhthalate, 'KHP');
 export const M_SULFURIC = molarMassOf(COMPOSITION.sulfuricAcid, 'H2SO4');
+export const M_ACETIC = molarMassOf(COMPOSITION.aceticAcid, 'HAc');
+export const M_PHOSPHORIC = molarMassOf(COMPOSITION.phosphoricAcid, 'H3PO4');
+export const M_CITRIC = molarMassOf(COMPOSITION.citricAcid, 'cit');
+export const M_HYDROCHLORIC = molarMassOf(COMPOSITION.hydrochloricAcid, 'HCl');
 
 /** What an acid gains when it becomes its methyl ester: CH3 for H. */
 export const M_METHYLENE = molarMassOf({ C: 1, H: 2 }, 'CH2');

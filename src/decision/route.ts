@@ -21,7 +21,7 @@ export interface Reason {
 export const REASON_CODES = [
   'at-or-below-direct-limit', 'above-direct-limit', 'above-pretreatment-limit', 'within-guard-band', 'extra-negligible',
   'no-acid-proof-equipment', 'dry-before-base-step', 'dry-before-acid-step', 'water-not-measured',
-  'pretreatment-misses-target', 'ffa-not-known', 'runs-differ', 'more-runs-settle', 'many-runs-settle', 'no-runs-settle',
+  'pretreatment-misses-target', 'ffa-not-known', 'no-guard-band', 'runs-differ', 'more-runs-settle', 'many-runs-settle', 'no-runs-settle',
 ] as const;
 export type ReasonCode = (typeof REASON_CODES)[number];
 

@@ -41,6 +41,19 @@ export const perDegree = one.per(kelvin, '/°C');
 const joule = kilogram.times(metre.power(2)).per(second.power(2), 'J');
 export const joulePerMole = joule.per(mole);
 export const joulePerMoleKelvin = joule.per(mole.times(kelvin), 'J/(mol·K)');
+export const kilojoule = joule.scaled('1000', 'kJ');
+export const kilojoulePerMole = kilojoule.per(mole);
+export const kilojoulePerKilogramKelvin = kilojoule.per(kilogram.times(kelvin), 'kJ/(kg·K)');
+export const kilowattHour = joule.scaled('3600000', 'kWh');
+export const kilowattHourPerTonne = kilowattHour.per(tonne);
+
+/** The money of the site, whatever it is: the page shows the site's own word for it. */
+export const currency = base('money', '¤');
+export const currencyPerKilogram = currency.per(kilogram);
+export const currencyPerTonne = currency.per(tonne);
+export const currencyPerLitre = currency.per(litre);
+export const currencyPerHour = currency.per(hour);
+export const currencyPerKilowattHour = currency.per(kilowattHour);
 
 export const molePerLitre = mole.per(litre);
 export const gramPerLitre = gram.per(litre);
@@ -56,6 +69,7 @@ export const gramPerKilogram = gram.per(kilogram);
 export const gramPerHundredGram = gram.per(gram.scaled('100', '100 g'));
 export const molePerMole = mole.per(mole);
 export const kilogramPerKilogram = kilogram.per(kilogram);
+export const kilogramPerTonne = kilogram.per(tonne);
 
 /** Every unit in which a figure may be typed, by its symbol as it stands in a lot entry. */
 export const TYPED_UNITS: ReadonlyMap<string, Unit> = new Map(
@@ -64,5 +78,7 @@ export const TYPED_UNITS: ReadonlyMap<string, Unit> = new Map(
     cubicMetre, minute, hour, day, kelvin, degreeCelsius, degreeFahrenheit, molePerLitre, gramPerLitre, gramPerMole,
     gramPerMillilitre, kilogramPerCubicMetre, milligramPerGram, gramPerHundredGram, molePerMole,
     kilogramPerKilogram, perDegree, perMinute, joulePerMole, kilogramPerCubicMetreDegree, gramPerMillilitreDegree,
+    kilojoulePerMole, kilojoulePerKilogramKelvin, kilowattHourPerTonne, currency, currencyPerKilogram, currencyPerTonne, currency.per(pound),
+    currencyPerLitre, currency.per(gallonUS), currencyPerHour, currencyPerKilowattHour,
   ].map((unit) => [unit.symbol, unit]),
 );

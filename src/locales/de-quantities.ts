@@ -1,3 +1,4 @@
+import { deBatchQuantities } from './de-batch-quantities.js';
 import { deEvidenceQuantities } from './de-evidence-quantities.js';
 import type { QuantityTexts } from './en-quantities.js';
 
@@ -158,4 +159,5 @@ export const deQuantities: QuantityTexts = {
   'pretreated.ester': 'Ester im Öl',
 
   ...deEvidenceQuantities,
+  ...deBatchQuantities,
 };

@@ -13,6 +13,7 @@ export const deReasons: Texts['reasons'] = {
   'water-not-measured': 'Wasser nicht gemessen: Es gilt der Richtwert {water} %, die Wassergrenze bleibt ungeprüft.',
   'pretreatment-misses-target': 'Auch {passes} Durchgänge lassen voraussichtlich bis zu {left} % FFA, mehr als das Ziel von {target} %.',
   'ffa-not-known': 'Das Verfahren richtet sich nach den freien Fettsäuren.',
+  'no-guard-band': 'Ohne Abstand zur Grenze entschieden: Die Unsicherheit des Ergebnisses bleibt offen, solange ein Wert der Ausstattung fehlt oder abgelehnt ist. Betriebsvorgaben prüfen.',
   'runs-differ': 'Die Bestimmungen liegen weiter auseinander als zulässig: erst die Titration klären.',
   'more-runs-settle': 'Weitere Bestimmungen, die Klarheit brächten, wenn das Mittel bleibt: {runs}.',
   'many-runs-settle': 'So nah an der Grenze, dass auch insgesamt {runs} Bestimmungen keine Klarheit brächten.',

@@ -1,7 +1,7 @@
+import { deBatchChoices, deBatchOptions, deBatchProblems } from './de-batch-quantities.js';
 import { deBudget } from './de-budget.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
-import { deSecondCheck } from './de-second-check.js';
 import type { Texts } from './en.js';
 
 /** German. Labels begin with a noun, so that they can stand in a sentence as they are. */
@@ -81,6 +81,7 @@ export const de: Texts = {
     temperatureCorrected: 'Temperatur korrigieren',
     runsAreDear: 'Weitere Bestimmung aufwendig',
     portionTable: 'Einwaage nach',
+    ...deBatchChoices,
   },
   options: {
     acidKnownFrom: {
@@ -122,6 +123,7 @@ export const de: Texts = {
     temperatureCorrected: { yes: 'ja, wo abgelesen', no: 'nie' },
     runsAreDear: { yes: 'ja', no: 'nein' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
+    ...deBatchOptions,
   },
   problems: {
     ambiguous: '„{typed}“ lässt sich auf zwei Arten lesen. Welche ist gemeint?',
@@ -149,6 +151,7 @@ export const de: Texts = {
     'logarithm-of-nothing': 'Aus diesen Werten nicht berechenbar. Die zugrunde liegenden Werte prüfen.',
     'not-finite': 'Mit diesen Werten wächst das Ergebnis über alle Grenzen. Die zugrunde liegenden Werte prüfen.',
     'unknown-option': '„{option}“ gehört nicht zur Auswahl. Eine der angebotenen Möglichkeiten wählen.',
+    ...deBatchProblems,
     other: 'Dieser Wert ist nicht verwendbar ({code}). Den Wert prüfen.',
   },
   faults: {
@@ -298,6 +301,7 @@ export const de: Texts = {
     back: 'Zurück',
     notKnown: 'noch nicht bekannt',
     fullValue: 'Voller Wert',
+    secondCheck: 'Gegenrechnung von Hand',
   },
   marks: {
     found: 'in der Quelle gelesen',
@@ -321,7 +325,6 @@ export const de: Texts = {
     },
     source: '{title} ({mark})',
   },
-  secondCheck: deSecondCheck,
   titrant: {
     ofSite: 'Maßlösung des Betriebs',
     ownStrength: 'Anderer Gehalt für diese Partie',

@@ -1,3 +1,4 @@
+import { enBatchQuantities } from './en-batch-quantities.js';
 import { enEvidenceQuantities } from './en-evidence-quantities.js';
 
 /**
@@ -161,6 +162,7 @@ export const enQuantities = {
   'pretreated.ester': 'ester in the oil',
 
   ...enEvidenceQuantities,
+  ...enBatchQuantities,
 };
 
 /** The same names and words in any language. */

@@ -11,6 +11,7 @@ export const enReasons = {
   'water-not-measured': 'Water was not measured: the usual {water} % is assumed, and the water limit is not checked.',
   'pretreatment-misses-target': 'Even {passes} passes are expected to leave up to {left} % FFA, above the target of {target} %.',
   'ffa-not-known': 'The route follows from the free fatty acid.',
+  'no-guard-band': 'Decided without a guard band: how well the FFA is known cannot be said while a figure of the equipment is missing or refused. See the site values.',
   'runs-differ': 'The runs lie further apart than they may: see the titration before relying on this.',
   'more-runs-settle': 'Further runs that would settle it, if their mean stays: {runs}.',
   'many-runs-settle': 'It lies so near the limit that even {runs} runs in all would not settle it.',

@@ -1,7 +1,7 @@
+import { enBatchChoices, enBatchOptions, enBatchProblems } from './en-batch-quantities.js';
 import { enBudget } from './en-budget.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
-import { enSecondCheck } from './en-second-check.js';
 
 /** English: every sentence a user can read. `{…}` stands for a figure or a word put in. */
 export const en = {
@@ -80,6 +80,7 @@ export const en = {
     temperatureCorrected: 'Correct for temperature',
     runsAreDear: 'A further run is dear',
     portionTable: 'Portions after',
+    ...enBatchChoices,
   },
   options: {
     acidKnownFrom: {
@@ -121,6 +122,7 @@ export const en = {
     temperatureCorrected: { yes: 'yes, where it is read', no: 'never' },
     runsAreDear: { yes: 'yes', no: 'no' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
+    ...enBatchOptions,
   },
   problems: {
     ambiguous: '“{typed}” can be read in two ways. Which one is meant?',
@@ -148,6 +150,7 @@ export const en = {
     'logarithm-of-nothing': 'This cannot be worked out from these figures. Check the figures it rests on.',
     'not-finite': 'This grows beyond all bounds with these figures. Check the figures it rests on.',
     'unknown-option': '“{option}” is none of the choices. Choose one of those offered.',
+    ...enBatchProblems,
     other: 'This figure cannot be used ({code}). Check it.',
   },
   faults: {
@@ -297,6 +300,7 @@ export const en = {
     back: 'Back',
     notKnown: 'not known yet',
     fullValue: 'Full value',
+    secondCheck: 'Second check by hand',
   },
   marks: {
     found: 'read in the source',
@@ -320,7 +324,6 @@ export const en = {
     },
     source: '{title} ({mark})',
   },
-  secondCheck: enSecondCheck,
   titrant: {
     ofSite: 'The site’s titrant',
     ownStrength: 'Another strength for this lot',

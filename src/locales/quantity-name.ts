@@ -3,15 +3,15 @@ import type { Texts } from './en.js';
 
 type Words = Readonly<Record<string, string>>;
 
-/** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: where, and which run or pass, and what. */
-const KEY = /^(retest\.|titrant\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
-/** A site value that each catalyst product has for itself: `KOH.assay`. */
-const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility)$/;
+/** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: `cost.direct.total`: where, and which run or pass, and what. */
+const KEY = /^(retest\.|titrant\.|after\.|heat\.|cost\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
+/** A site value that each catalyst or acid has for itself: `KOH.assay`. */
+const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility|\.heatOfSolution|\.price)$/;
 
 /** The name of a quantity in words, `run 1: net titre`; the key itself where it has no name. */
 export function quantityName(key: string, texts: Texts): string {
   const quantities: Words = texts.quantities;
-  return inContext(key, texts, (context, base) => own(quantities, context + base) ?? own(quantities, base)) ?? labelOf(key, texts) ?? key;
+  return inContext(key, texts, (around, base) => around.map((part) => own(quantities, part + base)).find(Boolean) ?? own(quantities, base)) ?? labelOf(key, texts) ?? key;
 }
 
 /** The name of a source of uncertainty, as a budget lists it: `burette`. */
@@ -44,21 +44,21 @@ function labelOf(field: string, texts: Texts): string | undefined {
 const capitalNouns = ({ quantities: { titre } }: Texts): boolean => titre !== titre.toLowerCase();
 
 /** What `nameOf` finds for the last part of a key, between the words for what stands around it. */
-function inContext(key: string, texts: Texts, nameOf: (context: string, base: string) => string | undefined): string | undefined {
+function inContext(key: string, texts: Texts, nameOf: (around: readonly string[], base: string) => string | undefined): string | undefined {
   const { quantities } = texts;
-  const [, retest, counted, n = '', part, base = '', pace] = KEY.exec(key) ?? [];
+  const [, group = '', counted, n = '', part, base = '', pace] = KEY.exec(key) ?? [];
   const context = (counted && `${counted}.`) ?? part ?? '';
-  const name = nameOf(context, base) ?? productName(base, texts);
+  const name = nameOf([group, context].filter(Boolean), base) ?? productName(base, texts);
   if (name === undefined) return undefined;
   const word = (of: string | undefined): string | undefined => (of ? own(quantities, of) : undefined);
-  const around = [word(retest), fill(word(context) ?? '', { n })].filter(Boolean).join(', ');
+  const around = [word(group), fill((group && context && word(group + context)) || (word(context) ?? ''), { n })].filter(Boolean).join(', ');
   const end = word(pace);
   return `${around && `${around}: `}${name}${end ? `, ${end}` : ''}`;
 }
 
 function productName(base: string, { quantities, options }: Texts): string | undefined {
   const [, product = '', name = ''] = PRODUCT.exec(base) ?? [];
-  const words = own(options.catalyst, product);
+  const words = own(options.catalyst, product) ?? own(quantities, `acid.${product}`);
   return words && fill(own(quantities, name) ?? '', { product: words });
 }
 

@@ -1,4 +1,6 @@
+import { outlayRates } from '../chemistry/cost.js';
 import { passesNeeded } from '../decision/passes.js';
+import { anyPriced, isPriced } from '../decision/priced.js';
 import { rangeKept } from '../decision/replicates.js';
 import type { Findings, Givens } from '../formula/plan.js';
 import { Missing, Refused, isKnown } from '../formula/reading.js';
@@ -39,6 +41,11 @@ export class LotGivens implements Givens {
       return passesNeeded((pass) => findings.outcome(`pass${pass}.ffaLeft.slow`), findings.outcome('pretreatmentTarget'));
     }
     if (key === 'temperatureTaken') return this.temperatureTaken() && this.chosen('temperatureCorrected') !== 'no' ? 'yes' : 'no';
+    if (key.startsWith('priced.')) {
+      const what = key.slice('priced.'.length);
+      const outcomeOf = (rate: string): Outcome => findings.outcome(rate);
+      return what === 'direct' || what === 'twoStep' ? anyPriced(outlayRates(what).map(outcomeOf)) : isPriced(outcomeOf(what));
+    }
     const replicate = /^(retest\.)?(averageBy|runsAgree)$/.exec(key);
     if (replicate) return this.replicates(replicate[1] as 'retest.' | undefined ?? '', replicate[2] === 'runsAgree', findings);
     if (key === 'baseStepAcidFrom') return this.hasRetest() ? 'retest' : 'estimate';

@@ -29,6 +29,7 @@ export function judgedRoute(run: LotRun, entry: LotEntry, replicates: Replicates
     acidProofEquipment: givens.chosen('acidProofEquipment') === 'yes',
   });
   const reasons: Reason[] = replicates.state === 'differ' ? [{ code: 'runs-differ', params: {} }] : [];
+  if (!known && route.verdict !== 'not-known') reasons.push({ code: 'no-guard-band', params: {} });
   const settle = known && isKnown(ffa) && route.odds ? whatSettles(known, new Decimal(route.odds.limit).minus(ffa).abs(), replicates) : [];
   return reasons.length || settle.length ? { ...route, reasons: [...reasons, ...route.reasons, ...settle] } : route;
 }

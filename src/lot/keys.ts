@@ -1,14 +1,19 @@
+import { pricedChoices } from '../chemistry/cost.js';
 import { lotFormulas } from '../chemistry/lot-formulas.js';
 import type { Unit } from '../formula/unit.js';
-import { gramPerLitre, litre } from '../formula/units.js';
+import { currencyPerLitre, gramPerLitre, litre } from '../formula/units.js';
 import type { KnownKeys } from './check.js';
 
 // The keys of an entry. A figure stands under the key of the quantity it is an input of, but for two
 // fields whose unit decides which quantity they give, and for the cells of a run.
 
+/** Prices that may be typed by mass or by volume. */
+const TWO_WAY_PRICES = ['oilPrice', 'esterPrice', 'methanolPrice'];
+
 const FIELD_OF: Readonly<Record<string, string>> = {
   weighedOil: 'oilAmount', oilVolumeGiven: 'oilAmount', oilAmountBy: 'oilAmount', oilMass: 'oilAmount', oilVolume: 'oilAmount',
   titrantMolarity: 'titrantStrength', titrantMassStrength: 'titrantStrength', titrantStrengthBy: 'titrantStrength',
+  ...Object.fromEntries(TWO_WAY_PRICES.flatMap((price) => ['By', 'ByMass', 'ByVolume'].map((end) => [price + end, price]))),
 };
 const CELL_OF: Readonly<Record<string, 'sample' | 'start' | 'end'>> = {
   weighedMass: 'sample', sampleVolume: 'sample', sampleMass: 'sample', portion: 'sample', buretteStart: 'start', buretteEnd: 'end',
@@ -41,11 +46,12 @@ export function runCell(key: string): { list: RunList; index: number; cell: 'sam
 export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; of(unit: Unit): string }>> = {
   oilAmountBy: { field: 'oilAmount', of: (unit) => (unit.sameDimension(litre) ? 'volume' : 'mass') },
   titrantStrengthBy: { field: 'titrantStrength', of: (unit) => (unit.sameDimension(gramPerLitre) ? 'mass' : 'amount') },
+  ...Object.fromEntries(TWO_WAY_PRICES.map((field) => [`${field}By`, { field, of: (unit: Unit) => (unit.sameDimension(currencyPerLitre) ? 'volume' : 'mass') }])),
 };
 
 /** The choices that are decided on results, not typed. */
 const DECIDED: ReadonlySet<string> = new Set([
-  'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT),
+  'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT), ...pricedChoices.map(({ key }) => key),
 ]);
 
 const YES_NO = ['yes', 'no'] as const;

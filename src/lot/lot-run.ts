@@ -28,6 +28,9 @@ export function lotRun(entry: LotEntry, site: SiteProfile, wanted?: readonly str
 /** What choices are decided on although no formula names it. */
 const DECIDING = ['runRange', 'criticalRange', 'retest.runRange', 'retest.criticalRange'];
 
+/** What the number of passes is decided on. */
+const PASSES_DECIDED_ON = ['pretreatmentTarget', 'pass1.ffaLeft.slow', 'pass2.ffaLeft.slow'];
+
 const plans = new WeakMap<Sheet, Map<string, Plan>>();
 
 function planFor(sheet: Sheet, wanted: readonly string[] | undefined): Plan {
@@ -35,6 +38,10 @@ function planFor(sheet: Sheet, wanted: readonly string[] | undefined): Plan {
   if (!ofSheet) plans.set(sheet, (ofSheet = new Map()));
   const id = wanted ? wanted.join() : '*';
   let plan = ofSheet.get(id);
-  if (!plan) ofSheet.set(id, (plan = new Plan(sheet, wanted ?? sheet.quantities.keys())));
+  if (!plan) {
+    plan = new Plan(sheet, wanted ?? sheet.quantities.keys());
+    if (wanted && plan.choices.includes('passes')) plan = new Plan(sheet, [...wanted, ...PASSES_DECIDED_ON]);
+    ofSheet.set(id, plan);
+  }
   return plan;
 }

@@ -40,7 +40,7 @@ export function implausibilities(entry: LotEntry, site: SiteProfile, run: LotRun
   if (run.givens.chosen('acidKnownFrom') === 'titration') {
     runs('', run.runs.lot.counted, run, find, say);
     titrant(site, entry, run, find, say, today);
-    bench(run, find, say);
+    bench(entry, run, find, say);
   }
   runs('retest.', entry.retestRuns.length ? run.runs.retest.counted : [], run, find, say);
   oil(run, find, say);
@@ -99,9 +99,14 @@ function age({ titrantDate }: SiteProfile, entry: LotEntry, find: Find, say: Say
   if (limit.lt(days)) say('titrant-old', 'titrantDate', { days: String(days), limit });
 }
 
-function bench({ givens }: LotRun, find: Find, say: Say): void {
-  const [blank, titre] = [find('correctedBlank'), find('run1.titre')];
-  if (blank && titre?.gt(0) && blank.gt(titre.times(MOST_BLANK))) say('blank-large', 'blank', { share: blank.div(titre).times(100) });
+function bench(entry: LotEntry, { givens, runs: { lot, retest } }: LotRun, find: Find, say: Say): void {
+  const titresOf = (prefix: RunPrefix, counted: readonly number[]): Decimal[] => counted.flatMap((index) => find(runKey(prefix, index, 'titre')) ?? []);
+  const titres = [...titresOf('', lot.counted), ...titresOf('retest.', entry.retestRuns.length ? retest.counted : [])].filter((titre) => titre.gt(0));
+  const blank = givens.chosen('blankPolicy') === 'blank-subtracted' && titres.length ? find('blank') : undefined;
+  if (blank) {
+    const share = blank.div(Decimal.min(...titres));
+    if (share.gt(MOST_BLANK)) say('blank-large', 'blank', { share: share.times(100) });
+  }
   if (givens.chosen('temperatureCorrected') === 'yes' || !givens.temperatureTaken()) return;
   const [now, then] = [find('titrationTemperature'), find('standardisationTemperature')];
   const gap = now && then ? now.minus(then).abs() : undefined;

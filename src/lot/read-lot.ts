@@ -4,6 +4,7 @@ import type { Replicates } from '../decision/replicates.js';
 import type { Route } from '../decision/route.js';
 import type { Decimal } from '../formula/decimal.js';
 import { shownText } from '../formula/digits.js';
+import type { Plan } from '../formula/plan.js';
 import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
 import { checkLotEntry, checkSiteProfile } from './check.js';
@@ -71,8 +72,8 @@ const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray
 
 const ROUTE_KEYS = [
   'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',
-  'u.repeatability', 'u.endPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
-  'u.khpEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
+  'u.repeatability', 'u.endPoint', 'u.blankEndPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
+  'u.khpEndPoint', 'u.khpBlankEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
 ];
 
 function replicatesOf({ findings, givens }: LotRun, prefix: '' | 'retest.', runs: readonly RunEntry[]): Replicates {
@@ -119,8 +120,19 @@ function compute({ plan, findings }: LotRun, entry: LotEntry, site: SiteProfile,
     if (key.startsWith('retest.')) return entry.retestRuns.length > 0 && RESULTS.test(key.slice('retest.'.length));
     return key === 'titrantConcentration' ? hasTitrant : RESULTS.test(key);
   };
-  for (const key of plan.order) if (shows(key)) findings.outcome(key);
+  for (const key of resultsOf(plan)) if (shows(key)) findings.outcome(key);
 }
+
+/** Keys of a plan that any lot may show without being asked. */
+function resultsOf(plan: Plan): readonly string[] {
+  let keys = RESULTS_OF.get(plan);
+  if (!keys) RESULTS_OF.set(plan, (keys = plan.order.filter((key) => OF_SOME_LOTS.test(key) || RESULTS.test(key.replace(/^retest\./, '')))));
+  return keys;
+}
+
+const RESULTS_OF = new WeakMap<Plan, readonly string[]>();
+/** Results of a run or a pass, in whole steps, of the titrant. */
+const OF_SOME_LOTS = /^(?:(?:retest\.)?(?:run|pass)\d|titrantConcentration$)|\.dispensed\./;
 
 const DISPENSING_STEPS = ['methanolStep', 'catalystStep', 'sulfuricStep'];
 const TITRANT_FIGURES = ['titrantStrength', 'titrantWeighedMass'];

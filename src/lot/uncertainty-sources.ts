@@ -17,7 +17,8 @@ export function uncertaintySources({ lot, retest, titrant }: LotRuns): readonly 
   return [
     normal('u.repeatability', 'titratedAcidContent'),
     normal('retest.u.repeatability', 'retest.titratedAcidContent'),
-    ...[...oil('titre'), 'blank'].map((at) => flat('u.endPoint', at)),
+    ...oil('titre').map((at) => flat('u.endPoint', at)),
+    flat('u.blankEndPoint', 'blank'),
     peaked('u.burette', ...oil('titre')),
     flat('u.balance', ...oil('weighedMass')),
     peaked('u.sampleVolume', ...oil('sampleVolume')),
@@ -25,6 +26,7 @@ export function uncertaintySources({ lot, retest, titrant }: LotRuns): readonly 
     normal('u.temperature', 'volumeFactor'),
     flat('u.titrant', 'titrantConcentration'),
     ...standards('titre').map((at) => flat('u.khpEndPoint', at)),
+    flat('u.khpBlankEndPoint', 'khpBlank'),
     peaked('u.khpBurette', ...standards('titre')),
     flat('u.khpBalance', ...standards('portion')),
     flat('u.khpPurity', 'khpPurity'),

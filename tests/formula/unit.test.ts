@@ -33,6 +33,10 @@ describe('scales are exact', () => {
     ['J/mol', units.joulePerMole, '1'],
     ['J/(mol·K)', units.joulePerMoleKelvin, '1'],
     ['g/mL', units.gramPerMillilitre, '1000'],
+    // SI Brochure table 7: kilo is 10³; an hour of a kilowatt is 3 600 000 J
+    ['kJ/mol', units.kilojoulePerMole, '1000'],
+    ['kWh', units.kilowattHour, '3600000'],
+    ['¤/t', units.currencyPerTonne, '0.001'],
     // NIST SP 811 appendix B.8: an interval of 1 °F is 5/9 K
     ['°F', units.degreeFahrenheit, '5/9'],
   ])('%s', (_, unit, scale) => {
