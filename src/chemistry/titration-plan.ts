@@ -19,20 +19,23 @@ export const expectedAcidValue = quantity({
   limits: [limit('above', '0', 'not-above-zero'), limit('atMost', '935', 'out-of-range')],
 });
 
-/** A line of a table: below this acid value, mg/g, a portion of this mass, g. The last line has no end. */
-export type PortionLine = readonly [portion: string, below?: string];
+/** A line of a table: up to this acid value, mg/g, a portion of this mass, g; the end itself belongs to the next line, where not `included`. The last line has no end. */
+export type PortionLine = readonly [portion: string, end?: string, included?: 'included'];
 
 /** Portion by acid value; ISO 660, table 1, and AOCS Cd 3d-63 have the same masses. */
 export const PORTIONS = {
   'iso-660': [['20', '1'], ['10', '4'], ['2.5', '15'], ['0.5', '75'], ['0.1']],
   'd664': [['20', '1'], ['5', '5'], ['1', '20'], ['0.25', '100'], ['0.1']],
-  'd974': [['20', '3'], ['2', '25'], ['0.2']],
+  'd974': [['20', '3', 'included'], ['2', '25', 'included'], ['0.2']],
 } as const satisfies Readonly<Record<string, readonly PortionLine[]>>;
 
 function byTable([line, ...rest]: readonly PortionLine[]): Expression {
   if (!line) throw new RangeError('a table ends with a line for all that is left');
-  const [mass, below] = line;
-  return below === undefined ? constant(mass, gram) : whereBelow(expectedAcidValue, constant(below, milligramPerGram), constant(mass, gram), byTable(rest));
+  const [mass, end, included] = line;
+  const portion = constant(mass, gram);
+  if (end === undefined) return portion;
+  const bound = constant(end, milligramPerGram);
+  return included ? whereBelow(bound, expectedAcidValue, byTable(rest), portion) : whereBelow(expectedAcidValue, bound, portion, byTable(rest));
 }
 
 const planned = (name: string, symbol: string, is: Expression, cites = [ISO_660]): Quantity =>

@@ -4,7 +4,7 @@ import type { Decimal } from '../formula/decimal.js';
 
 /** The table's mass for an acid value, g. */
 export function portionFor(acidValue: Decimal, lines: readonly PortionLine[]): Decimal {
-  const line = lines.find(([, below]) => below === undefined || acidValue.lt(below));
+  const line = lines.find(([, end, included]) => end === undefined || (included ? acidValue.lte(end) : acidValue.lt(end)));
   if (!line) throw new RangeError('a table ends with a line for all that is left');
   return decimal(line[0]);
 }

@@ -1,5 +1,7 @@
+import { EsterwayAfter } from './after/after.js';
 import { ChargeSheet } from './charge/charge-sheet.js';
 import { ResidualPlot } from './charge/residual.js';
+import { EsterwayCost } from './cost/cost.js';
 import { EsterwayCurve } from './curve/curve.js';
 import { EsterwayTitrant } from './titrant/titrant.js';
 import { PlanElement } from './titration/plan.js';
@@ -10,6 +12,8 @@ import { SimulationElement } from './working/simulation.js';
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
   ['esterway-titrant', EsterwayTitrant],
   ['esterway-curve', EsterwayCurve],
+  ['esterway-after', EsterwayAfter],
+  ['esterway-cost', EsterwayCost],
   ['esterway-plan', PlanElement],
   ['esterway-residual', ResidualPlot],
   ['esterway-charge-sheet', ChargeSheet],

@@ -271,6 +271,8 @@ export const de: Texts = {
     perLitre: '{perLitre} g je Liter Öl, {perKilogram} g je kg',
     expected: 'Zu erwarten sind {low} bis {high} % FFA: eine Schätzung, vor der Umesterung nachtitrieren.',
     belowShown: 'unter {least}',
+    after: 'Nach der Reaktion',
+    cost: 'Kosten beider Verfahren',
     overTime: 'Was mit der Zeit übrig bleibt',
     outcome: 'Was zu erwarten ist',
     waterOf: 'Wasser im Ansatz',

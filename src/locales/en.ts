@@ -270,6 +270,8 @@ export const en = {
     perLitre: '{perLitre} g per litre of oil, {perKilogram} g per kg',
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
     belowShown: 'below {least}',
+    after: 'After the reaction',
+    cost: 'Cost of both routes',
     overTime: 'What it leaves over time',
     outcome: 'What to expect',
     waterOf: 'Water in the batch',

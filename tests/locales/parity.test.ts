@@ -139,6 +139,10 @@ describe('the words of a key', () => {
     ['pretreated.ffaLeft.fast', 'after the acid step: FFA left, hopeful end', 'nach der Veresterung: restliche FFA, günstiges Ende'],
     ['NaOCH3-solution.density', 'density of sodium methoxide in methanol', 'Dichte von Natriummethylat in Methanol'],
     ['waterContent', 'water', 'Wasser'],
+    ['after.direct.acid', 'after the reaction, direct: neutralising acid to weigh', 'nach der Reaktion, direkt: Neutralisationssäure, Einwaage'],
+    ['heat.pass2.riseInBatch', 'heat of mixing, pass 2: temperature rise in oil and methanol, without cooling', 'Mischungswärme, Durchgang 2: Erwärmung von Öl und Methanol, ohne Kühlung'],
+    ['cost.twoStep.methanol', 'cost, two-step: methanol', 'Kosten, zweistufig: Methanol'],
+    ['acetic.density', 'density of glacial acetic acid', 'Dichte von Eisessig'],
   ])('%s is a quantity', (key, english, german) => {
     expect([quantityName(key, en), quantityName(key, de)]).toEqual([english, german]);
   });

@@ -163,6 +163,13 @@ describe('only the readings wanted', () => {
     expect(few.route).toEqual(all.route);
   });
 
+  it('may rest on the number of passes, whatever else is asked for', () => {
+    const sour = certified('20');
+    for (const key of ['twoStep.catalyst', 'pretreated.mass']) {
+      expect((readLot(sour, undefined, { only: [key] }) as LotReading).readings[key]).toEqual(read(sour).readings[key]);
+    }
+  });
+
   it('say what is missing and what was refused', () => {
     const few = readLot(lot({ figures: { oilAmount: '-5 kg' } }), undefined, { only }) as LotReading;
     expect(few.readings['acidValue']?.missing).toContain('titrantStrength');

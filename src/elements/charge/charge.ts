@@ -12,6 +12,8 @@ import { chargeStyles } from './charge-styles.js';
 
 export type RouteName = 'direct' | 'twoStep';
 
+const after = (): unknown => html`<esterway-after bare exportparts="figure, caution, field-line, field-input"></esterway-after>`;
+const cost = (): unknown => html`<esterway-cost bare exportparts="figure, field-line, field-input"></esterway-cost>`;
 const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
 
 /** What must be known for the steps to be shown. A retest that cannot be used yet takes none of its own fields away. */
@@ -115,6 +117,8 @@ export class EsterwayCharge extends SectionElement {
       ${this.known(`${this.looked}.catalyst`) ? nothing : html`<p class="quiet small">${this.whyUnknown(`${this.looked}.catalyst`)}</p>`}
       ${this.noticesAt((field) => (this.looked === 'twoStep' && field === 'pass1.batchVolume') || field.startsWith(`${this.looked}.`))}
       ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
+      <esterway-later .label=${texts.charge.after} .content=${after}></esterway-later>
+      <esterway-later .label=${texts.charge.cost} .content=${cost}></esterway-later>
     `;
   }
 

@@ -9,6 +9,9 @@ import { SectionElement } from './section.js';
 /** Units of site figures that have no usual value, and of those that are typed in several. */
 const UNITS: Readonly<Record<string, readonly string[]>> = {
   titrantStrength: ['mol/L', 'g/L'], titrantWeighedMass: ['g'], titrantFlaskVolume: ['L', 'mL'], buretteCapacityTyped: ['mL'], buretteToleranceTyped: ['mL'],
+  oilPrice: ['¤/t', '¤/kg', '¤/L', '¤/US gal'], esterPrice: ['¤/t', '¤/kg', '¤/L', '¤/US gal'], methanolPrice: ['¤/kg', '¤/t', '¤/L', '¤/US gal'],
+  sulfuricPrice: ['¤/kg', '¤/t'], 'vinegar.price': ['¤/L'], drawnOffPrice: ['¤/t', '¤/kg'], lowerLayerPrice: ['¤/t', '¤/kg'], energyPrice: ['¤/kWh'],
+  energyBaseStep: ['kWh/t'], energyAcidPass: ['kWh/t'], hourPrice: ['¤/h'], hoursBaseStep: ['h', 'min'], hoursAcidPass: ['h', 'min'],
   iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'], methanolStep: ['L', 'mL', 'US gal'], catalystStep: ['g', 'kg', 'lb'], sulfuricStep: ['g', 'kg', 'lb'],
 };
 
@@ -40,7 +43,7 @@ export abstract class SiteSectionElement extends SectionElement {
       .label=${this.fieldLabel(key)}
       .figure=${this.desk.site.figures[key]}
       .standing=${usual}
-      .units=${UNITS[key] ?? [usual?.unit ?? '']}
+      .units=${UNITS[key] ?? [usual?.unit ?? (key.endsWith('.price') ? '¤/kg' : '')]}
       .problem=${key in this.desk.entry.figures ? undefined : this.problemAt(key)}
       .note=${usual?.source.mark === 'practice' ? texts.marks.practice : note}
       @figure-input=${(event: FigureInputEvent) => this.editSite({ kind: 'figure', key, figure: event.figure })}

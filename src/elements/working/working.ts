@@ -5,6 +5,8 @@ import { guard } from 'lit/directives/guard.js';
 import type { Decimal } from '../../formula/decimal.js';
 import type { Unit } from '../../formula/unit.js';
 import { quantityName } from '../../locales/quantity-name.js';
+import type { ReadingJson } from '../../lot/lot-reading.js';
+import { readLot } from '../../lot/read-lot.js';
 import { uncertainty } from '../../lot/uncertainty.js';
 import { working, workingFigure } from '../../lot/working.js';
 import type { Working } from '../../lot/working.js';
@@ -117,7 +119,7 @@ export class EsterwayWorking extends SectionElement {
         <option value="" ?selected=${!this.of}></option>
         ${guard([lot, this.of, texts], () => this.groups())}
       </select>
-      ${Object.hasOwn(lot.readings, this.of) ? this.opened() : html`<p class="small quiet">${texts.working.none}</p>`}
+      ${this.reading(this.of) ? this.opened() : html`<p class="small quiet">${texts.working.none}</p>`}
       <esterway-later .label=${texts.working.secondCheck} .content=${() => this.secondCheck()}></esterway-later>
     `;
   }
@@ -126,6 +128,16 @@ export class EsterwayWorking extends SectionElement {
     const check = (this.#secondCheck ??= document.createElement('esterway-second-check'));
     check.of = this.of;
     return check;
+  }
+
+  /** A figure that is not read for every lot is read when it is opened. */
+  protected override reading(key: string): ReadingJson | undefined {
+    const { entry, site, reading } = this.desk;
+    const found = super.reading(key);
+    if (found || !key || 'faults' in reading) return found;
+    const read = readLot(entry, site, { only: [key] });
+    const asked = 'faults' in read ? undefined : read.readings[key];
+    return asked?.problem?.code === 'unknown-quantity' ? undefined : asked;
   }
 
   /** Every reading, grouped as it is named: `run 1: titre`. */

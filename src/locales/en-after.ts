@@ -1,0 +1,20 @@
+/** After the reaction. */
+export const enAfter = {
+  title: 'After the reaction',
+  hold: 'Hold at {temperature} for {time}, then let it settle for {settling} (the site’s own settings; 55 to 65 °C, 30 to 60 min and a day are common practice, no source).',
+  heat: 'Dissolving the catalyst warms the methanol by {rise} °C, to {reached} °C, if nothing is cooled (worked out with the heat in water, a marker).',
+  boils: 'Dissolving the catalyst could warm the methanol by {rise} °C, to {reached} °C: near or above its boiling point of 64.7 °C. Add it in small portions, cooled and stirred, under a condenser.',
+  heatUnknown: 'For this catalyst no heat of solution is published; take care all the same, and set the site’s own figure if it has one.',
+  neutralise: 'To neutralise the catalyst left',
+  split: 'Further, to split the soap as well',
+  layers: 'Layers after settling, neutralising acid counted in',
+  upper: 'upper: ester',
+  lower: 'lower: glycerol, soap, water',
+  share: '{share} of the oil’s volume',
+  product: 'Check of the product',
+  productGood: 'Acid value {value} keeps the limit of {limit}.',
+  productBad: 'Acid value {value} is above the limit of {limit}: wash out acid or split soap, then titrate again.',
+  soap: 'Soap and catalyst left, by two indicators',
+  soapHow: 'Titrate with hydrochloric acid: phenolphthalein to colourless, then bromophenol blue to yellow.',
+  care: 'Acid slowly into the stirred, cooled mixture, never the reverse; it heats and may foam. Goggles and gloves. The lower layer holds methanol: no ignition sources, hazardous waste until treated.',
+};

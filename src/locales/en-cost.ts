@@ -1,0 +1,22 @@
+/** What both routes cost. */
+export const enCost = {
+  title: 'Cost of both routes',
+  prices: 'Prices and rates of the site',
+  money: '¤ is the site’s own money. What has no price is left out of the totals.',
+  part: 'Part',
+  direct: 'direct',
+  twoStep: 'two-step',
+  perTonne: 'a tonne of oil',
+  batch: 'total a batch',
+  yield: 'ester a tonne of oil',
+  dearer: 'Two-step costs {difference} ¤ more a tonne of oil than direct.',
+  cheaper: 'Two-step costs {difference} ¤ less a tonne of oil than direct.',
+  unpriced: 'Without a price, and left out: {prices}.',
+  none: 'No price is set yet. Set the site’s prices above.',
+  breakEven: 'Up to {ffa} % FFA {below} is the cheaper route, above it {above}.',
+  same: 'the same',
+  always: 'From 0.1 to 40 % FFA {route} is the cheaper route throughout.',
+  plot: 'Cost a tonne of oil over free fatty acid, both routes; this lot at {ffa} %.',
+  plotEmpty: 'Cost a tonne of oil over free fatty acid, both routes.',
+  here: 'this lot',
+};
