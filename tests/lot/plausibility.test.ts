@@ -108,6 +108,29 @@ it('a date that is none is not judged, and neither is one without a day to compa
   expect('notices' in reading && reading.notices).toEqual([]);
 });
 
+describe('a blank', () => {
+  const blanked = (blank: string, options: Record<string, string> = { blankPolicy: 'blank-subtracted' }): LotEntry => titrated('2.5', '4', { ...strength, blank }, options);
+  const share = (entry: LotEntry): string | undefined => noticesOf(entry, undefined).find(({ code }) => code === 'blank-large')?.params?.['share'];
+
+  it('is held against the smallest titre that counts', () => {
+    const small = run('2.5 g', '0', '3.5');
+    expect(share({ ...blanked('0.38 mL'), runs: [run('2.5 g', '0', '4'), small] })).toMatch(/^10\.857/);
+    expect(share({ ...blanked('0.38 mL'), runs: [{ ...small, struck: 'spilled' }, run('2.5 g', '0', '4')] })).toBeUndefined();
+  });
+
+  it('is held against the titres after the acid step as well, which are small', () => {
+    expect(share({ ...blanked('0.2 mL'), retestRuns: [run('10 g', '0', '1.9'), run('10 g', '0', '2.0')] })).toMatch(/^10\.526/);
+  });
+
+  it('is as large at another temperature, for blank and titre shrink alike', () => {
+    expect(share({ ...blanked('0.41 mL'), figures: { ...blanked('0.41 mL').figures, titrationTemperature: { text: '28', unit: '°C' } } })).toBe('10.25');
+  });
+
+  it('that is not subtracted does not matter', () => {
+    expect(share(blanked('0.41 mL', {}))).toBeUndefined();
+  });
+});
+
 it('a standardisation of tomorrow says so, and not that it is old', () => {
   expect(noticesOf(noStrength, standardised('2026-03-11')).map(({ code, quantity }) => [code, quantity])).toEqual([['date-in-future', 'titrantDate']]);
 });

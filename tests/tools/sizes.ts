@@ -15,10 +15,10 @@ export const coreMeasured = resolve(root, 'node_modules/.cache/size/core.min.js'
 
 /** Most bytes after gzip. */
 export const budgets = [
-  { name: 'script file', file: scriptFile, most: 98_000 },
+  { name: 'script file', file: scriptFile, most: 110_000 },
   { name: 'parts fetched when opened', file: moreFile, most: 45_000 },
-  { name: 'core with decimal.js', file: coreMeasured, most: 42_000 },
-  { name: 'worker file', file: workerFile, most: 40_000 },
+  { name: 'core with decimal.js', file: coreMeasured, most: 48_000 },
+  { name: 'worker file', file: workerFile, most: 45_000 },
 ] as const;
 
 export function gzipBytes(file: string): number {
