@@ -2,8 +2,9 @@ import { constant, greatest, least, median } from '../formula/expression.js';
 import type { Expression } from '../formula/expression.js';
 import { choice, limit, quantity } from '../formula/quantity.js';
 import type { Choice, Quantity } from '../formula/quantity.js';
+import type { Unit } from '../formula/unit.js';
 import { milligramPerGram, millimolePerGram, percent } from '../formula/units.js';
-import { METHOD_KOH, acidValueLike } from './acidity.js';
+import { METHOD_KOH, acidValueLike, freeFattyAcidOf } from './acidity.js';
 import { D664_FRESH, D664_USED, ISO_5725_6, MEAN_RANGE, MEDIAN_SPREAD, PRACTICE } from './sources.js';
 
 // How far the runs of a titration may lie apart, and what is made of them (ISO 5725-6).
@@ -72,15 +73,19 @@ export function replicates(prefix: '' | 'retest.', contents: readonly Expression
   // r is 2.8 standard deviations of a single run
   const single = limitOfTwo.per('2.8');
   const share = constant('1').per(constant(String(n)).power('0.5'));
-  const spread = (deviation: Expression, factor: Expression): Quantity =>
-    quantity({
-      key: `${prefix}u.repeatability`, symbol: `u_rep${mark}`, unit: millimolePerGram, cites: [ISO_5725_6, MEDIAN_SPREAD], digits: { significant: 2 },
-      is: deviation.per(METHOD_KOH).times(factor),
-    });
+  const doubt = (name: string, symbol: string, unit: Unit, is: Expression): Quantity =>
+    quantity({ key: `${prefix}u.${name}`, symbol: `u_${symbol}${mark}`, unit, cites: [ISO_5725_6, MEDIAN_SPREAD], digits: { significant: 2 }, is });
+  /** What scatter leaves of the result, of the mean, and of what each run tells by itself. */
+  const scatter = (deviation: Expression, factor: Expression): Quantity[] => [
+    doubt('repeatability', 'rep', millimolePerGram, deviation.per(METHOD_KOH).times(factor)),
+    doubt('meanAcidValue', 'AV_mean', milligramPerGram, deviation.times(share)),
+    doubt('runAcidValue', 'AV_run', milligramPerGram, deviation),
+    doubt('runFreeFattyAcid', 'FFA_run', percent, freeFattyAcidOf(deviation.per(METHOD_KOH))),
+  ];
   const made = (is: Expression): Quantity =>
     quantity({ key: `${prefix}titratedAcidContent`, symbol: `b_t${mark}`, unit: millimolePerGram, cites: [ISO_5725_6], is });
   const alone = made(meanOf(contents));
-  if (n < 2) return { result: alone, all: [averageBy, runsAgree, alone, mean, limitOfTwo, spread(single, share)] };
+  if (n < 2) return { result: alone, all: [averageBy, runsAgree, alone, mean, limitOfTwo, ...scatter(single, share)] };
 
   const range = like('runRange', 'R', METHOD_KOH.times(rangeOfRuns(contents)));
   const critical = like('criticalRange', 'CR', constant(factorOf(RANGE_FACTORS, n), undefined, { source: ISO_5725_6 }).times(single));
@@ -91,6 +96,6 @@ export function replicates(prefix: '' | 'retest.', contents: readonly Expression
   // of two, the median is the mean
   const byAverage = (mean: Expression, median: Expression): Expression => (n > 2 ? averageBy.of({ mean, median }) : mean);
   const result = made(byAverage(meanOf(contents), median(contents)));
-  const doubt = spread(deviation, byAverage(share, constant('1.2533', undefined, { source: MEDIAN_SPREAD }).times(share)));
-  return { result, all: [averageBy, runsAgree, mean, limitOfTwo, range, critical, deviation, result, doubt] };
+  const doubts = scatter(deviation, byAverage(share, constant('1.2533', undefined, { source: MEDIAN_SPREAD }).times(share)));
+  return { result, all: [averageBy, runsAgree, mean, limitOfTwo, range, critical, deviation, result, ...doubts] };
 }

@@ -64,8 +64,8 @@ export function standardisationRun(prefix: string, mark: string): Standardisatio
 }
 
 /**
- * The mean over the runs that count, which titrations use, and what their scatter and the
- * temperature of the room leave in doubt about it.
+ * The mean over the runs that count, which titrations use, and what the scatter of each and
+ * the temperature of the room leave in doubt about it.
  */
 export function standardised(runs: readonly StandardisationRun[]): readonly Quantity[] {
   const concentration = quantity({
@@ -76,7 +76,7 @@ export function standardised(runs: readonly StandardisationRun[]): readonly Quan
   });
   const scatter = quantity({
     key: 'u.khpRepeatability', symbol: 'u_rep,c', unit: molePerLitre, cites: [QUAM], digits: { significant: 2 },
-    is: concentration.times(standardisationRepeatability).in(molePerLitre).per(constant(String(runs.length)).power('0.5')),
+    is: concentration.times(standardisationRepeatability).in(molePerLitre),
   });
   const temperature = quantity({
     key: 'u.khpTemperature', symbol: 'u_t,KHP', unit: millilitre, cites: [QUAM], digits: { significant: 2 },

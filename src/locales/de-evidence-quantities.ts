@@ -41,6 +41,9 @@ export const deEvidenceQuantities: { readonly [Key in keyof typeof enEvidenceQua
 
   'u.': 'Unsicherheit',
   'u.repeatability': 'Streuung der Bestimmungen',
+  'u.meanAcidValue': 'Streuung der Bestimmungen, in der mittleren Säurezahl',
+  'u.runAcidValue': 'Streuung einer Bestimmung, in der Säurezahl',
+  'u.runFreeFattyAcid': 'Streuung einer Bestimmung, in den freien Fettsäuren',
   'u.burette': 'Bürette',
   'u.endPoint': 'Endpunkt, Tropfengröße',
   'u.blankEndPoint': 'Endpunkt beim Blindwert',

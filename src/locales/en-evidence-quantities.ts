@@ -39,6 +39,9 @@ export const enEvidenceQuantities = {
 
   'u.': 'uncertainty',
   'u.repeatability': 'scatter of the runs',
+  'u.meanAcidValue': 'scatter of the runs, in their mean acid value',
+  'u.runAcidValue': 'scatter of a run, in its acid value',
+  'u.runFreeFattyAcid': 'scatter of a run, in its free fatty acid',
   'u.burette': 'burette',
   'u.endPoint': 'end point, drop size',
   'u.blankEndPoint': 'end point of the blank',

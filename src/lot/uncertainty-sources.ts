@@ -13,10 +13,18 @@ export function uncertaintySources({ lot, retest, titrant }: LotRuns): readonly 
   const normal = (key: string, ...at: readonly string[]): UncertaintySource => ({ key, shape: 'normal', at });
   const flat = (key: string, ...at: readonly string[]): UncertaintySource => ({ key, shape: 'rectangular', at });
   const peaked = (key: string, ...at: readonly string[]): UncertaintySource => ({ key, shape: 'triangular', at });
+  // what a run tells by itself scatters more than what is made of them all; nothing rests on it
+  const alone = (prefix: '' | 'retest.', { runs }: RunPlan): UncertaintySource[] => [
+    normal(`${prefix}u.meanAcidValue`, `${prefix}meanAcidValue`),
+    ...Array.from({ length: runs }, (_, index) => [
+      normal(`${prefix}u.runAcidValue`, runKey(prefix, index, 'acidValue')), normal(`${prefix}u.runFreeFattyAcid`, runKey(prefix, index, 'freeFattyAcid')),
+    ]).flat(),
+  ];
   const standards = (name: string): string[] => each('titrant.', titrant, name);
   return [
     normal('u.repeatability', 'titratedAcidContent'),
     normal('retest.u.repeatability', 'retest.titratedAcidContent'),
+    ...alone('', lot), ...alone('retest.', retest),
     ...oil('titre').map((at) => flat('u.endPoint', at)),
     flat('u.blankEndPoint', 'blank'),
     peaked('u.burette', ...oil('titre')),
@@ -32,7 +40,7 @@ export function uncertaintySources({ lot, retest, titrant }: LotRuns): readonly 
     flat('u.khpPurity', 'khpPurity'),
     normal('u.khpMolarMass', 'khpMolarMass'),
     normal('u.khpTemperature', ...standards('titre')),
-    normal('u.khpRepeatability', 'titrant.concentration'),
+    ...standards('concentration').map((at) => normal('u.khpRepeatability', at)),
     flat('u.certificate', 'acidContent'),
     flat('retest.u.certificate', 'retest.acidContent'),
     flat('u.oilMass', 'weighedOil'),

@@ -130,6 +130,42 @@ describe('a retest', () => {
   });
 });
 
+describe('a run by itself', () => {
+  const entry = lot({ figures: { titrantStrength: '0.1 mol/L' }, runs: [run('2.5 g', '0', '4'), { ...run('2.5 g', '0', '4.2'), struck: 'overshot' }, run('2.5 g', '4', '8.1')] });
+  // r = 0.117 · 9.0882 mg/g, a run r/2.8
+  const deviation = (0.117 * 9.0882) / 2.8;
+  const part = (key: string, source: string, profile = site({}), from = entry): number => Number(uncertainty(from, profile, key)!.budget.find((line) => line.source === source)?.u ?? 0);
+
+  it('has the whole scatter of a run, struck or not, and so is less well known than the result', () => {
+    for (const index of [1, 2, 3]) {
+      expect(part(`run${index}.acidValue`, 'u.runAcidValue')).toBeCloseTo(deviation, 6);
+      expect(part(`run${index}.freeFattyAcid`, 'u.runFreeFattyAcid')).toBeCloseTo((deviation * 282) / 561, 6);
+    }
+    const [alone, together] = ['run1.acidValue', 'acidValue'].map((key) => Number(uncertainty(entry, site({}), key)!.u));
+    expect(alone).toBeGreaterThan(together!);
+  });
+
+  it('puts its scatter into the mean by the root of their number, and once', () => {
+    expect(part('meanAcidValue', 'u.meanAcidValue')).toBeCloseTo(deviation / Math.SQRT2, 6);
+    expect(Number(uncertainty(entry, site({}), 'meanAcidValue')!.u)).toBeCloseTo(Number(uncertainty(entry, site({}), 'acidValue')!.u), 9);
+    expect(part('acidValue', 'u.runAcidValue') + part('acidValue', 'u.meanAcidValue')).toBe(0);
+  });
+
+  it('that is the only one is as well known as the result', () => {
+    const single = { ...entry, runs: entry.runs.slice(0, 1) };
+    expect(Number(uncertainty(single, site({}), 'run1.acidValue')!.u)).toBeCloseTo(Number(uncertainty(single, site({}), 'acidValue')!.u), 12);
+  });
+
+  it('of the titrant has the whole scatter of a standardisation', () => {
+    const standard: SiteProfile = { ...site({ options: { titrantKnownFrom: 'standardised' } }), titrantRuns: [run('0.5012 g', '0', '24.5'), run('0.5012 g', '0', '24.5')] };
+    const c = numberIn(read(entry, standard), 'titrantConcentration');
+    const own = { ...entry, figures: {} };
+    expect(part('titrant.run1.concentration', 'u.khpRepeatability', standard, own)).toBeCloseTo(0.002 * 0.1001736, 6);
+    expect(part('titrantConcentration', 'u.khpRepeatability', standard, own)).toBeCloseTo((0.002 * 0.1001736) / Math.SQRT2, 6);
+    expect(c).toBe(0.1);
+  });
+});
+
 describe('shown', () => {
   const shown = (ffa: string, tolerance: string): string | undefined =>
     uncertainty(certified(ffa), site({ figures: { certificateTolerance: tolerance } }), 'freeFattyAcid')?.shown;

@@ -109,7 +109,9 @@ export abstract class LotElement extends GuestElement {
   }
 
   protected reading(key: string): ReadingJson | undefined {
-    return this.lot?.readings[key];
+    const readings = this.lot?.readings;
+    // a key such as `constructor` names nothing
+    return readings && Object.hasOwn(readings, key) ? readings[key] : undefined;
   }
 
   protected edit(edit: Edit): void {
