@@ -150,9 +150,8 @@ export class EsterwayTitration extends SectionElement {
         ${from === 'certificate-ffa' ? this.figureField(`${this.keyPrefix}certificateFfa`, ['%']) : nothing}
         ${from === 'titration' && !this.retest ? this.strengthAndBlank() : nothing}
       </div>
-      ${from === 'titration' ? this.bench() : nothing}
       ${from === 'titration' ? this.#table.render(this.list, this.option('sampleTakenBy') === 'volume' ? 'mL' : 'g') : nothing}
-      ${this.results()}
+      ${this.results()} ${from === 'titration' ? this.bench() : nothing}
     `;
   }
 
