@@ -11,15 +11,17 @@ import { working, workingFigure } from '../../lot/working.js';
 import type { Working } from '../../lot/working.js';
 import { printAlone } from '../parts/print.js';
 import { ReasonWords } from '../parts/reason-words.js';
-import { EsterwayCharge } from './charge.js';
-import type { RouteName } from './charge.js';
+import { ChargeLines } from './charge-lines.js';
+import type { RouteName } from './charge-lines.js';
+import { chargeStyles } from './charge-styles.js';
 
 const TEXTS = { en: enChargeSheet, de: deChargeSheet };
 
 /** The charge on paper: one page a step, to be weighed by, ticked off, checked by a second person and signed. */
-export class ChargeSheet extends EsterwayCharge {
+export class ChargeSheet extends ChargeLines {
   static override styles = [
-    ...EsterwayCharge.styles,
+    ...ChargeLines.styles,
+    chargeStyles,
     css`
       :host {
         --_size: 13px;
@@ -146,15 +148,25 @@ export class ChargeSheet extends EsterwayCharge {
     return this.route ?? this.recommended;
   }
 
+  protected override get heading(): string {
+    return this.textsOf(TEXTS).title;
+  }
+
+  protected override get summary(): string {
+    return '';
+  }
+
+  protected override body(): unknown {
+    const steps = this.lot?.charges[this.looked] ?? [];
+    return steps.map((step, i) => this.page(step, i, steps));
+  }
+
   protected override figure(key: string): TemplateResult {
     return html`${this.amountWords(key) ?? '–'}`;
   }
 
   protected override render(): unknown {
-    const { lot } = this;
-    if (!lot) return nothing;
-    const steps = lot.charges[this.looked];
-    return steps.map((step, i) => this.page(step, i, steps));
+    return this.lot ? this.body() : nothing;
   }
 
   private page(step: ChargeStep, index: number, all: readonly ChargeStep[]): TemplateResult {

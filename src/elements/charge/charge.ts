@@ -2,15 +2,10 @@ import { html, nothing } from 'lit';
 import { state } from 'lit/decorators.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import type { Verdict } from '../../decision/route.js';
-import { amountIn } from '../../exchange/amount.js';
-import { Decimal } from '../../formula/decimal.js';
-import { shownText } from '../../formula/digits.js';
-import { uncertainties } from '../../lot/uncertainty.js';
-import { fill, fillWith } from '../../locales/en.js';
-import { SectionElement } from '../parts/section.js';
+import { fill } from '../../locales/en.js';
+import { ACID_FIGURE, ChargeLines, METHANOL_FIGURE } from './charge-lines.js';
+import type { RouteName } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
-
-export type RouteName = 'direct' | 'twoStep';
 
 const after = (): unknown => html`<esterway-after bare exportparts="figure, caution, field-line, field-input"></esterway-after>`;
 const cost = (): unknown => html`<esterway-cost bare exportparts="figure, field-line, field-input"></esterway-cost>`;
@@ -18,18 +13,6 @@ const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
 
 /** What must be known for the steps to be shown. A retest that cannot be used yet takes none of its own fields away. */
 const FIRST_AMOUNT = { direct: 'direct.catalyst', twoStep: 'pass1.sulfuric' } as const;
-
-/** The figure that each typed basis of the acid step counts on. */
-const METHANOL_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
-  'per-acid': { key: 'pretreatmentMethanolPerAcid', unit: 'mol/mol' },
-  'per-oil': { key: 'pretreatmentMethanolPerOil', unit: 'mol/mol' },
-  'oil-volume': { key: 'pretreatmentMethanolShare', unit: '%' },
-};
-const ACID_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
-  'of-acid': { key: 'pretreatmentAcidOfAcid', unit: '%' },
-  'of-oil': { key: 'pretreatmentAcidOfOil', unit: '%' },
-  'oil-volume': { key: 'pretreatmentAcidShare', unit: '%' },
-};
 
 /**
  * The charge of a lot: what to weigh, in order of addition, for either route, with base and extra
@@ -52,42 +35,22 @@ const ACID_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit
  * @cssprop --esterway-amber - headings of steps and cautions
  * @cssprop --esterway-pink-soft - behind the retest
  */
-export class EsterwayCharge extends SectionElement {
-  static override styles = [...SectionElement.styles, chargeStyles];
+export class EsterwayCharge extends ChargeLines {
+  static override styles = [...ChargeLines.styles, chargeStyles];
 
   /** The route looked at, where a person has chosen one; else the one recommended. */
   @state() private chosen: RouteName | undefined;
   /** The lot and the verdict it was chosen for. */
   #chosenFor = '';
 
-  /** How well each amount of this reading is known. */
-  #spreads: ReturnType<typeof uncertainties> = {};
-  #spreadsOf: unknown;
-
-  /** Amounts that either route asks for. */
-  private get weighed(): readonly string[] {
-    const { direct = [], twoStep = [] } = this.lot?.charges ?? {};
-    return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ what, mass }) => (mass && !what.endsWith('oil') ? mass : [])));
-  }
-
-  protected get recommended(): RouteName {
-    const route = this.lot?.route;
-    const verdict = route?.verdict === 'too-close' ? route.safe : route?.verdict;
-    return verdict === 'direct' || verdict === 'not-known' ? 'direct' : 'twoStep';
-  }
-
   /** The route that is shown: the one that follows for the lot, unless a person looked at the other. */
-  get looked(): RouteName {
+  override get looked(): RouteName {
     return this.chosen ?? this.recommended;
   }
 
   /** A choice stands for one lot and one verdict. */
   protected override willUpdate(): void {
-    const { entry, site, reading } = this.desk;
-    if (reading !== this.#spreadsOf && !this.folded) {
-      this.#spreads = this.lot ? uncertainties(entry, site, this.weighed) : {};
-      this.#spreadsOf = reading;
-    }
+    super.willUpdate();
 
     const about = this.lot ? `${this.lot.route.verdict} ${this.desk.entry.name ?? ''}` : '';
     if (about !== this.#chosenFor) this.chosen = undefined;
@@ -128,10 +91,6 @@ export class EsterwayCharge extends SectionElement {
     const neither = verdict === 'outside' || verdict === 'no-acid-step';
     if (!neither && (looked === recommended || verdict === 'not-known')) return nothing;
     return html`<p class="gate small">${neither ? nothing : texts.charge.notThisRoute} ${texts.verdicts[verdict]}.</p>`;
-  }
-
-  protected known(key: string): boolean {
-    return this.reading(key)?.value !== undefined;
   }
 
   /** What the charge is worked out with: the site's, unless this lot is charged otherwise. */
@@ -186,17 +145,6 @@ export class EsterwayCharge extends SectionElement {
     `;
   }
 
-  protected titleOf(step: ChargeStep, all: readonly ChargeStep[]): string {
-    const { charge } = this.texts;
-    const passes = all.filter(({ step: kind }) => kind === 'acid').length;
-    if (step.step === 'base') return charge.baseStep;
-    return passes > 1 ? fill(charge.acidStepPass, { pass: String(step.pass), passes: String(passes) }) : charge.acidStep;
-  }
-
-  protected get hasRetest(): boolean {
-    return this.reading('retest.acidContent')?.value !== undefined;
-  }
-
   private line(line: ChargeLine, step: ChargeStep): unknown {
     if (!line.mass) return html`<li><span class="plain">${this.instruction(line)}</span></li>`;
     const how = html`${this.how(line, step)}${this.dispensed(line, step)}`;
@@ -205,95 +153,6 @@ export class EsterwayCharge extends SectionElement {
       <span class="what">${this.instruction(line, step)}</span><span class="mass">${this.figure(line.mass)}</span>
       <span class="how">${how}</span><span class="volume">${volume}${this.spread(line.mass)}</span>
     </li>`;
-  }
-
-  /** What the keys of a step begin with. */
-  private partOf({ step, pass }: ChargeStep): string {
-    return step === 'base' ? this.looked : `pass${pass}`;
-  }
-
-  /** Key of the amount in whole steps, where the site has named a step. */
-  protected dispensedKey({ what }: ChargeLine, step: ChargeStep): string | undefined {
-    const name = { methanol: 'methanolVolume', catalyst: 'catalyst', 'sulfuric-acid': 'sulfuric' }[what as string];
-    const key = `${this.partOf(step)}.dispensed.${name}`;
-    return name && this.known(key) ? key : undefined;
-  }
-
-  /** The amount that scale or meter can give, and what the rounding changes. */
-  protected dispensed({ what }: ChargeLine, step: ChargeStep): unknown {
-    const { charge } = this.texts;
-    const from = this.partOf(step);
-    const key = this.dispensedKey({ what }, step);
-    if (!key) return nothing;
-    const sentence = step.step !== 'base' ? charge.dispensed : what === 'methanol' ? charge.dispensedMethanol : charge.dispensedCatalyst;
-    const ratio = this.plain(`${from}.dispensed.methanolRatio`);
-    return html`<br />${fillWith(sentence, { amount: this.figure(key), ratio, load: this.plain(`${from}.dispensed.baseLoad`) })}`;
-  }
-
-  /** How well an amount to weigh is known, from the titration and the site's equipment. */
-  protected spread(key: string): unknown {
-    const known = this.#spreads[key];
-    const unit = this.reading(key)?.unit;
-    const expanded = known && new Decimal(known.expanded);
-    if (!expanded || expanded.isZero() || unit === undefined) return nothing;
-    const rounded = shownText(expanded, { significant: 2 });
-    const amount = amountIn(rounded, rounded, unit, this.desk.units);
-    return html` <span class="spread">± ${this.number(amount.text)}\u00a0${amount.unit}</span>`;
-  }
-
-  protected instruction({ what }: ChargeLine, step?: ChargeStep): string {
-    const { forRun } = this.texts.charge;
-    const key = what === 'oil' && step?.step === 'base' ? 'oil-direct' : what;
-    return fill(forRun[key], {
-      temperature: this.amountWords('pretreatmentTemperature') ?? '–',
-      time: this.amountWords('pretreatmentTime') ?? '–',
-      assay: this.plain({ methanol: 'methanolAssay', 'sulfuric-acid': 'sulfuricAssay', catalyst: 'catalystAssay' }[what as string] ?? ''),
-      catalyst: this.catalystName,
-    });
-  }
-
-  private get catalystName(): string {
-    const name = this.optionText('catalyst');
-    return name.charAt(0).toLocaleUpperCase(this.languageTag) + name.slice(1);
-  }
-
-  private plain(key: string): string {
-    const shown = this.reading(key)?.shown;
-    return shown === undefined ? '–' : this.number(shown.replace(/\.0+$/, ''));
-  }
-
-  /** What an amount is counted on. */
-  protected how({ what }: ChargeLine, step: ChargeStep): unknown {
-    const { charge } = this.texts;
-    if (what === 'catalyst') return this.catalystParts();
-    if (what === 'methanol' && step.step === 'base') {
-      const brought = `${this.looked}.methanolFromCatalyst`;
-      const credit = Number(this.reading(brought)?.value ?? 0) > 0;
-      const enough = Number(this.reading(`${this.looked}.methanol`)?.value ?? 1) === 0;
-      return html`${fill(charge.methanolBasis.base, { ratio: this.plain('methanolRatio') })}
-      ${credit ? html`<br />${fill(enough ? charge.methanolExceeds : charge.methanolCredit, { mass: this.amountWords(brought) ?? '' })}` : nothing}`;
-    }
-    if (what === 'methanol') {
-      const basis = this.option('pretreatmentMethanolBasis') as keyof typeof charge.methanolBasis;
-      const ratio = this.plain(METHANOL_FIGURE[basis]?.key ?? `pass${step.pass}.methanolRule`);
-      return fill(charge.methanolBasis[basis], { ratio });
-    }
-    if (what === 'sulfuric-acid') {
-      const basis = this.option('pretreatmentAcidBasis') as keyof typeof charge.acidBasis;
-      return fill(charge.acidBasis[basis], { share: this.plain(ACID_FIGURE[basis]?.key ?? `pass${step.pass}.acidRule`) });
-    }
-    return nothing;
-  }
-
-  private catalystParts(): unknown {
-    const { charge } = this.texts;
-    const { looked } = this;
-    const mineral = Number(this.reading(`${looked}.mineralPure`)?.value ?? 0) > 0;
-    const per = { perLitre: this.plain(`${looked}.catalystPerLitre`), perKilogram: this.plain(`${looked}.catalystPerKilogram`) };
-    const parts = fillWith(charge.parts, { base: this.figure(`${looked}.baseProduct`), extra: this.figure(`${looked}.extraProduct`) });
-    return html`${parts}
-    ${mineral ? html`<br />${fillWith(charge.mineral, { mass: this.figure(`${looked}.mineralProduct`) })}` : nothing}
-    <br />${fill(charge.perLitre, per)}`;
   }
 
   private cautions(step: ChargeStep): unknown {
