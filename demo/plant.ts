@@ -7,7 +7,7 @@ export const plant: SiteProfile = {
   version: 1,
   name: 'Quillmarsh Oil Recovery',
   figures: {
-    vesselVolume: { text: '2000', unit: 'L' },
+    vesselVolume: { text: '2500', unit: 'L' },
     methanolStep: { text: '1', unit: 'L' },
     catalystStep: { text: '50', unit: 'g' },
     sulfuricStep: { text: '50', unit: 'g' },

@@ -31,7 +31,7 @@ export const deNotices: Texts['notices'] = {
   'titre-above-burette': 'Bestimmung {run}: Die Bürette fasst {capacity} mL. Weniger Probe oder stärkere Maßlösung nehmen, oder die Bürette in den Betriebsvorgaben ändern.',
   'portion-unusual': 'Bestimmung {run}: Bei einer Säurezahl um {acidValue} sieht die Methode etwa {wanted} g vor, nicht {mass} g. Einwaage prüfen oder neu einwägen.',
   'strength-perhaps-grams': '{strength} mol/L sind ungewöhnlich; der Wert passt zu g/L. Einheit prüfen.',
-  'strength-perhaps-moles': '{strength} mol/L sind ungewöhnlich; der Wert passt zu mol/L. Einheit prüfen.',
+  'strength-perhaps-moles': '{strength} g/L sind ungewöhnlich; der Wert passt zu mol/L. Einheit prüfen.',
   'strength-unlikely': '{strength} mol/L sind ungewöhnlich: Maßlösungen liegen zwischen 0,01 und 1,5 mol/L. Wert und Einheit prüfen.',
   'blank-large': 'Der Blindwert macht {share} % des Verbrauchs aus. Lösemittel neutralisieren oder frisches nehmen.',
   'titrant-old': 'Titer vor {days} Tagen gestellt; zulässig sind hier {limit}. Neu stellen.',

@@ -29,7 +29,7 @@ export const enNotices = {
   'titre-above-burette': 'Run {run}: the burette holds {capacity} mL. Take less sample or a stronger titrant, or set the burette in the site values.',
   'portion-unusual': 'Run {run}: the method takes about {wanted} g for an acid value near {acidValue}, not {mass} g. Check the balance reading, or weigh anew.',
   'strength-perhaps-grams': '{strength} mol/L is unusual; the figure fits g/L. Check the unit.',
-  'strength-perhaps-moles': '{strength} mol/L is unusual; the figure fits mol/L. Check the unit.',
+  'strength-perhaps-moles': '{strength} g/L is unusual; the figure fits mol/L. Check the unit.',
   'strength-unlikely': '{strength} mol/L is unusual: titrants lie between 0.01 and 1.5 mol/L. Check figure and unit.',
   'blank-large': 'The blank is {share} % of the titre. Neutralise the solvent, or use fresh solvent.',
   'titrant-old': 'The titrant was standardised {days} days before; this site allows {limit}. Standardise it again.',

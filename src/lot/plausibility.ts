@@ -77,7 +77,7 @@ function titrant(site: SiteProfile, entry: LotEntry, { givens, runs: { titrant: 
     const inGrams = find('titrantMassStrength') !== undefined && from === 'label';
     const meant = inGrams ? strength.times(molarMass) : strength.div(molarMass);
     const code = from !== 'label' || unusual(meant) ? 'strength-unlikely' : inGrams ? 'strength-perhaps-moles' : 'strength-perhaps-grams';
-    say(code, 'titrantStrength', { strength });
+    say(code, 'titrantStrength', { strength: code === 'strength-perhaps-moles' ? meant : strength });
   }
   const purity = find('khpPurity');
   if (from !== 'standardised') return;

@@ -131,11 +131,18 @@ describe('a blank', () => {
   });
 });
 
+it('a strength in the unit that it does not fit is told as it was typed', () => {
+  const told = (titrantStrength: string): number => Number(noticesOf(titrated('2.5', '4', { titrantStrength }), undefined).find(({ code }) => code.startsWith('strength-perhaps'))?.params?.['strength']);
+  expect(told('0.1 g/L')).toBeCloseTo(0.1, 12);
+  expect(told('5.6 mol/L')).toBeCloseTo(5.6, 12);
+});
+
 it('a standardisation of tomorrow says so, and not that it is old', () => {
   expect(noticesOf(noStrength, standardised('2026-03-11')).map(({ code, quantity }) => [code, quantity])).toEqual([['date-in-future', 'titrantDate']]);
 });
 
 it('the plant’s own lots raise none but what is meant', () => {
-  const codes = deliveries.map(({ id, entry }) => [id, noticesOf(entry, plant).filter(({ quantity }) => !quantity.startsWith('direct.')).map(({ code }) => code)]);
-  expect(codes).toEqual([['clean', []], ['borderline', []], ['sour', []], ['nonsense', []]]);
+  const codes = deliveries.map(({ id, entry }) => [id, noticesOf(entry, plant).map(({ code }) => code)]);
+  // The sour lot is too acid for the direct route, whose soap and water say so.
+  expect(codes).toEqual([['clean', []], ['borderline', []], ['sour', ['batch-too-wet', 'soap-above-limit']], ['nonsense', []]]);
 });
