@@ -6,8 +6,9 @@ import { degreeCelsius, gramPerMillilitre, hour, kilogram, litre, minute, mole, 
 import { conversion } from './base-charge.js';
 import { catalystAssay, catalystMolarMass, methanolInRest, soapGain, waterInRest, waterPerCatalyst } from './catalyst.js';
 import { acidVolumeOf, neutralisingAssay, neutralisingEquivalents, neutralisingMolarMass, splittingEquivalents } from './neutralising.js';
-import { methanolAssay, methanolDensity } from './methanol.js';
+import { METHANOL_BOILS_AT, methanolAssay, methanolDensity } from './methanol.js';
 import { insolubles, oilDensity, oilMass, oilVolume } from './oil.js';
+import type { RouteName } from './route-name.js';
 import { PRACTICE, STOICHIOMETRY } from './sources.js';
 import { M_METHANOL, M_SULFURIC } from './substances.js';
 
@@ -16,7 +17,7 @@ import { M_METHANOL, M_SULFURIC } from './substances.js';
 /** The hold of the base step, as the site runs it. */
 export const reactionTemperature = quantity({
   key: 'reactionTemperature', symbol: 't_r', unit: degreeCelsius, digits: { decimals: 1 },
-  limits: [limit('atLeast', '0', 'out-of-range'), limit('below', '64.7', 'above-boiling-point')],
+  limits: [limit('atLeast', '0', 'out-of-range'), limit('below', METHANOL_BOILS_AT, 'above-boiling-point')],
 });
 export const reactionTime = quantity({
   key: 'reactionTime', symbol: 't_hold', unit: minute, digits: { decimals: 0 },
@@ -52,7 +53,7 @@ export const saltDensity = density('saltDensity', 'ρ_salt');
  * @param route prefix of the base step's keys
  * @param methanolInFeed methanol that the oil brings from the acid step, mol
  */
-export function afterReaction(route: 'direct' | 'twoStep', methanolInFeed: Expression): readonly Quantity[] {
+export function afterReaction(route: RouteName, methanolInFeed: Expression): readonly Quantity[] {
   const make = (name: string, symbol: string, is: Operand, more: Partial<QuantityDefinition> = {}): Quantity =>
     quantity({ key: `after.${route}.${name}`, symbol, unit: kilogram, cites: [STOICHIOMETRY], ...more, is });
   const of = (name: string): Expression => named(`${route}.${name}`);

@@ -8,6 +8,7 @@ import { catalyst, catalystAssay, catalystBaseLoad, catalystMolarMass, methanolI
 import type { Glycerides } from './glycerides.js';
 import { methanolAssay, methanolDensity, methanolRatio } from './methanol.js';
 import { oilDensity, oilMass, oilVolume } from './oil.js';
+import type { RouteName } from './route-name.js';
 import { PRACTICE, STOICHIOMETRY } from './sources.js';
 import { M_GLYCEROL, M_METHANOL, M_METHYLENE, M_WATER } from './substances.js';
 
@@ -44,7 +45,7 @@ export interface BaseFeed {
  *
  * @param route prefix of the keys
  */
-export function baseCharge(route: 'direct' | 'twoStep', feed: BaseFeed, { content, acidMolarMass: meanAcid }: Glycerides): readonly Quantity[] {
+export function baseCharge(route: RouteName, feed: BaseFeed, { content, acidMolarMass: meanAcid }: Glycerides): readonly Quantity[] {
   const make = (name: string, symbol: string, is: Operand, more: Partial<QuantityDefinition> = {}): Quantity =>
     quantity({ key: `${route}.${name}`, symbol, unit: kilogram, cites: [STOICHIOMETRY], ...more, is });
   const assayed = (pure: Expression): Expression => pure.per(catalystAssay).in(kilogram);

@@ -7,12 +7,11 @@ import { acidMolarMass } from './acidity.js';
 import { passes } from './after-pretreatment.js';
 import { oilMass } from './oil.js';
 import * as price from './prices.js';
+import type { RouteName } from './route-name.js';
 import { COSTING, STOICHIOMETRY } from './sources.js';
 import { M_METHYLENE } from './substances.js';
 
 // What a route costs, a batch and a tonne of oil. A part without its price is not known; the totals count the parts that have one.
-
-type RouteName = 'direct' | 'twoStep';
 
 /** A price or rate, and whether it is given: what has none is left out of the totals. */
 interface Rate {

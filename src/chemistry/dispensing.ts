@@ -5,6 +5,7 @@ import type { Quantity, QuantityDefinition } from '../formula/quantity.js';
 import { kilogram, litre, molePerMole, percent } from '../formula/units.js';
 import { catalystAssay, methanolInRest } from './catalyst.js';
 import { methanolAssay, methanolDensity } from './methanol.js';
+import type { RouteName } from './route-name.js';
 import { STOICHIOMETRY } from './sources.js';
 import { M_METHANOL } from './substances.js';
 
@@ -28,7 +29,7 @@ const dispensed = (step: string): Dispensed => (name, symbol, is, more = {}) =>
   quantity({ key: `${step}.dispensed.${name}`, symbol, unit: kilogram, cites: [STOICHIOMETRY], ...more, is });
 
 /** The base step's amounts in whole steps, and the methanol ratio and base load that they make. */
-export function dispensedBase(route: 'direct' | 'twoStep'): readonly Quantity[] {
+export function dispensedBase(route: RouteName): readonly Quantity[] {
   const make = dispensed(route);
   const of = (name: string): Expression => named(`${route}.${name}`);
   const methanolVolume = make('methanolVolume', 'V_M,s', nearest(of('methanolVolume'), methanolStep), { unit: litre });

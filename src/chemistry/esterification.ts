@@ -3,6 +3,7 @@ import type { Expression } from '../formula/expression.js';
 import { limit, quantity } from '../formula/quantity.js';
 import type { Quantity } from '../formula/quantity.js';
 import { degreeCelsius, joulePerMole, joulePerMoleKelvin, kelvin, minute, one, perMinute, percent } from '../formula/units.js';
+import { METHANOL_BOILS_AT } from './methanol.js';
 import { ESTERIFICATION_EQUILIBRIUM, ESTERIFICATION_RATE, GAS_CONSTANT, PRACTICE, WATER_INHIBITION } from './sources.js';
 
 // How far the acid step gets: an equilibrium and a first-order approach to it. Published results
@@ -14,7 +15,7 @@ export type Pace = (typeof PACES)[number];
 
 export const pretreatmentTemperature = quantity({
   key: 'pretreatmentTemperature', symbol: 't_est', unit: degreeCelsius, cites: [PRACTICE], digits: { decimals: 1 },
-  limits: [limit('atLeast', '0', 'out-of-range'), limit('below', '64.7', 'above-boiling-point')],
+  limits: [limit('atLeast', '0', 'out-of-range'), limit('below', METHANOL_BOILS_AT, 'above-boiling-point')],
 });
 export const pretreatmentTime = quantity({
   key: 'pretreatmentTime', symbol: 't_min', unit: minute, cites: [PRACTICE], digits: { decimals: 0 },

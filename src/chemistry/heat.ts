@@ -1,12 +1,13 @@
-import { constant, named } from '../formula/expression.js';
+import { named } from '../formula/expression.js';
 import type { Expression, Operand } from '../formula/expression.js';
 import { limit, quantity } from '../formula/quantity.js';
 import type { Quantity, QuantityDefinition } from '../formula/quantity.js';
 import { degreeCelsius, kelvin, kilojoule, kilojoulePerKilogramKelvin, kilojoulePerMole, mole } from '../formula/units.js';
 import { CATALYST_PRODUCTS, catalyst, perProduct } from './catalyst.js';
-import { methanolTemperature } from './methanol.js';
+import { methanolBoilingPoint, methanolTemperature } from './methanol.js';
 import { oilMass } from './oil.js';
-import { ENERGY_BALANCE, HEAT_IN_WATER, METHANOL_BOILING } from './sources.js';
+import type { RouteName } from './route-name.js';
+import { ENERGY_BALANCE, HEAT_IN_WATER } from './sources.js';
 import { M_SULFURIC } from './substances.js';
 
 // How warm dissolving the catalyst in the methanol, or pouring in the sulfuric acid, would make the mixture if nothing were
@@ -31,11 +32,6 @@ const capacity = (key: string, symbol: string): Quantity =>
 export const methanolHeatCapacity = capacity('methanolHeatCapacity', 'c_M');
 export const oilHeatCapacity = capacity('oilHeatCapacity', 'c_oil');
 
-export const methanolBoilingPoint = quantity({
-  key: 'methanolBoilingPoint', symbol: 't_boil', unit: degreeCelsius, cites: [METHANOL_BOILING], digits: { decimals: 1 },
-  is: constant('64.7', degreeCelsius, { source: METHANOL_BOILING }),
-});
-
 const HEAT = { cites: [ENERGY_BALANCE, HEAT_IN_WATER], digits: { decimals: 0 } } as const;
 const maker = (step: string) => (name: string, symbol: string, is: Operand, more: Partial<QuantityDefinition> = {}): Quantity =>
   quantity({ key: `heat.${step}.${name}`, symbol, unit: kelvin, ...HEAT, ...more, is });
@@ -47,7 +43,7 @@ const endOf = (make: ReturnType<typeof maker>, by: Expression): readonly Quantit
 };
 
 /** Dissolving the base step's catalyst in its methanol. A margin below zero: it would come to the boil. */
-export function methoxideHeat(route: 'direct' | 'twoStep'): readonly Quantity[] {
+export function methoxideHeat(route: RouteName): readonly Quantity[] {
   const make = maker(route);
   const heat = make('heat', 'Q', named(`${route}.catalystAmount`).times(catalystHeat), { unit: kilojoule });
   const by = make('rise', 'ΔT', rise(heat, named(`${route}.methanol`).plus(named(`${route}.catalyst`))));

@@ -1,7 +1,7 @@
 import { constant } from '../formula/expression.js';
 import { limit, quantity } from '../formula/quantity.js';
 import { degreeCelsius, gramPerMillilitre, gramPerMillilitreDegree, molePerMole, percent } from '../formula/units.js';
-import { METHANOL_DENSITY, METHANOL_RATIO } from './sources.js';
+import { METHANOL_BOILING, METHANOL_DENSITY, METHANOL_RATIO } from './sources.js';
 
 // Methanol as it is bought, and how much of it the base step gets.
 
@@ -13,6 +13,14 @@ export const methanolAssay = quantity({
 export const methanolTemperature = quantity({
   key: 'methanolTemperature', symbol: 't_M', unit: degreeCelsius, digits: { decimals: 1 },
   limits: [limit('atLeast', '-20', 'out-of-range'), limit('atMost', '60', 'out-of-range')],
+});
+
+/** °C, at 1 atm. */
+export const METHANOL_BOILS_AT = '64.7';
+
+export const methanolBoilingPoint = quantity({
+  key: 'methanolBoilingPoint', symbol: 't_boil', unit: degreeCelsius, cites: [METHANOL_BOILING], digits: { decimals: 1 },
+  is: constant(METHANOL_BOILS_AT, degreeCelsius, { source: METHANOL_BOILING }),
 });
 
 export const methanolDensity = quantity({

@@ -19,6 +19,9 @@ const LIQUID = ['acetic', 'acetic-80', 'vinegar', 'phosphoric', 'hydrochloric'] 
 export const ACID_PRODUCTS = ['acetic', 'acetic-80', 'vinegar', 'phosphoric', 'citric', 'hydrochloric'] as const;
 type Product = (typeof ACID_PRODUCTS)[number];
 
+/** The product that is bought for an option of `neutralisingAcid`, whatever salt it is taken to. */
+export const acidProduct = (option: string): string => option.replace(/-(di|mono)hydrogen$/, '');
+
 /** A site value that each product has for itself, e.g. `phosphoric.assay`. */
 export const perAcid = <const Name extends Product>(products: readonly Name[], make: (product: Name) => Quantity): Readonly<Record<Name, Quantity>> =>
   Object.fromEntries(products.map((product) => [product, make(product)])) as Record<Name, Quantity>;

@@ -1,3 +1,5 @@
+import type { RouteName } from '../chemistry/route-name.js';
+
 /** What goes into the vessel, or is done with it. */
 export type ChargeWhat = 'oil' | 'pretreated-oil' | 'methanol' | 'sulfuric-acid' | 'catalyst' | 'mix-methoxide' | 'cool' | 'settle' | 'retest';
 
@@ -48,7 +50,7 @@ export function twoStepCharge(passes: number): readonly ChargeStep[] {
   return [...acidSteps, baseStep('twoStep', [{ what: 'pretreated-oil', mass: 'pretreated.mass' }])];
 }
 
-const baseStep = (route: 'direct' | 'twoStep', oil: readonly ChargeLine[]): ChargeStep => ({
+const baseStep = (route: RouteName, oil: readonly ChargeLine[]): ChargeStep => ({
   step: 'base',
   lines: [
     ...oil,

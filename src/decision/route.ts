@@ -1,3 +1,4 @@
+import type { RouteName } from '../chemistry/route-name.js';
 import { Decimal, decimal } from '../formula/decimal.js';
 import { isKnown } from '../formula/reading.js';
 import type { Outcome } from '../formula/reading.js';
@@ -32,6 +33,12 @@ export interface Route {
   /** In a close call: the limit, % FFA, and the probability that the true FFA is at or below it, 0 to 1. */
   readonly odds?: { readonly limit: string; readonly below: string };
   readonly reasons: readonly Reason[];
+}
+
+/** The route to charge by: the one of the verdict, in a close call the safe one; the acid step wherever the direct route does not do. */
+export function chargedRoute({ verdict, safe }: Pick<Route, 'verdict' | 'safe'>): RouteName {
+  const taken = verdict === 'too-close' ? safe : verdict;
+  return taken === 'direct' || taken === 'not-known' ? 'direct' : 'twoStep';
 }
 
 /** What the route is decided on; shares in per cent. */

@@ -1,4 +1,4 @@
-import { fill } from './en.js';
+import { fill } from './fill.js';
 import type { Texts } from './en.js';
 
 type Words = Readonly<Record<string, string>>;

@@ -1,3 +1,4 @@
+import type { RouteName } from '../chemistry/route-name.js';
 import { directCharge, twoStepCharge } from '../decision/charge.js';
 import { walk } from '../formula/expression.js';
 import type { Constant } from '../formula/expression.js';
@@ -34,7 +35,7 @@ export interface CheckedAmount {
 const PREDICTED = /^pretreated\.(acidLeft|methanolLeft|waterLeft)|^pass\d\.acidLeft/;
 
 /** @param write how figures are written, for the page's language */
-export function checkSheet(entry: LotEntry, site: SiteProfile, route: 'direct' | 'twoStep', write: WriteFigure): CheckSheet {
+export function checkSheet(entry: LotEntry, site: SiteProfile, route: RouteName, write: WriteFigure): CheckSheet {
   const { sheet, plan, findings } = lotRun(entry, site);
   const opened = new Map<string, Working>();
   const open = (key: string): Working => {
@@ -80,7 +81,7 @@ export function checkSheet(entry: LotEntry, site: SiteProfile, route: 'direct' |
   };
 }
 
-function amountsOf(route: 'direct' | 'twoStep', passes: number): readonly string[] {
+function amountsOf(route: RouteName, passes: number): readonly string[] {
   const charge = route === 'direct' ? directCharge() : twoStepCharge(passes);
   const lines = charge.flatMap(({ lines: all }) => all.flatMap(({ what, mass, volume }) => [
     ...(what === 'catalyst' ? [`${route}.baseProduct`, `${route}.extraProduct`] : []),

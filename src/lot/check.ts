@@ -38,7 +38,7 @@ function check<Document extends object>(empty: Document, value: unknown, shape: 
 }
 
 const MOST_TEXT = 10_000;
-const MOST_RUNS = 20;
+export const MOST_RUNS = 20;
 
 /** Looks at a value and adds what is wrong with it. */
 type Check = (value: unknown, path: string, faults: Fault[]) => void;

@@ -6,7 +6,7 @@ import { isKnown } from '../formula/reading.js';
 import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
 import type { Figure } from './figure.js';
 import { lotRun } from './lot-run.js';
-import { uncertaintyOf } from './uncertainty.js';
+import { COVERAGE_FACTOR, uncertaintyOf } from './uncertainty.js';
 
 /** Titrants that methods and the trade keep, mol/L. */
 const USUAL_STRENGTHS = ['0.01', '0.02', '0.05', '0.1', '0.25', '0.5', '1'];
@@ -88,7 +88,7 @@ function expandedFor(entry: LotEntry, site: SiteProfile, portion: Decimal, titre
   const { blank: _, ...figures } = entry.figures;
   const planned = { ...entry, options, figures, runs: Array.from({ length: RUNS }, () => run), retestRuns: [] };
   const found = uncertaintyOf(lotRun(planned, site), 'acidValue');
-  return 'budget' in found ? found.u.times(2) : undefined;
+  return 'budget' in found ? found.u.times(COVERAGE_FACTOR) : undefined;
 }
 
 const figure = (value: Decimal, unit: string): Figure => ({ text: value.toFixed(6), unit });

@@ -8,6 +8,7 @@ import { deCost } from '../../src/locales/de-cost.js';
 import { enAfter } from '../../src/locales/en-after.js';
 import { enCost } from '../../src/locales/en-cost.js';
 import '../../src/more.js';
+import { fieldName } from '../../src/locales/quantity-name.js';
 import type { EsterwayAfter, EsterwayCost } from '../../src/more.js';
 import { choose, click, controls, enter, find, openPart, place, select, words } from './tools/page.js';
 import { certified, clean, lot, site, sour } from './tools/lots.js';
@@ -64,6 +65,12 @@ const priced = site({
 });
 
 describe('cost of both routes', () => {
+  test('names every price that the totals leave out', async () => {
+    const left = /Without a price, and left out: ([^.]*)\./.exec(words(await placeCost(sour, site({ figures: { oilPrice: '600 ¤/t' } }))))?.[1] ?? '';
+    for (const field of ['methanolPrice', 'KOH.price', 'sulfuricPrice', 'energyPrice', 'esterPrice']) expect(left).toContain(fieldName(field, en));
+    expect(left).not.toContain(fieldName('oilPrice', en));
+  });
+
   test('is told part by part, with the difference and where it changes sign', async () => {
     const element = await placeCost(certified('4'), priced);
     const text = words(element);

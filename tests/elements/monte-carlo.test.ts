@@ -23,7 +23,6 @@ class CheckSection extends SectionElement {
     entry: () => this.desk.entry, site: () => this.desk.site, texts: () => this.textsOf({ en: enMonteCarlo, de: deMonteCarlo }), number: (text) => this.number(text),
   });
   protected override heading = 'Check';
-  protected override summary = '';
   protected override body = () => this.#check.render(this.of);
 }
 

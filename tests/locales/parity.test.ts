@@ -8,7 +8,8 @@ import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../src/lot/defaults.js';
 import { KNOWN_KEYS, fieldOf } from '../../src/lot/keys.js';
 import { NOTICE_CODES } from '../../src/lot/lot-reading.js';
 import { de } from '../../src/locales/de.js';
-import { en, fill } from '../../src/locales/en.js';
+import { en } from '../../src/locales/en.js';
+import { fill } from '../../src/locales/fill.js';
 import type { Texts } from '../../src/locales/en.js';
 import { fieldLabel, fieldName, quantityName } from '../../src/locales/quantity-name.js';
 

@@ -1,9 +1,11 @@
 import { css, html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
+import { acidProduct } from '../../chemistry/neutralising.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import { Decimal } from '../../formula/decimal.js';
 import { deAfter } from '../../locales/de-after.js';
 import { enAfter } from '../../locales/en-after.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { DEFAULT_FIGURES } from '../../lot/defaults.js';
 import { FurtherReadings } from '../parts/further-readings.js';
 
@@ -58,10 +60,6 @@ export class EsterwayAfter extends FurtherReadings {
     return this.textsOf(TEXTS).title;
   }
 
-  protected override get summary(): string {
-    return '';
-  }
-
   protected override get further(): readonly string[] {
     const after = ['acid', 'acidVolume', 'splitAcid', 'splitVolume', 'upperMass', 'upperVolume', 'lowerMass', 'lowerVolume', 'lowerShare'];
     return [
@@ -72,7 +70,7 @@ export class EsterwayAfter extends FurtherReadings {
 
   protected override body(): unknown {
     const texts = this.textsOf(TEXTS);
-    const { route } = this;
+    const route = this.recommended;
     const words = (key: string): string => this.amountWords(key) ?? '–';
     const known = this.reading(`after.${route}.acid`)?.value !== undefined;
     return html`
@@ -92,18 +90,17 @@ export class EsterwayAfter extends FurtherReadings {
   }
 
   private pair(name: string, mass: string, volume: string): TemplateResult {
-    const liquid = Number(this.reading(volume)?.value ?? 0) > 0;
-    return html`<dt>${name}</dt><dd>${this.figure(mass)}</dd><dd>${liquid ? this.figure(volume) : nothing}</dd>`;
+    return html`<dt>${name}</dt><dd>${this.figure(mass)}</dd><dd>${this.aboveZero(volume) ? this.figure(volume) : nothing}</dd>`;
   }
 
   /** Assay and density of the acid in use. */
   private acidFields(): unknown {
-    const product = this.option('neutralisingAcid').replace(/-(di|mono)hydrogen$/, '');
+    const product = acidProduct(this.option('neutralisingAcid'));
     return ['assay', 'strength', 'density'].map((name) => `${product}.${name}`).filter((key) => key in DEFAULT_FIGURES)
       .map((key) => this.figureField(key, [DEFAULT_FIGURES[key]?.unit ?? '']));
   }
 
-  private heat(route: 'direct' | 'twoStep'): unknown {
+  private heat(route: RouteName): unknown {
     const texts = this.textsOf(TEXTS);
     const margin = this.reading(`heat.${route}.margin`)?.value;
     if (margin === undefined) return this.reading(`${route}.catalyst`)?.value === undefined ? nothing : html`<p class="quiet">${texts.heatUnknown}</p>`;

@@ -1,13 +1,12 @@
 import { html, nothing } from 'lit';
+import type { RouteName } from '../../chemistry/route-name.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import { amountIn } from '../../exchange/amount.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
-import { fill, fillWith } from '../../locales/en.js';
+import { fill, fillWith } from '../../locales/fill.js';
 import { uncertainties } from '../../lot/uncertainty.js';
 import { SectionElement } from '../parts/section.js';
-
-export type RouteName = 'direct' | 'twoStep';
 
 /** The figure that each typed basis of the acid step counts on. */
 export const METHANOL_FIGURE: Readonly<Record<string, { readonly key: string; readonly unit: string }>> = {
@@ -31,12 +30,6 @@ export abstract class ChargeLines extends SectionElement {
   private get weighed(): readonly string[] {
     const { direct = [], twoStep = [] } = this.lot?.charges ?? {};
     return [...direct, ...twoStep].flatMap(({ lines }) => lines.flatMap(({ what, mass }) => (mass && !what.endsWith('oil') ? mass : [])));
-  }
-
-  protected get recommended(): RouteName {
-    const route = this.lot?.route;
-    const verdict = route?.verdict === 'too-close' ? route.safe : route?.verdict;
-    return verdict === 'direct' || verdict === 'not-known' ? 'direct' : 'twoStep';
   }
 
   /** The route that is shown. */
@@ -126,7 +119,7 @@ export abstract class ChargeLines extends SectionElement {
     if (what === 'catalyst') return this.catalystParts();
     if (what === 'methanol' && step.step === 'base') {
       const brought = `${this.looked}.methanolFromCatalyst`;
-      const credit = Number(this.reading(brought)?.value ?? 0) > 0;
+      const credit = this.aboveZero(brought);
       const enough = Number(this.reading(`${this.looked}.methanol`)?.value ?? 1) === 0;
       return html`${fill(charge.methanolBasis.base, { ratio: this.plain('methanolRatio') })}
       ${credit ? html`<br />${fill(enough ? charge.methanolExceeds : charge.methanolCredit, { mass: this.amountWords(brought) ?? '' })}` : nothing}`;
@@ -146,7 +139,7 @@ export abstract class ChargeLines extends SectionElement {
   private catalystParts(): unknown {
     const { charge } = this.texts;
     const { looked } = this;
-    const mineral = Number(this.reading(`${looked}.mineralPure`)?.value ?? 0) > 0;
+    const mineral = this.aboveZero(`${looked}.mineralPure`);
     const per = { perLitre: this.plain(`${looked}.catalystPerLitre`), perKilogram: this.plain(`${looked}.catalystPerKilogram`) };
     const parts = fillWith(charge.parts, { base: this.figure(`${looked}.baseProduct`), extra: this.figure(`${looked}.extraProduct`) });
     return html`${parts}

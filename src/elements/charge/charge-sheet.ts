@@ -1,18 +1,17 @@
 import { css, html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
-import type { Decimal } from '../../formula/decimal.js';
-import type { Unit } from '../../formula/unit.js';
 import { deChargeSheet } from '../../locales/de-charge-sheet.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { enChargeSheet } from '../../locales/en-charge-sheet.js';
-import { working, workingFigure } from '../../lot/working.js';
+import { working } from '../../lot/working.js';
 import type { Working } from '../../lot/working.js';
+import { figureWriter } from '../parts/figure-writer.js';
 import { printAlone } from '../parts/print.js';
 import { ReasonWords } from '../parts/reason-words.js';
 import { ChargeLines } from './charge-lines.js';
-import type { RouteName } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
 
 const TEXTS = { en: enChargeSheet, de: deChargeSheet };
@@ -152,10 +151,6 @@ export class ChargeSheet extends ChargeLines {
     return this.textsOf(TEXTS).title;
   }
 
-  protected override get summary(): string {
-    return '';
-  }
-
   protected override body(): unknown {
     const steps = this.lot?.charges[this.looked] ?? [];
     return steps.map((step, i) => this.page(step, i, steps));
@@ -254,7 +249,7 @@ export class ChargeSheet extends ChargeLines {
   }
 
   private volumeOf({ volume }: ChargeLine): string | undefined {
-    return volume && Number(this.reading(volume)?.value ?? 0) > 0 ? this.amountWords(volume) : undefined;
+    return volume && this.aboveZero(volume) ? this.amountWords(volume) : undefined;
   }
 
   private cautionsOf({ cautions: codes }: ChargeStep): TemplateResult {
@@ -265,7 +260,7 @@ export class ChargeSheet extends ChargeLines {
   /** Each amount with its formula and the figures in it, to be worked out once more. */
   private formulas({ lines }: ChargeStep): TemplateResult {
     const { entry, site } = this.desk;
-    const write = (value: Decimal, unit: Unit): string => workingFigure(value, unit).replace(/^[-\d.]+/, (digits) => this.number(digits));
+    const write = figureWriter(this.languageTag);
     const opened = new Map<string, Working>();
     // with what an amount is worked out from, two steps back
     const open = (key: string, back: number): void => {

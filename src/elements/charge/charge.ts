@@ -1,10 +1,10 @@
 import { html, nothing } from 'lit';
 import { state } from 'lit/decorators.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import type { Verdict } from '../../decision/route.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { ACID_FIGURE, ChargeLines, METHANOL_FIGURE } from './charge-lines.js';
-import type { RouteName } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
 
 const after = (): unknown => html`<esterway-after bare exportparts="figure, caution, field-line, field-input"></esterway-after>`;
@@ -51,7 +51,6 @@ export class EsterwayCharge extends ChargeLines {
   /** A choice stands for one lot and one verdict. */
   protected override willUpdate(): void {
     super.willUpdate();
-
     const about = this.lot ? `${this.lot.route.verdict} ${this.desk.entry.name ?? ''}` : '';
     if (about !== this.#chosenFor) this.chosen = undefined;
     this.#chosenFor = about;
@@ -148,7 +147,7 @@ export class EsterwayCharge extends ChargeLines {
   private line(line: ChargeLine, step: ChargeStep): unknown {
     if (!line.mass) return html`<li><span class="plain">${this.instruction(line)}</span></li>`;
     const how = html`${this.how(line, step)}${this.dispensed(line, step)}`;
-    const volume = line.volume && Number(this.reading(line.volume)?.value ?? 0) > 0 ? this.figure(line.volume) : nothing;
+    const volume = line.volume && this.aboveZero(line.volume) ? this.figure(line.volume) : nothing;
     return html`<li>
       <span class="what">${this.instruction(line, step)}</span><span class="mass">${this.figure(line.mass)}</span>
       <span class="how">${how}</span><span class="volume">${volume}${this.spread(line.mass)}</span>

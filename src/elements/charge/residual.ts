@@ -1,11 +1,12 @@
 import { css, html, svg } from 'lit';
 import type { TemplateResult } from 'lit';
+import { METHANOL_BOILS_AT } from '../../chemistry/methanol.js';
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { deResidual } from '../../locales/de-residual.js';
 import { enResidual } from '../../locales/en-residual.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { residualSeries } from '../../lot/residual-series.js';
 import type { ResidualPass } from '../../lot/residual-series.js';
 import { LotElement } from '../parts/base.js';
@@ -43,7 +44,7 @@ export class ResidualPlot extends LotElement {
     const time = endOf(series);
     const words = {
       start: this.share(first?.slow ?? 0), slow: this.share(last?.slow ?? 0), fast: this.share(last?.fast ?? 0), time: this.write(time, 0),
-      target: showNumber(target.shown ?? target.value, this.languageTag), passes: String(series.length), boiling: showNumber('64.7', this.languageTag),
+      target: showNumber(target.shown ?? target.value, this.languageTag), passes: String(series.length), boiling: showNumber(METHANOL_BOILS_AT, this.languageTag),
     };
     const reached = reaches(series, Number(target.value));
     return html`

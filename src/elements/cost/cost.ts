@@ -1,11 +1,12 @@
 import { css, html, nothing, svg } from 'lit';
 import type { TemplateResult } from 'lit';
-import { outlayRates } from '../../chemistry/cost.js';
+import { acidProduct } from '../../chemistry/neutralising.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { deCost } from '../../locales/de-cost.js';
 import { enCost } from '../../locales/en-cost.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { fieldName, quantityName } from '../../locales/quantity-name.js';
 import { breakEven } from '../../lot/break-even.js';
 import type { BreakEven } from '../../lot/break-even.js';
@@ -83,10 +84,6 @@ export class EsterwayCost extends FurtherReadings {
     return this.textsOf(TEXTS).title;
   }
 
-  protected override get summary(): string {
-    return '';
-  }
-
   protected override get further(): readonly string[] {
     return [...ROUTES.flatMap((route) => [...PARTS, 'total', 'perTonne', 'yield'].map((part) => `cost.${route}.${part}`)), 'cost.difference'];
   }
@@ -110,7 +107,7 @@ export class EsterwayCost extends FurtherReadings {
 
   /** The prices that this lot's charges need, catalyst and neutralising acid as they are in use. */
   private priceFields(): readonly string[] {
-    const acid = this.option('neutralisingAcid').replace(/-(di|mono)hydrogen$/, '');
+    const acid = acidProduct(this.option('neutralisingAcid'));
     return [
       'oilPrice', 'esterPrice', 'methanolPrice', `${this.option('catalyst')}.price`, 'sulfuricPrice', ...(acid === 'sulfuric' ? [] : [`${acid}.price`]),
       'drawnOffPrice', 'lowerLayerPrice', 'energyPrice', 'energyBaseStep', 'energyAcidPass', 'hourPrice', 'hoursBaseStep', 'hoursAcidPass',
@@ -134,11 +131,11 @@ export class EsterwayCost extends FurtherReadings {
     const texts = this.textsOf(TEXTS);
     const { entry, site } = this.desk;
     const difference = this.reading('cost.difference')?.value;
-    const left = unpriced(entry, site, 'twoStep').filter((field) => !outlayRates('twoStep').includes(field));
+    const left = unpriced(entry, site, 'twoStep');
     const amount = difference === undefined ? '' : this.number(shownText(new Decimal(difference).abs(), { decimals: 2 }));
     return html`
+      ${left.length ? html`<p class="gate small">${fill(texts.unpriced, { prices: left.map((field) => fieldName(field, this.texts)).join(', ') })}</p>` : nothing}
       ${difference === undefined ? nothing : html`<p><b>${fill(difference.startsWith('-') ? texts.cheaper : texts.dearer, { difference: amount })}</b></p>`}
-      ${left.length ? html`<p class="quiet small">${fill(texts.unpriced, { prices: left.map((field) => fieldName(field, this.texts)).join(', ') })}</p>` : nothing}
     `;
   }
 
@@ -167,14 +164,20 @@ export class EsterwayCost extends FurtherReadings {
     const widest = points.at(-1)?.ffa ?? 40;
     const x = (share: number): string => (40 + (share / widest) * (WIDTH - 48)).toFixed(1);
     const y = (cost: number): string => (10 + (1 - (cost - low) / (high - low || 1)) * (HEIGHT - 40)).toFixed(1);
-    const line = (route: 'direct' | 'twoStep'): string => `M${points.map((point) => `${x(point.ffa)} ${y(point[route])}`).join(' L')}`;
-    const last = points.at(-1);
+    const line = (route: RouteName): string => `M${points.map((point) => `${x(point.ffa)} ${y(point[route])}`).join(' L')}`;
+    const [before, last] = [points.at(-2), points.at(-1)];
+    const named = (route: RouteName, words: string): unknown => {
+      if (!before || !last) return nothing;
+      // on the side of the line that its own slope leaves free
+      const free = last[route] >= before[route] ? -4 : 12;
+      return svg`<text class="end" x=${WIDTH - 8} y=${Number(y(last[route])) + free}>${words}</text>`;
+    };
     return html`<svg class="plot" viewBox="0 0 ${WIDTH} ${HEIGHT}" role="img" aria-label=${label}>
       ${ticks(high, 4).map((cost) => svg`<path class="grid" d="M40 ${y(cost)} H${WIDTH - 8}" /><text class="end" x="36" y=${Number(y(cost)) + 4}>${this.number(String(cost))}</text>`)}
       ${ticks(widest, 4).map((share) => svg`<text class="middle" x=${x(share)} y=${HEIGHT - 16}>${this.number(String(share))}</text>`)}
       <text class="end" x=${WIDTH - 8} y=${HEIGHT - 3}>% FFA</text><text x="0" y="8">¤/t</text>
       <path class="line" d=${line('direct')} /><path class="line broken" d=${line('twoStep')} />
-      ${last ? svg`<text class="end" x=${WIDTH - 8} y=${Number(y(last.direct)) - 4}>${texts.direct}</text><text class="end" x=${WIDTH - 8} y=${Number(y(last.twoStep)) + 12}>${texts.twoStep}</text>` : nothing}
+      ${named('direct', texts.direct)}${named('twoStep', texts.twoStep)}
       ${crossings.map((crossing) => svg`<path class="limit" d="M${x(Number(crossing.ffa))} 10 V${HEIGHT - 30}" />`)}
       ${ffa === undefined || ffa > widest ? nothing : svg`<path class="here" d="M${x(ffa)} 10 V${HEIGHT - 30}" /><text x=${Number(x(ffa)) + 3} y="18">${texts.here}</text>`}
       <path class="axis" d="M40 10 V${HEIGHT - 30} H${WIDTH - 8}" />

@@ -13,15 +13,16 @@ import { Decimal } from '../../formula/decimal.js';
 import { deCurve } from '../../locales/de-curve.js';
 import type { Widened } from '../../locales/en.js';
 import { enCurve } from '../../locales/en-curve.js';
+import { MOST_RUNS } from '../../lot/check.js';
 import type { RunEntry } from '../../lot/entry.js';
 import { fieldStyles } from '../parts/field-styles.js';
 import type { OptionInputEvent } from '../parts/option-field.js';
+import { plotStyles } from '../parts/plot.js';
 import { SectionElement } from '../parts/section.js';
 import { curveStyles } from './plot.js';
 import { curveFigure, curveResult, put } from './result.js';
 
 const TEXTS = { en: enCurve, de: deCurve };
-const MOST_RUNS = 20;
 /** Lines told one by one; with more of them the columns are wrong, not the lines. */
 const MOST_FAULTS = 5;
 const MOST_MEGABYTES = 5;
@@ -49,6 +50,7 @@ export class EsterwayCurve extends SectionElement {
   static override styles = [
     ...SectionElement.styles,
     fieldStyles,
+    plotStyles,
     curveStyles,
     css`
       textarea {

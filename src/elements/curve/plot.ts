@@ -33,7 +33,7 @@ export function curvePlot({ points, slopes, inflections, endPoint, gran }: Curve
   const late = Number(x(endPoint)) > (LEFT + RIGHT) / 2;
   const rises = (readings.at(-1) ?? 0) > (readings[0] ?? 0);
   return svg`
-    <svg class="curve" viewBox="0 0 240 142" role="img" aria-label=${label}>
+    <svg class="plot curve" viewBox="0 0 240 142" role="img" aria-label=${label}>
       <path class="axis" d="M${LEFT} ${READINGS.top - 6} V${BELOW.base} H${RIGHT}" />
       <path class="hill" d="M${x(first)} ${BELOW.base} L${hill} L${x(last)} ${BELOW.base} Z" />
       ${straight(gran?.acid, 'from')} ${straight(gran?.base, 'to')}
@@ -51,17 +51,7 @@ export function curvePlot({ points, slopes, inflections, endPoint, gran }: Curve
 
 export const curveStyles: CSSResult = css`
   .curve {
-    display: block;
-    inline-size: 100%;
-    max-inline-size: 30em;
-    block-size: auto;
     margin-block: 10px 2px;
-    overflow: visible;
-    direction: ltr;
-  }
-  .curve text {
-    font: 11px var(--_font);
-    fill: var(--_quiet);
   }
   .curve .said {
     font-weight: 600;
@@ -93,7 +83,6 @@ export const curveStyles: CSSResult = css`
     stroke-width: 1.6;
   }
   @media (forced-colors: active) {
-    .curve text,
     .curve .said {
       fill: CanvasText;
     }

@@ -7,7 +7,7 @@ import type { CurveReading } from '../../decision/titration-curve/titration-curv
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enCurve } from '../../locales/en-curve.js';
 import { curvePlot } from './plot.js';

@@ -1,6 +1,6 @@
 import { html } from 'lit';
 import type { TemplateResult } from 'lit';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Texts } from '../../locales/en.js';
 import type { LotFaults } from '../../lot/lot-reading.js';
 

@@ -27,10 +27,4 @@ export abstract class FurtherReadings extends SiteSectionElement {
   protected override reading(key: string): ReadingJson | undefined {
     return super.reading(key) ?? this.#further?.readings[key];
   }
-
-  /** The route that follows for the lot, or that is the safe one. */
-  protected get route(): 'direct' | 'twoStep' {
-    const { verdict, safe } = super.lot?.route ?? {};
-    return (verdict === 'too-close' ? safe : verdict) === 'direct' || verdict === undefined || verdict === 'not-known' ? 'direct' : 'twoStep';
-  }
 }

@@ -21,6 +21,11 @@ export const plotStyles = css`
   .plot text {
     font: 10px var(--_font);
     fill: var(--_quiet);
+    /* a line that runs behind words does not strike them out */
+    stroke: var(--_paper);
+    stroke-width: 3px;
+    stroke-linejoin: round;
+    paint-order: stroke;
   }
   .plot .end {
     text-anchor: end;
@@ -66,6 +71,7 @@ export const plotStyles = css`
     .plot text,
     .plot .limit-words {
       fill: CanvasText;
+      stroke: Canvas;
     }
     .plot .band {
       fill: none;

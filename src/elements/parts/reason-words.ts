@@ -2,7 +2,7 @@ import type { Reason } from '../../decision/route.js';
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Texts } from '../../locales/en.js';
 import { sourceName } from '../../locales/quantity-name.js';
 import type { ReadingJson } from '../../lot/lot-reading.js';

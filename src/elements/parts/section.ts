@@ -1,11 +1,13 @@
 import { html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
+import type { RouteName } from '../../chemistry/route-name.js';
+import { chargedRoute } from '../../decision/route.js';
 import { amountIn } from '../../exchange/amount.js';
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import type { Problem } from '../../formula/reading.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { fieldLabel, fieldName } from '../../locales/quantity-name.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { Figure } from '../../lot/figure.js';
@@ -36,8 +38,11 @@ export abstract class SectionElement extends LotElement {
 
   /** The heading's words. */
   protected abstract get heading(): string;
-  /** What the section knows, on one line. */
-  protected abstract get summary(): string;
+  /** What the section knows, on one line; nothing where it says no more than its heading. */
+  protected get summary(): string {
+    return '';
+  }
+
   /** What is folded away. */
   protected abstract body(): unknown;
 
@@ -81,14 +86,18 @@ export abstract class SectionElement extends LotElement {
 
   /** A field for an option of the lot. */
   protected optionField(key: string, wide = false): TemplateResult {
+    return this.choiceField(key, this.option(key), wide, this.problemAt(key), (option) => this.edit({ kind: 'option', key, option }));
+  }
+
+  protected choiceField(key: string, option: string, wide: boolean, problem: string | undefined, choose: (option: string) => void): TemplateResult {
     return html`<esterway-option
       class=${wide ? 'wide' : ''}
       exportparts="line: field-line, input: field-input"
       .label=${(this.texts.choices as Readonly<Record<string, string>>)[key] ?? key}
       .options=${this.optionWords(key)}
-      .value=${this.option(key)}
-      .problem=${this.problemAt(key)}
-      @option-input=${(event: OptionInputEvent) => this.edit({ kind: 'option', key, option: event.option })}
+      .value=${option}
+      .problem=${problem}
+      @option-input=${(event: OptionInputEvent) => choose(event.option)}
     ></esterway-option>`;
   }
 
@@ -111,15 +120,20 @@ export abstract class SectionElement extends LotElement {
     return entry.options[key] ?? site.options[key] ?? DEFAULT_OPTIONS[key] ?? '';
   }
 
-  /** The words of the option in force. */
-  protected optionText(key: string): string {
-    const option = this.option(key);
+  /** The words of an option, of the one in force when none is named. */
+  protected optionText(key: string, option = this.option(key)): string {
     return this.optionWords(key).find(([value]) => value === option)?.[1] ?? option;
   }
 
   /** What stands while the lot does not say: the site's figure, else the usual one. */
   protected standing(key: string): Figure | undefined {
     return this.desk.site.figures[key] ?? DEFAULT_FIGURES[key];
+  }
+
+  /** The route that the lot is charged by, unless a person looks at the other. */
+  protected get recommended(): RouteName {
+    const route = this.lot?.route;
+    return route ? chargedRoute(route) : 'direct';
   }
 
   // -- sentences ------------------------------------------------------------
@@ -190,6 +204,11 @@ export abstract class SectionElement extends LotElement {
     if (reading?.value === undefined || reading.shown === undefined) return undefined;
     const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
     return unit ? `${this.number(text)}\u00a0${unit}` : this.number(text);
+  }
+
+  /** Whether an amount is known and more than nothing. */
+  protected aboveZero(key: string): boolean {
+    return Number(this.reading(key)?.value ?? 0) > 0;
   }
 
   /** A figure that opens its working when pressed; a dash with the reason while it is not known. */

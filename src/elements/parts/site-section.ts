@@ -1,9 +1,8 @@
 import { html } from 'lit';
 import type { TemplateResult } from 'lit';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { FigureInputEvent } from './figure-field.js';
-import type { OptionInputEvent } from './option-field.js';
 import { SectionElement } from './section.js';
 
 /** Units of site figures that have no usual value, and of those that are typed in several. */
@@ -23,14 +22,7 @@ export abstract class SiteSectionElement extends SectionElement {
   }
 
   protected siteOptionField(key: string, wide = false): TemplateResult {
-    return html`<esterway-option
-      class=${wide ? 'wide' : ''}
-      exportparts="line: field-line, input: field-input"
-      .label=${(this.texts.choices as Readonly<Record<string, string>>)[key] ?? key}
-      .options=${this.optionWords(key)}
-      .value=${this.siteOption(key)}
-      @option-input=${(event: OptionInputEvent) => this.editSite({ kind: 'option', key, option: event.option })}
-    ></esterway-option>`;
+    return this.choiceField(key, this.siteOption(key), wide, undefined, (option) => this.editSite({ kind: 'option', key, option }));
   }
 
   /** A field for a figure of the site; what is usual stands in it with its source. */

@@ -1,5 +1,5 @@
 import { css, html, nothing } from 'lit';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { ReasonWords } from '../parts/reason-words.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
@@ -166,7 +166,7 @@ export class EsterwayRoute extends SectionElement {
     if (!lot || verdict === 'not-known' || !this.reading('oilMass')?.value) return nothing;
     const { route } = texts;
     const acidSteps = lot.charges.twoStep.filter(({ step }) => step === 'acid').length;
-    const mustBlend = Number(this.reading('blendOil')?.value ?? 0) > 0;
+    const mustBlend = this.aboveZero('blendOil');
     return html`
       ${verdict === 'direct'
         ? html`<p class="other"><span>${route.twoStepAllTheSame}</span><span>${fill(acidSteps === 1 ? route.onePass : route.passes, { passes: String(acidSteps) })}</span></p>`

@@ -47,7 +47,6 @@ export class EsterwayTitrant extends SiteSectionElement {
     `,
   ];
 
-
   readonly #table = new RunsTable(this, {
     runs: () => this.desk.site.titrantRuns ?? [],
     texts: () => this.texts,
@@ -62,7 +61,7 @@ export class EsterwayTitrant extends SiteSectionElement {
   }
 
   protected override get summary(): string {
-    return [this.siteWord('titrantAlkali'), this.amountWords('titrantConcentration')].filter(Boolean).join(' ');
+    return [this.optionText('titrantAlkali', this.siteOption('titrantAlkali')), this.amountWords('titrantConcentration')].filter(Boolean).join(' ');
   }
 
   protected override body(): unknown {
@@ -93,11 +92,6 @@ export class EsterwayTitrant extends SiteSectionElement {
       </div>
       ${this.#table.render('titrantRuns', 'g')}
     `;
-  }
-
-  private siteWord(key: string): string {
-    const option = this.siteOption(key);
-    return this.optionWords(key).find(([value]) => value === option)?.[1] ?? option;
   }
 
   private dateField(): TemplateResult {

@@ -3,7 +3,7 @@ import type { TemplateResult } from 'lit';
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enPlan } from '../../locales/en-plan.js';
 import type { TitrationPlan } from '../../lot/titration-plan.js';

@@ -23,10 +23,6 @@ export class PlanElement extends SectionElement {
     return this.texts.titrant.plan;
   }
 
-  protected override get summary(): string {
-    return '';
-  }
-
   protected override body(): unknown {
     const texts = this.textsOf(TEXTS);
     const { entry, site } = this.desk;

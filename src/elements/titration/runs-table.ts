@@ -2,7 +2,7 @@ import { css, html, nothing } from 'lit';
 import type { CSSResult, ReactiveController, ReactiveControllerHost, TemplateResult } from 'lit';
 import { decimalMark, showNumber } from '../../exchange/number-format.js';
 import { readNumber } from '../../exchange/number-text.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Texts } from '../../locales/en.js';
 import type { CellEdit, Edit, RunCell } from '../../lot/edit.js';
 import type { RunEntry } from '../../lot/entry.js';

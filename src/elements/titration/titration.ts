@@ -1,7 +1,7 @@
 import { css, html, nothing } from 'lit';
 import { property } from 'lit/decorators.js';
 import type { RunList } from '../../lot/keys.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { SectionElement } from '../parts/section.js';
 import { RunsTable } from './runs-table.js';
 

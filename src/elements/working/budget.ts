@@ -3,7 +3,7 @@ import type { CSSResult, TemplateResult } from 'lit';
 import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Texts } from '../../locales/en.js';
 import { sourceName } from '../../locales/quantity-name.js';
 import type { Budget } from '../../lot/uncertainty.js';

@@ -1,19 +1,18 @@
 import { css, html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property } from 'lit/decorators.js';
-import { showNumber } from '../../exchange/number-format.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import { symbolMath } from '../../formula/working-mathml.js';
 import type { MathNode } from '../../formula/working-mathml.js';
-import type { WriteFigure } from '../../formula/working-text.js';
 import { deSecondCheck } from '../../locales/de-second-check.js';
 import { enSecondCheck } from '../../locales/en-second-check.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { quantityName } from '../../locales/quantity-name.js';
 import { checkSheet } from '../../lot/check-sheet.js';
 import type { CheckedAmount } from '../../lot/check-sheet.js';
-import { workingFigure } from '../../lot/working.js';
 import type { Working } from '../../lot/working.js';
 import { LotElement } from '../parts/base.js';
+import { figureWriter } from '../parts/figure-writer.js';
 import { tokens } from '../parts/styles.js';
 import { mathElement } from './math.js';
 
@@ -109,6 +108,9 @@ export class CheckSheetElement extends LotElement {
         grid-template-columns: 1fr 1fr;
         gap: 0 30px;
         margin-block: 38px 8px;
+      }
+      .end {
+        break-before: avoid;
         break-inside: avoid;
       }
       .signatures p {
@@ -121,14 +123,14 @@ export class CheckSheetElement extends LotElement {
     `,
   ];
 
-  @property() route: 'direct' | 'twoStep' = 'direct';
+  @property() route: RouteName = 'direct';
 
   protected override render(): unknown {
     if (!this.lot) return nothing;
     const { sheet: words } = this.textsOf<typeof TEXTS.de>(TEXTS);
     const { texts } = this;
     const { entry, site } = this.desk;
-    const write: WriteFigure = (value, unit) => workingFigure(value, unit).replace(/^[-\d.]+/, (digits) => showNumber(digits, this.languageTag));
+    const write = figureWriter(this.languageTag);
     const { given, constants, steps, amounts } = checkSheet(entry, site, this.route, write);
     const facts = [[words.lot, entry.name], [words.from, entry.source], [words.date, entry.date]] as const;
     return html`
@@ -149,11 +151,13 @@ export class CheckSheetElement extends LotElement {
       </ul>
       <h2>${words.amounts}</h2>
       ${amounts.map((amount) => this.amount(amount))}
-      <div class="signatures">
-        <p>${words.checkedBy}</p>
-        <p>${words.signature}</p>
+      <div class="end">
+        <div class="signatures">
+          <p>${words.checkedBy}</p>
+          <p>${words.signature}</p>
+        </div>
+        <p class="small">${texts.cautions.defer}</p>
       </div>
-      <p class="small">${texts.cautions.defer}</p>
     `;
   }
 

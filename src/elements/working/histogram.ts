@@ -33,7 +33,7 @@ export function histogram({ from, to, counts, interval, limit, label, write }: H
     <path class="end" d="M${x(value)} ${TOP + 14} V${BASE + 5}" />
     <text x=${x(value)} y=${BASE + 17} text-anchor=${anchor}>${write(value)}</text>`;
   return svg`
-    <svg class="draws" viewBox="0 0 ${WIDTH} 106" role="img" aria-label=${label}>
+    <svg class="plot draws" viewBox="0 0 ${WIDTH} 106" role="img" aria-label=${label}>
       ${counts.map(bar)}
       <path class="axis" d="M0 ${BASE} H${WIDTH}" />
       ${end(interval[0], 'middle')} ${end(interval[1], 'middle')}
@@ -44,17 +44,7 @@ export function histogram({ from, to, counts, interval, limit, label, write }: H
 
 export const histogramStyles = css`
   .draws {
-    display: block;
-    inline-size: 100%;
-    max-inline-size: 26em;
-    block-size: auto;
     margin-block: 8px 2px;
-    overflow: visible;
-    direction: ltr;
-  }
-  .draws text {
-    font: 11px var(--_font);
-    fill: var(--_ink);
   }
   .draws .pile {
     fill: var(--_oil);
@@ -63,9 +53,6 @@ export const histogramStyles = css`
   }
   .draws .beyond {
     fill: none;
-  }
-  .draws .axis {
-    stroke: var(--_glass);
   }
   .draws .end {
     stroke: var(--_ink);
@@ -77,9 +64,6 @@ export const histogramStyles = css`
     stroke-dasharray: 4 2;
   }
   @media (forced-colors: active) {
-    .draws text {
-      fill: CanvasText;
-    }
     .draws .pile {
       fill: CanvasText;
       fill-opacity: 0.3;
@@ -88,7 +72,6 @@ export const histogramStyles = css`
     .draws .beyond {
       fill: none;
     }
-    .draws .axis,
     .draws .end {
       stroke: CanvasText;
     }

@@ -4,7 +4,7 @@ import { probabilityBelow } from '../../decision/guard.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import type { Interval } from '../../formula/sampled.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enMonteCarlo } from '../../locales/en-monte-carlo.js';
 import type { LotEntry, SiteProfile } from '../../lot/entry.js';
@@ -16,6 +16,7 @@ import type { MonteCarlo, MonteCarloOrder, Simulated } from '../../lot/monte-car
 import { uncertaintyOf } from '../../lot/uncertainty.js';
 import { drawInPage, drawInWorker } from '../parts/monte-carlo-run.js';
 import type { Drawing } from '../parts/monte-carlo-run.js';
+import { plotStyles } from '../parts/plot.js';
 import { histogram, histogramStyles } from './histogram.js';
 
 type MonteCarloTexts = Widened<typeof enMonteCarlo>;
@@ -49,6 +50,7 @@ type State =
 /** Checks the uncertainty of a result by Monte Carlo, when asked to: beside the page, or in it where the page allows no worker. */
 export class MonteCarloCheck implements ReactiveController {
   static readonly styles: readonly CSSResult[] = [
+    plotStyles,
     histogramStyles,
     css`
       .check {

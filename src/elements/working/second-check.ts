@@ -2,11 +2,12 @@ import { css, html, nothing } from 'lit';
 import type { PropertyValues } from 'lit';
 import { property, state } from 'lit/decorators.js';
 import { keyed } from 'lit/directives/keyed.js';
+import type { RouteName } from '../../chemistry/route-name.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { deSecondCheck } from '../../locales/de-second-check.js';
 import { enSecondCheck } from '../../locales/en-second-check.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import { quantityName } from '../../locales/quantity-name.js';
 import type { Figure } from '../../lot/figure.js';
 import { secondCheck } from '../../lot/second-check.js';
@@ -20,8 +21,6 @@ const TEXTS = { en: enSecondCheck, de: deSecondCheck };
 
 /** Units in which an amount worked out by hand is typed; in any other unit there is only the figure's own. */
 const UNITS: Readonly<Record<string, readonly string[]>> = { kg: ['kg', 'g', 'lb'], L: ['L', 'mL', 'US gal'] };
-
-type RouteName = 'direct' | 'twoStep';
 
 /** A second person's own figure against the tool's, and the sheet to work it out on. Stands in the working. */
 export class SecondCheckElement extends SectionElement {
@@ -68,7 +67,6 @@ export class SecondCheckElement extends SectionElement {
   #checkedFor: unknown;
 
   protected override heading = '';
-  protected override summary = '';
 
   protected override willUpdate(changed: PropertyValues<this>): void {
     if (changed.has('of')) this.typed = undefined;
@@ -172,12 +170,6 @@ export class SecondCheckElement extends SectionElement {
   }
 
   // -- paper ----------------------------------------------------------------
-
-  private get recommended(): RouteName {
-    const { verdict, safe } = this.lot?.route ?? {};
-    const taken = verdict === 'too-close' ? safe : verdict;
-    return taken === 'direct' || taken === 'not-known' ? 'direct' : 'twoStep';
-  }
 
   private paper(): unknown {
     const { words, texts } = this;

@@ -1,5 +1,6 @@
 import { de as german } from '../../../src/locales/de.js';
-import { en as english, fill as filled } from '../../../src/locales/en.js';
+import { en as english } from '../../../src/locales/en.js';
+import { fill as filled } from '../../../src/locales/fill.js';
 import type { Texts } from '../../../src/locales/en.js';
 
 export type { Texts } from '../../../src/locales/en.js';

@@ -1,0 +1,10 @@
+/** Puts figures and words into a sentence. */
+export function fill(text: string, params: Readonly<Record<string, string>>): string {
+  // neither a per cent sign nor a degree stands alone at the start of a line
+  return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole).replace(/ (?=[%°])/g, '\u00a0');
+}
+
+/** The same with parts of a page put in: the words between them, and the parts, in order. */
+export function fillWith<Part>(text: string, parts: Readonly<Record<string, Part>>): readonly (string | Part)[] {
+  return text.split(/\{(\w+)\}/).map((piece, i) => (i % 2 ? (parts[piece] ?? `{${piece}}`) : piece));
+}
