@@ -1,7 +1,7 @@
 /** Puts figures and words into a sentence. */
 export function fill(text: string, params: Readonly<Record<string, string>>): string {
-  // neither a per cent sign nor a degree stands alone at the start of a line
-  return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole).replace(/ (?=[%°])/g, '\u00a0');
+  // a figure keeps its per cent sign, its degree and its ± on the same line
+  return text.replace(/\{(\w+)\}/g, (whole, name: string) => params[name] ?? whole).replace(/ (?=[%°])|(?<=±) /g, '\u00a0');
 }
 
 /** The same with parts of a page put in: the words between them, and the parts, in order. */
