@@ -21,6 +21,7 @@ const runtime = [
   '@lit/context',
   'decimal.js',
   'simple-statistics',
+  'yalps',
 ];
 
 const shared: UserConfig = {
@@ -90,7 +91,7 @@ const builds: Record<string, () => UserConfig> = {
         formats: ['es'],
       },
       rolldownOptions: {
-        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics'],
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps'],
         output: {
           preserveModules: true,
           preserveModulesRoot: at('./src'),

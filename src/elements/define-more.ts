@@ -1,4 +1,5 @@
 import { EsterwayAfter } from './after/after.js';
+import { EsterwayBlend } from './blend/blend.js';
 import { ChargeSheet } from './charge/charge-sheet.js';
 import { ResidualPlot } from './charge/residual.js';
 import { EsterwayCost } from './cost/cost.js';
@@ -14,6 +15,7 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-curve', EsterwayCurve],
   ['esterway-after', EsterwayAfter],
   ['esterway-cost', EsterwayCost],
+  ['esterway-blend', EsterwayBlend],
   ['esterway-plan', PlanElement],
   ['esterway-residual', ResidualPlot],
   ['esterway-charge-sheet', ChargeSheet],

@@ -25,7 +25,8 @@ export function checkSiteProfile(value: unknown, keys: KnownKeys): SiteProfile |
   return check({ ...EMPTY_SITE }, value, { ...shared(keys), titrantRuns: runs(), titrantDate: text });
 }
 
-function check<Document extends object>(empty: Document, value: unknown, shape: Shape): Document | readonly Fault[] {
+/** Checks a document of this version against its shape; parts it leaves out are those of `empty`. */
+export function check<Document extends object>(empty: Document, value: unknown, shape: Shape): Document | readonly Fault[] {
   if (!isObject(value)) return [{ code: 'not-an-object', path: '' }];
   const { version } = value;
   if (version !== FORMAT_VERSION) {
@@ -41,18 +42,18 @@ const MOST_TEXT = 10_000;
 export const MOST_RUNS = 20;
 
 /** Looks at a value and adds what is wrong with it. */
-type Check = (value: unknown, path: string, faults: Fault[]) => void;
-type Shape = Readonly<Record<string, Check>>;
+export type Check = (value: unknown, path: string, faults: Fault[]) => void;
+export type Shape = Readonly<Record<string, Check>>;
 
 const shared = (keys: KnownKeys): Shape => ({ version: () => undefined, name: text, figures: figuresOf(keys), options: optionsOf(keys) });
 
-function text(value: unknown, path: string, faults: Fault[]): void {
+export function text(value: unknown, path: string, faults: Fault[]): void {
   if (typeof value !== 'string') faults.push({ code: 'wrong-type', path, found: kindOf(value) });
   else if (value.length > MOST_TEXT) faults.push({ code: 'too-long', path, found: String(value.length) });
 }
 
 /** An object with some of the named parts, and no other. */
-function record(shape: Shape): Check {
+export function record(shape: Shape): Check {
   return (value, path, faults) => {
     if (!isObject(value)) return void faults.push({ code: 'wrong-type', path, found: kindOf(value) });
     for (const key of Object.keys(value)) {
@@ -63,16 +64,16 @@ function record(shape: Shape): Check {
   };
 }
 
-function list(item: Check): Check {
+export function list(item: Check, most = MOST_RUNS): Check {
   return (value, path, faults) => {
     if (!Array.isArray(value)) faults.push({ code: 'wrong-type', path, found: kindOf(value) });
-    else if (value.length > MOST_RUNS) faults.push({ code: 'too-long', path, found: String(value.length) });
+    else if (value.length > most) faults.push({ code: 'too-long', path, found: String(value.length) });
     else value.forEach((one, index) => item(one, below(path, String(index)), faults));
   };
 }
 
 /** Decimal text and its unit, or what was typed and the doubt about it. */
-function figure(value: unknown, path: string, faults: Fault[]): void {
+export function figure(value: unknown, path: string, faults: Fault[]): void {
   const doubted = isObject(value) && 'doubt' in value;
   const parts: Shape = doubted ? { typed: text, doubt: text, unit: text } : { text, unit: text };
   record(parts)(value, path, faults);
@@ -81,6 +82,14 @@ function figure(value: unknown, path: string, faults: Fault[]): void {
 }
 
 const runs = (): Check => list(record({ sample: figure, start: figure, end: figure, struck: text }));
+
+/** One of a few words. */
+export function oneOf(words: readonly string[]): Check {
+  return (value, path, faults) => {
+    if (typeof value !== 'string') text(value, path, faults);
+    else if (!words.includes(value)) faults.push({ code: 'unknown-option', path, found: value });
+  };
+}
 
 const figuresOf = ({ figures }: KnownKeys): Check =>
   entries((key, value, path, faults) => {
@@ -91,9 +100,8 @@ const figuresOf = ({ figures }: KnownKeys): Check =>
 const optionsOf = ({ options }: KnownKeys): Check =>
   entries((key, value, path, faults) => {
     const known = options.get(key);
-    if (!known) faults.push({ code: 'unknown-key', path, found: key });
-    else if (typeof value !== 'string') text(value, path, faults);
-    else if (!known.includes(value)) faults.push({ code: 'unknown-option', path, found: value });
+    if (known) oneOf(known)(value, path, faults);
+    else faults.push({ code: 'unknown-key', path, found: key });
   });
 
 function entries(each: (key: string, value: unknown, path: string, faults: Fault[]) => void): Check {
