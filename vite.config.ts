@@ -6,7 +6,8 @@ import type { Plugin, UserConfig } from 'vite';
 import { defineConfig, type ViteUserConfig } from 'vitest/config';
 import { chromiumArgs, chromiumPath, pageDefaults } from './tests/tools/browser.ts';
 import { scriptFiles } from './.config/script-files.ts';
-import { coreMeasured, moreFile, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
+import { sharedChunk } from './.config/shared-chunk.ts';
+import { coreMeasured, lateFile, lateFiles, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
 
 const at = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
 
@@ -29,7 +30,7 @@ const shared: UserConfig = {
     alias: [
       // demo pages and tests may import the package by its public name
       { find: /^esterway$/, replacement: at('./src/index.ts') },
-      { find: /^esterway\/(define|core|working|more)$/, replacement: at('./src') + '/$1.ts' },
+      { find: /^esterway\/(define|core|working|more|intake|stock)$/, replacement: at('./src') + '/$1.ts' },
     ],
     dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
   },
@@ -39,7 +40,7 @@ const shared: UserConfig = {
 const plainFiles: Readonly<Record<string, string>> = {
   ...Object.fromEntries(['script.html', 'script.css', 'base.css', 'icon.svg'].map((file) => [file, at(`./demo/${file}`)])),
   'esterway.min.js': scriptFile,
-  'esterway-more.min.js': moreFile,
+  ...Object.fromEntries(lateFiles.map((file) => [basename(file), file])),
   'esterway-worker.min.js': workerFile,
 };
 
@@ -87,7 +88,7 @@ const builds: Record<string, () => UserConfig> = {
       minify: false,
       sourcemap: true,
       lib: {
-        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts') },
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts'), intake: at('./src/intake.ts'), stock: at('./src/stock.ts') },
         formats: ['es'],
       },
       rolldownOptions: {
@@ -132,7 +133,7 @@ function bundle(entry: string, name: string, file: string): UserConfig {
     plugins: [
       smallTemplates,
       workerFrom('undefined'),
-      ...(file === scriptFile ? [scriptFiles({ main: basename(file), more: basename(moreFile), name, start: 'defineMore' })] : []),
+      ...(file === scriptFile ? [scriptFiles({ main: basename(file), name, fileOf: (chunk) => basename(lateFile(chunk.replace('define-', ''))) })] : []),
       ...(beside ? [sizeTable] : []),
     ],
     build: {
@@ -150,6 +151,7 @@ function bundle(entry: string, name: string, file: string): UserConfig {
         preserveEntrySignatures: 'allow-extension', // what the parts share stays in the script file
         output: {
           chunkFileNames: '[name].js',
+          ...(file === scriptFile && { codeSplitting: { includeDependenciesRecursively: false, groups: [{ name: sharedChunk(at(entry)), debugName: 'shared' }] } }),
           postBanner: `/*! Esterway ${version}, MIT. Holds ${beside ? '' : 'Lit (BSD-3-Clause) and '}decimal.js (MIT): LICENSES.md */`,
         },
       },

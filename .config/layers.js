@@ -18,14 +18,16 @@ const folders = {
 const entries = {
   core: { values: below },
   working: { values: below },
+  stock: { values: below },
   'monte-carlo-worker': { values: below },
   index: { values: [...Object.keys(folders), 'core', 'working'] },
   more: { values: Object.keys(folders) },
+  intake: { values: Object.keys(folders) },
   define: { values: [...Object.keys(folders), 'core', 'index'] },
 };
 
 /** What knows no page: no DOM, no Lit. */
-export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts', 'src/working.ts'];
+export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts', 'src/working.ts', 'src/stock.ts'];
 
 /** @param {string} path with forward slashes, below src */
 function roomOf(path) {

@@ -3,7 +3,7 @@ import { DeliveryList } from './delivery-list.ts';
 import { DAY, deliveries } from './lots.ts';
 import type { Delivery } from './lots.ts';
 import { dayWords, writeTexts } from './page-texts.ts';
-import { plant } from './plant.ts';
+import { plant, stock } from './plant.ts';
 import { applyToPage, keepSettings, lotInAddress, readSettings, settingsIn } from './settings.ts';
 import type { Settings } from './settings.ts';
 
@@ -14,6 +14,7 @@ const list = new DeliveryList(document.querySelector('#deliveries')!, document.q
 let settings = readSettings();
 
 panel.site = plant;
+panel.stock = stock;
 panel.addEventListener('esterway-change', (event) => list.heard(event));
 form.addEventListener('change', () => {
   settings = settingsIn(form);

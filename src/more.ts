@@ -1,4 +1,4 @@
-// The elements that a page seldom needs: their classes, and their registration. The others fetch them by themselves when a
+// The parts of the batch that a page seldom needs: their classes, and their registration. The others fetch them by themselves when a
 // person opens one; a page that uses one alone imports this.
 
 import { defineMore } from './elements/define-more.js';
@@ -7,12 +7,6 @@ defineMore();
 
 export { EsterwayCurve } from './elements/curve/curve.js';
 export { EsterwayAfter } from './elements/after/after.js';
-export { EsterwayBlend } from './elements/blend/blend.js';
-export { EsterwayStockChangeEvent } from './elements/blend/events.js';
 export { EsterwayCost } from './elements/cost/cost.js';
 export { EsterwayTitrant } from './elements/titrant/titrant.js';
 export { defineMore } from './elements/define-more.js';
-
-export { blendedLot, readBlend, stockItemOf } from './lot/blend.js';
-export type { BlendFound, BlendPart, BlendRefused } from './lot/blend.js';
-export { EMPTY_STOCK } from './lot/blend-stock.js';

@@ -1,5 +1,4 @@
 import { EsterwayAfter } from './after/after.js';
-import { EsterwayBlend } from './blend/blend.js';
 import { ChargeSheet } from './charge/charge-sheet.js';
 import { ResidualPlot } from './charge/residual.js';
 import { EsterwayCost } from './cost/cost.js';
@@ -15,7 +14,6 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-curve', EsterwayCurve],
   ['esterway-after', EsterwayAfter],
   ['esterway-cost', EsterwayCost],
-  ['esterway-blend', EsterwayBlend],
   ['esterway-plan', PlanElement],
   ['esterway-residual', ResidualPlot],
   ['esterway-charge-sheet', ChargeSheet],
@@ -24,7 +22,7 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-check-sheet', CheckSheetElement],
 ];
 
-/** Registers the elements that a page seldom needs. A tag that is taken already stays as it is. */
+/** Registers the parts of the batch that a page seldom needs. A tag that is taken already stays as it is. */
 export function defineMore(registry: CustomElementRegistry = customElements): void {
   for (const [tag, element] of ELEMENTS) if (!registry.get(tag)) registry.define(tag, element);
 }

@@ -45,7 +45,7 @@ export const deBlend: Widened<typeof enBlend> = {
   of: 'von {available}',
   all: 'alles',
   bars: 'Balken: Entnahme; Umriss: Vorrat.',
-  property: 'Eigenschaft',
+  property: 'Größe',
   is: 'Verschnitt',
   atMost: 'Grenze',
   mass: 'Menge',

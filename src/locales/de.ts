@@ -180,6 +180,7 @@ export const de: Texts = {
     soap: 'Seife',
     blend: 'Auf {limit} % verschneiden',
     blendWith: 'Öl mit {ffa} %',
+    fromStock: 'Aus dem Bestand verschneiden',
     published: 'Veröffentlichte Direktgrenzen',
     publishedRange: '0,5 bis 5\u00a0%',
     publishedList: [

@@ -179,6 +179,7 @@ export const en = {
     soap: 'soap',
     blend: 'Blend to {limit} %',
     blendWith: 'oil of {ffa} %',
+    fromStock: 'Blend from stock',
     published: 'Published direct limits',
     publishedRange: '0.5 to 5\u00a0%',
     publishedList: [

@@ -4,7 +4,7 @@ import { afterEach, describe, expect, test } from 'vitest';
 import { deBlend } from '../../src/locales/de-blend.js';
 import { enBlend } from '../../src/locales/en-blend.js';
 import type { BlendStock, EsterwayBlend, EsterwaySite, EsterwayStockChangeEvent, LotEntry } from '../../src/index.js';
-import '../../src/more.js';
+import '../../src/intake.js';
 import { button, choose, click, controls, deep, emulate, enter, find, focused, focusedName, hasField, input, paste, place, press, settled, words } from './tools/page.js';
 import { figure, lot, sour } from './tools/lots.js';
 import { de, en, fill } from './tools/texts.js';

@@ -8,7 +8,7 @@ import type { Problem } from '../../formula/reading.js';
 import { kilogram, percent } from '../../formula/units.js';
 import { deBlend } from '../../locales/de-blend.js';
 import { enBlend } from '../../locales/en-blend.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import { DEFAULT_STEP, EMPTY_STOCK, MOST_ITEMS, checkBlendStock, isEmpty, standingLimit } from '../../lot/blend-stock.js';
 import type { BlendStock, ItemFigure, StockItem, StockLimits } from '../../lot/blend-stock.js';
@@ -99,8 +99,9 @@ export class EsterwayBlend extends SectionElement {
 
   /** What is in stock, the limits of the blend and the goal: a document that a page can keep. */
   @property({ attribute: false })
-  set stock(stock: BlendStock) {
-    const checked = checkBlendStock(stock);
+  set stock(stock: BlendStock | undefined) {
+    if (stock === this.#stock) return;
+    const checked = checkBlendStock(stock ?? EMPTY_STOCK);
     this.#faults = 'items' in checked ? [] : checked;
     this.#stock = 'items' in checked ? checked : EMPTY_STOCK;
     this.removed = undefined;

@@ -6,7 +6,7 @@ import { showNumber } from '../../exchange/number-format.js';
 import { Decimal } from '../../formula/decimal.js';
 import { shownText } from '../../formula/digits.js';
 import { kilogram, pound } from '../../formula/units.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enBlend } from '../../locales/en-blend.js';
 import type { BlendFound, BlendRefused } from '../../lot/blend.js';

@@ -6,7 +6,7 @@ import { readNumber } from '../../exchange/number-text.js';
 import { Decimal } from '../../formula/decimal.js';
 import { isKnown } from '../../formula/reading.js';
 import { TYPED_UNITS } from '../../formula/units.js';
-import { fill } from '../../locales/en.js';
+import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enBlend } from '../../locales/en-blend.js';
 import { ITEM_FIGURES, MOST_ITEMS, isEmpty } from '../../lot/blend-stock.js';

@@ -1,5 +1,6 @@
 import { css, html } from 'lit';
-import { query, state } from 'lit/decorators.js';
+import { property, query, state } from 'lit/decorators.js';
+import type { BlendStock } from '../../lot/blend-stock.js';
 import { nextLot } from '../../lot/edit.js';
 import { EMPTY_LOT } from '../../lot/entry.js';
 import { LotElement } from '../parts/base.js';
@@ -8,8 +9,9 @@ import { faultsBox } from '../parts/faults.js';
 import { groupsFields } from '../parts/focus-order.js';
 import { buttons, boxes, tokens } from '../parts/styles.js';
 import type {} from '../charge/charge-sheet.js';
+import type { EsterwayStockChangeEvent } from '../blend/events.js';
 import type { EsterwayCharge } from '../charge/charge.js';
-import { loadMore } from '../parts/more.js';
+import { loadParts } from '../parts/late-parts.js';
 import type { EsterwayWorking } from '../working/working.js';
 
 /**
@@ -22,6 +24,7 @@ import type { EsterwayWorking } from '../working/working.js';
  * @fires {EsterwayChangeEvent} esterway-change - a person changed the lot; it carries the entry and the reading
  * @fires {EsterwaySiteChangeEvent} esterway-site-change - a person changed a site value; keep it and set it again next time
  * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out; the panel opens it
+ * @fires {EsterwayStockChangeEvent} esterway-stock-change - a person changed what is in stock; keep it and set `stock` again next time
  *
  * @slot - more actions, beside the panel's own
  *
@@ -103,6 +106,9 @@ export class EsterwayPanel extends LotElement {
     `,
   ];
 
+  /** What is in stock to blend, and the limits of the blend; a page may keep it. */
+  @property({ attribute: false }) stock: BlendStock | undefined;
+
   @query('esterway-working') private readonly working!: EsterwayWorking | null;
   @query('esterway-charge') private readonly charge!: EsterwayCharge | null;
   /** What was just done, for those who do not see it happen. */
@@ -136,12 +142,16 @@ export class EsterwayPanel extends LotElement {
       <div class="columns">
         <esterway-lot exportparts=${parts}></esterway-lot>
         <esterway-titration exportparts=${parts}></esterway-titration>
-        <esterway-route exportparts=${parts}></esterway-route>
+        <esterway-route exportparts=${parts} .stock=${this.stock} @esterway-stock-change=${this.onStock}></esterway-route>
         <esterway-charge exportparts=${parts}></esterway-charge>
         <esterway-working class="no-print" exportparts=${parts}></esterway-working>
         <esterway-site-values class="no-print" folded exportparts=${parts}></esterway-site-values>
       </div>
     `;
+  }
+
+  private onStock({ stock }: EsterwayStockChangeEvent): void {
+    this.stock = stock;
   }
 
   private readonly onOpen = (event: EsterwayOpenEvent): void => {
@@ -158,7 +168,7 @@ export class EsterwayPanel extends LotElement {
     const route = charge?.looked;
     if (!route || this.reading(`${route}.catalyst`)?.value === undefined) return window.print();
     try {
-      await loadMore();
+      await loadParts('more');
       const sheet = document.createElement('esterway-charge-sheet');
       await Object.assign(sheet, { entry, site, units, route }).print(languageTag);
     } catch {

@@ -10,7 +10,7 @@ export function beside(file: string): string {
 }
 
 /**
- * Runs a script that lies beside the script file; what it gives stands in `esterwayParts`.
+ * Runs a script that lies beside the script file; what it gives stands on the shelf.
  *
  * @throws where there is no such file, or the page does not let it run
  */
@@ -24,6 +24,17 @@ export function runBeside(file: string): Promise<void> {
     element.remove();
   });
 }
+
+/** What the script file and the files beside it give one another; the first copy on a page makes it. */
+export interface Shelf {
+  /** Runs a file once; what it gives stands in `files`. */
+  readonly run: (file: string) => Promise<void>;
+  /** By the name of the file: what it gives, once what it needs itself is there. */
+  readonly files: Record<string, Promise<object> | undefined>;
+}
+
+/** Only where the code came in a script file. */
+export const shelf: Shelf | undefined = script === undefined ? undefined : ((globalThis as { esterwayParts?: Shelf }).esterwayParts ??= { run: runBeside, files: {} });
 
 interface TrustedTypes {
   createPolicy(name: string, rules: { createScriptURL(url: string): string }): { createScriptURL(url: string): unknown };

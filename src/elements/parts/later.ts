@@ -2,7 +2,8 @@ import { css, html, nothing } from 'lit';
 import { property, state } from 'lit/decorators.js';
 import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
-import { loadMore } from './more.js';
+import { loadParts } from './late-parts.js';
+import type { LateParts } from './late-parts.js';
 import { sectionStyles } from './section-styles.js';
 import { boxes, buttons, tokens } from './styles.js';
 
@@ -28,6 +29,8 @@ export class LaterElement extends GuestElement {
 
   /** The line it is folded to. */
   @property() label = '';
+  /** The group of parts that it needs. */
+  @property() needs: LateParts = 'more';
   /** What stands in it once it is open. */
   @property({ attribute: false }) content: () => unknown = () => nothing;
 
@@ -48,7 +51,7 @@ export class LaterElement extends GuestElement {
   private onToggle(event: Event): void {
     this.opened = (event.target as HTMLDetailsElement).open;
     if (!this.opened || this.fetched === 'there') return;
-    loadMore().then(
+    loadParts(this.needs).then(
       () => (this.fetched = 'there'),
       () => (this.fetched = 'failed'),
     );

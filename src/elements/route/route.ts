@@ -1,18 +1,22 @@
 import { css, html, nothing } from 'lit';
+import { property } from 'lit/decorators.js';
 import { fill } from '../../locales/fill.js';
+import type { BlendStock } from '../../lot/blend-stock.js';
+import type { EsterwayStockChangeEvent } from '../blend/events.js';
 import { ReasonWords } from '../parts/reason-words.js';
 import { SectionElement } from '../parts/section.js';
 import { buretteScale, buretteStyles, scaleOf } from './burette-scale.js';
 
 /**
  * The route of a lot: the verdict in one sentence with its reasons, beside it the burette scale with
- * the result and the site's limits, and the other ways on one line each.
+ * the result and the site's limits, and the other ways on one line each. What is in stock can be blended under it.
  *
  * @element esterway-route
  * @attr {boolean} folded - folds the section to its one-line summary
  * @attr {'metric' | 'us'} units - units in which amounts are shown
  *
  * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out
+ * @fires {EsterwayStockChangeEvent} esterway-stock-change - a person changed what is in stock; keep it and set `stock` again next time
  *
  * @csspart section - the whole section
  * @csspart heading - the button that folds it
@@ -83,6 +87,9 @@ export class EsterwayRoute extends SectionElement {
     `,
   ];
 
+  /** What is in stock to blend, and the limits of the blend; a page may keep it. */
+  @property({ attribute: false }) stock: BlendStock | undefined;
+
   readonly #reasons = new ReasonWords({ texts: () => this.texts, tag: () => this.languageTag, reading: (key) => this.reading(key) });
 
   protected override get heading(): string {
@@ -112,6 +119,7 @@ export class EsterwayRoute extends SectionElement {
         </div>
       </div>
       ${this.others()}
+      <esterway-later needs="intake" .label=${this.texts.route.fromStock} .content=${this.blend}></esterway-later>
       <details class="no-print">
         <summary>${this.texts.route.published} <span class="quiet">${this.texts.route.publishedRange}</span></summary>
         <ul>
@@ -153,6 +161,12 @@ export class EsterwayRoute extends SectionElement {
       label: fill(ffa === undefined ? texts.route.scaleEmpty : texts.route.scale, words),
       write: (value) => this.number(String(Math.round(value * 10) / 10)),
     });
+  }
+
+  private readonly blend = (): unknown => html`<esterway-blend bare .stock=${this.stock} @esterway-stock-change=${this.onStock}></esterway-blend>`;
+
+  private onStock({ stock }: EsterwayStockChangeEvent): void {
+    this.stock = stock;
   }
 
   private amountPlain(key: string): string {

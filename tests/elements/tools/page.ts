@@ -1,4 +1,5 @@
-import { loadMore } from '../../../src/elements/parts/more.js';
+import { loadParts } from '../../../src/elements/parts/late-parts.js';
+import type { LaterElement } from '../../../src/elements/parts/later.js';
 import { fixture } from '@open-wc/testing';
 import type { LitElement, TemplateResult } from 'lit';
 import { cdp, userEvent } from 'vitest/browser';
@@ -120,7 +121,7 @@ export async function openPart(root: Element | Document, line: string): Promise<
   const summary = controls(root).find((control) => control.localName === 'summary' && words(control).startsWith(line));
   if (!summary) throw new Error(`no part “${line}”`);
   await click(summary);
-  await loadMore();
+  await loadParts(((summary.getRootNode() as ShadowRoot).host as LaterElement).needs);
   await settled();
 }
 
