@@ -1,3 +1,4 @@
+import { enBalanceQuantities } from './en-balance-quantities.js';
 import { enBatchQuantities } from './en-batch-quantities.js';
 import { enEvidenceQuantities } from './en-evidence-quantities.js';
 
@@ -162,7 +163,7 @@ export const enQuantities = {
   'pretreated.ester': 'ester in the oil',
 
   ...enEvidenceQuantities,
-  ...enBatchQuantities,
+  ...enBatchQuantities, ...enBalanceQuantities,
 };
 
 /** The same names and words in any language. */

@@ -4,7 +4,7 @@ import type { Texts } from './en.js';
 type Words = Readonly<Record<string, string>>;
 
 /** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: `cost.direct.total`: where, and which run or pass, and what. */
-const KEY = /^(retest\.|titrant\.|after\.|heat\.|cost\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
+const KEY = /^(retest\.|titrant\.|after\.|heat\.|cost\.|balance\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
 /** A site value that each catalyst or acid has for itself: `KOH.assay`. */
 const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility|\.heatOfSolution|\.price)$/;
 

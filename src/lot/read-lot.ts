@@ -7,12 +7,11 @@ import { shownText } from '../formula/digits.js';
 import type { Plan } from '../formula/plan.js';
 import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
-import { checkLotEntry, checkSiteProfile } from './check.js';
-import type { Fault } from './check.js';
+import { checkedLot } from './checked.js';
 import { FORMAT_VERSION } from './entry.js';
 import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
 import { judgedRoute } from './judged-route.js';
-import { KNOWN_KEYS, fieldOf } from './keys.js';
+import { fieldOf } from './keys.js';
 import type { LotFaults, LotReading, ReadingJson, UncertaintyJson } from './lot-reading.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
@@ -38,15 +37,9 @@ export interface ReadOptions {
  * @param site a `SiteProfile`; the defaults stand where it says nothing
  */
 export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSION }, options: ReadOptions = {}): LotReading | LotFaults {
-  const lot = checkLotEntry(entry, KNOWN_KEYS);
-  const profile = checkSiteProfile(site, KNOWN_KEYS);
-  if (isFaults(lot) || isFaults(profile)) {
-    const faults = [
-      ...(isFaults(lot) ? lot.map((fault) => ({ ...fault, in: 'entry' as const })) : []),
-      ...(isFaults(profile) ? profile.map((fault) => ({ ...fault, in: 'site' as const })) : []),
-    ];
-    return { version: FORMAT_VERSION, faults };
-  }
+  const checked = checkedLot(entry, site);
+  if ('faults' in checked) return checked;
+  const { lot, profile } = checked;
   const { only } = options;
   const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
   const replicates = { lot: replicatesOf(run, '', lot.runs), retest: replicatesOf(run, 'retest.', lot.retestRuns) };
@@ -67,8 +60,6 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
     notices: only ? [] : noticesOn(lot, profile, run, passes, options.today),
   };
 }
-
-const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
 
 const ROUTE_KEYS = [
   'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',

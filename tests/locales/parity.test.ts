@@ -1,6 +1,7 @@
 import { readFileSync, readdirSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
-import { lotFormulas } from '../../src/chemistry/lot-formulas.js';
+import { balanceFormulas } from '../../src/chemistry/balance.js';
+import { addFormulas, lotFormulas } from '../../src/chemistry/lot-formulas.js';
 import { CAUTIONS } from '../../src/decision/charge.js';
 import { REASON_CODES } from '../../src/decision/route.js';
 import { NUMBER_DOUBTS } from '../../src/exchange/number-text.js';
@@ -21,6 +22,7 @@ const partsOf = (language: string) =>
 const whole = (texts: Texts, language: 'en' | 'de') => ({ texts, parts: partsOf(language) });
 
 const languages: Readonly<Record<string, Texts>> = { en, de };
+addFormulas(balanceFormulas);
 const two = { runs: 2, counted: [0, 1] };
 const sheet = lotFormulas({ lot: two, retest: { runs: 1, counted: [0] }, titrant: two });
 
@@ -143,6 +145,8 @@ describe('the words of a key', () => {
     ['after.direct.acid', 'after the reaction, direct: neutralising acid to weigh', 'nach der Reaktion, direkt: Neutralisationssäure, Einwaage'],
     ['heat.pass2.riseInBatch', 'heat of mixing, pass 2: temperature rise in oil and methanol, without cooling', 'Mischungswärme, Durchgang 2: Erwärmung von Öl und Methanol, ohne Kühlung'],
     ['cost.twoStep.methanol', 'cost, two-step: methanol', 'Kosten, zweistufig: Methanol'],
+    ['balance.pass2.waterDrawn', 'mass balance, pass 2: water drawn off', 'Massenbilanz, Durchgang 2: abgezogenes Wasser'],
+    ['balance.twoStep.methanolUpper', 'mass balance, two-step, base step: methanol in the ester layer', 'Massenbilanz, zweistufig, Umesterung: Methanol in der Esterphase'],
     ['acetic.density', 'density of glacial acetic acid', 'Dichte von Eisessig'],
   ])('%s is a quantity', (key, english, german) => {
     expect([quantityName(key, en), quantityName(key, de)]).toEqual([english, german]);
