@@ -1,4 +1,3 @@
-import { deBalanceQuantities } from './de-balance-quantities.js';
 import { deBatchQuantities } from './de-batch-quantities.js';
 import { deEvidenceQuantities } from './de-evidence-quantities.js';
 import type { QuantityTexts } from './en-quantities.js';
@@ -160,5 +159,5 @@ export const deQuantities: QuantityTexts = {
   'pretreated.ester': 'Ester im Öl',
 
   ...deEvidenceQuantities,
-  ...deBatchQuantities, ...deBalanceQuantities,
+  ...deBatchQuantities,
 };

@@ -1,4 +1,3 @@
-import { enBalanceQuantities } from './en-balance-quantities.js';
 import { enBatchQuantities } from './en-batch-quantities.js';
 import { enEvidenceQuantities } from './en-evidence-quantities.js';
 
@@ -163,7 +162,7 @@ export const enQuantities = {
   'pretreated.ester': 'ester in the oil',
 
   ...enEvidenceQuantities,
-  ...enBatchQuantities, ...enBalanceQuantities,
+  ...enBatchQuantities,
 };
 
 /** The same names and words in any language. */

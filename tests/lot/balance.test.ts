@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { balance } from '../../src/lot/balance.js';
 import type { Balance, BalanceStep } from '../../src/lot/balance.js';
-import { working } from '../../src/working.js';
+import { monteCarloSlices } from '../../src/lot/monte-carlo.js';
+import { secondCheck, uncertainty, working } from '../../src/working.js';
 import { clean, nonsense, retested, sour } from '../elements/tools/lots.js';
 import { certified, lot, numberIn, read, site } from './lot.js';
 
@@ -46,6 +47,19 @@ describe('a balance', () => {
     expect(react.charged.map(({ stream, mass }) => [stream, Number(mass)])).toEqual([['methanol', numberIn(reading, 'direct.methanol')], ['catalyst', numberIn(reading, 'direct.catalyst')]]);
     expect(massOf(react, 'out', 'mixture', 'soap')).toBe(numberIn(reading, 'direct.soap'));
     expect(massOf(react, 'out', 'mixture', 'glycerol')).toBe(numberIn(reading, 'direct.glycerol'));
+  });
+
+  it('has figures that can be checked, and whose uncertainty is known, like any other', () => {
+    const found = of(sour);
+    const { key, mass } = stepOf(found, 'settle').layers[0]!;
+    expect(secondCheck(sour, site({}), key, { text: Number(mass).toPrecision(4), unit: 'kg' })).toMatchObject({ verdict: 'agrees' });
+    const drawn = 'balance.pass1.methanolDrawn';
+    expect(Number((uncertainty(sour, site({}), drawn) as { u: string }).u)).toBeGreaterThan(0);
+    for (const { difference } of found.steps) expect(uncertainty(sour, site({}), difference.key)).toBeTypeOf('object');
+    const slices = monteCarloSlices({ entry: sour, site: site({}), keys: [drawn], draws: 2000, seed: 1 });
+    let slice = slices.next();
+    while (!slice.done) slice = slices.next();
+    expect(slice.value.results[drawn]?.mean).toBeCloseTo(massOf(stepOf(found, 'pass1'), 'out', 'drawnOff', 'methanol'), -1);
   });
 
   it('is not changed by a reading, and changes none', () => {

@@ -4,6 +4,7 @@ import type { RouteName } from '../../chemistry/route-name.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import type { Verdict } from '../../decision/route.js';
 import { fill } from '../../locales/fill.js';
+import { chooseStyles } from '../parts/choose-styles.js';
 import { ACID_FIGURE, ChargeLines, METHANOL_FIGURE } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
 
@@ -36,7 +37,7 @@ const FIRST_AMOUNT = { direct: 'direct.catalyst', twoStep: 'pass1.sulfuric' } as
  * @cssprop --esterway-pink-soft - behind the retest
  */
 export class EsterwayCharge extends ChargeLines {
-  static override styles = [...ChargeLines.styles, chargeStyles];
+  static override styles = [...ChargeLines.styles, chooseStyles, chargeStyles];
 
   /** The route looked at, where a person has chosen one; else the one recommended. */
   @state() private chosen: RouteName | undefined;
