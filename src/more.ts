@@ -10,6 +10,4 @@ export { EsterwayAfter } from './elements/after/after.js';
 export { EsterwayBalance } from './elements/balance/balance.js';
 export { EsterwayCost } from './elements/cost/cost.js';
 export { EsterwayTitrant } from './elements/titrant/titrant.js';
-export { balance } from './lot/balance.js';
-export type { Balance, BalanceFlow, BalanceLayer, BalanceStep, NoBalance, Weighed } from './lot/balance.js';
 export { defineMore } from './elements/define-more.js';
