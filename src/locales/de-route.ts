@@ -15,6 +15,7 @@ export const deRoute: Widened<typeof enRoute> = {
   soap: 'Seife',
   blend: 'Auf {limit} % verschneiden',
   blendWith: 'Öl mit {ffa} %',
+  delivery: 'Anlieferung: annehmen, zurückstellen, ablehnen',
   fromStock: 'Aus dem Bestand verschneiden',
   published: 'Veröffentlichte Direktgrenzen',
   publishedRange: '0,5 bis 5\u00a0%',

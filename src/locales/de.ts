@@ -1,5 +1,6 @@
 import { deBatchChoices, deBatchOptions } from './de-batch-quantities.js';
 import { deBudget } from './de-budget.js';
+import { deDeliveryChoices, deDeliveryOptions } from './de-delivery-quantities.js';
 import { deFaults, deProblems } from './de-problems.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
@@ -85,6 +86,7 @@ export const de: Texts = {
     runsAreDear: 'Weitere Bestimmung aufwendig',
     portionTable: 'Einwaage nach',
     ...deBatchChoices,
+    ...deDeliveryChoices,
   },
   options: {
     acidKnownFrom: {
@@ -127,6 +129,7 @@ export const de: Texts = {
     runsAreDear: { yes: 'ja', no: 'nein' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
     ...deBatchOptions,
+    ...deDeliveryOptions,
   },
   problems: deProblems,
   faults: deFaults,

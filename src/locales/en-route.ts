@@ -12,6 +12,7 @@ export const enRoute = {
   soap: 'soap',
   blend: 'Blend to {limit} %',
   blendWith: 'oil of {ffa} %',
+  delivery: 'Delivery: take it, hold it or decline it',
   fromStock: 'Blend from stock',
   published: 'Published direct limits',
   publishedRange: '0.5 to 5\u00a0%',

@@ -1,5 +1,6 @@
 import { enBatchChoices, enBatchOptions } from './en-batch-quantities.js';
 import { enBudget } from './en-budget.js';
+import { enDeliveryChoices, enDeliveryOptions } from './en-delivery-quantities.js';
 import { enFaults, enProblems } from './en-problems.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
@@ -84,6 +85,7 @@ export const en = {
     runsAreDear: 'A further run is dear',
     portionTable: 'Portions after',
     ...enBatchChoices,
+    ...enDeliveryChoices,
   },
   options: {
     acidKnownFrom: {
@@ -126,6 +128,7 @@ export const en = {
     runsAreDear: { yes: 'yes', no: 'no' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
     ...enBatchOptions,
+    ...enDeliveryOptions,
   },
   problems: enProblems,
   faults: enFaults,

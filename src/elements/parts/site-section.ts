@@ -14,7 +14,9 @@ const UNITS: Readonly<Record<string, readonly string[]>> = {
   oilPrice: ['¤/t', '¤/kg', '¤/L', '¤/US gal'], esterPrice: ['¤/t', '¤/kg', '¤/L', '¤/US gal'], methanolPrice: ['¤/kg', '¤/t', '¤/L', '¤/US gal'],
   sulfuricPrice: ['¤/kg', '¤/t'], 'vinegar.price': ['¤/L'], drawnOffPrice: ['¤/t', '¤/kg'], lowerLayerPrice: ['¤/t', '¤/kg'], energyPrice: ['¤/kWh'],
   energyBaseStep: ['kWh/t'], energyAcidPass: ['kWh/t'], hourPrice: ['¤/h'], hoursBaseStep: ['h', 'min'], hoursAcidPass: ['h', 'min'],
-  iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'], methanolStep: ['L', 'mL', 'US gal'], catalystStep: ['g', 'kg', 'lb'], sulfuricStep: ['g', 'kg', 'lb'],
+  ...Object.fromEntries(['blendingLimit', 'acceptedWater', 'acceptedInsolubles', 'settlement.baseFfa', 'settlement.waterAllowance', 'settlement.insolublesAllowance'].map((key) => [key, ['%', 'mg/kg']])),
+  ...Object.fromEntries(['settlement.ffaRate', 'settlement.waterRate', 'settlement.insolublesRate'].map((key) => [key, ['¤/t per %']])),
+  lowestArrival: ['°C', '°F'], highestArrival: ['°C', '°F'], iodineValue: [''], measuredOilDensity: ['kg/m³'], vesselVolume: ['L', 'm³', 'US gal'], methanolStep: ['L', 'mL', 'US gal'], catalystStep: ['g', 'kg', 'lb'], sulfuricStep: ['g', 'kg', 'lb'],
 };
 
 /** A section that edits the site profile: fields for its figures and options. */
