@@ -2,6 +2,7 @@ import { constant, named } from '../formula/expression.js';
 import { Choice, Quantity, quantity } from '../formula/quantity.js';
 import { Sheet } from '../formula/sheet.js';
 import { kilogram, mole } from '../formula/units.js';
+import * as acceptance from './acceptance.js';
 import * as acid from './acidity.js';
 import { afterPretreatment } from './after-pretreatment.js';
 import * as after from './after-reaction.js';
@@ -23,6 +24,7 @@ import * as equipment from './equipment.js';
 import * as replicate from './replicates.js';
 import { titrationRun } from './run.js';
 import type { TitrationRun } from './run.js';
+import * as settlement from './settlement.js';
 import * as standard from './standardisation.js';
 import * as site from './site-limits.js';
 import { STOICHIOMETRY } from './sources.js';
@@ -100,7 +102,7 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
     ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan), ...members(dispensing),
-    ...members(neutralising), ...members(after), ...members(productCheck), ...members(heat), ...members(prices), ...members(cost),
+    ...members(neutralising), ...members(after), ...members(productCheck), ...members(heat), ...members(prices), ...members(cost), ...members(acceptance), ...members(settlement), ...settlement.settlement(asItCame.freeFattyAcid),
     ...after.afterReaction('direct', constant('0', mole)), ...after.afterReaction('twoStep', named('pretreated.methanolLeft')),
     ...(['direct', 'twoStep'] as const).flatMap(heat.methoxideHeat), ...([1, 2, 3] as const).flatMap(heat.sulfuricAcidHeat), ...(['direct', 'twoStep'] as const).flatMap(cost.routeCost),
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),

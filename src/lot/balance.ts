@@ -8,11 +8,12 @@ import { Missing, isKnown, joinUnknown } from '../formula/reading.js';
 import type { Outcome, Problem, Unknown } from '../formula/reading.js';
 import { checkedLot } from './checked.js';
 import { FORMAT_VERSION } from './entry.js';
+import { judgedRoute } from './judged-route.js';
 import { fieldOf } from './keys.js';
 import type { LotFaults } from './lot-reading.js';
+import { lotReplicates } from './lot-replicates.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
-import { readLot } from './read-lot.js';
 
 /** An amount as decimal text, kg or L, and the key of the quantity it is, by which it can be opened to its working. */
 export interface Weighed {
@@ -75,12 +76,7 @@ export function balance(entry: unknown, site: unknown = { version: FORMAT_VERSIO
   if ('faults' in checked) return checked;
   const { lot, profile } = checked;
   const run = lotRun(lot, profile);
-  return balanceOf(run, route ?? recommended(lot, profile));
-}
-
-function recommended(lot: unknown, profile: unknown): RouteName {
-  const read = readLot(lot, profile, { only: [] });
-  return 'faults' in read ? 'direct' : chargedRoute(read.route);
+  return balanceOf(run, route ?? chargedRoute(judgedRoute(run, lot, lotReplicates(run, '', lot.runs))));
 }
 
 /** The balance of a lot under evaluation. Its sheet must hold the formulas of the balance. */

@@ -1,6 +1,4 @@
 import { directCharge, twoStepCharge } from '../decision/charge.js';
-import { judgeReplicates } from '../decision/replicates.js';
-import type { Replicates } from '../decision/replicates.js';
 import type { Route } from '../decision/route.js';
 import type { Decimal } from '../formula/decimal.js';
 import { shownText } from '../formula/digits.js';
@@ -9,10 +7,11 @@ import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
 import { checkedLot } from './checked.js';
 import { FORMAT_VERSION } from './entry.js';
-import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
-import { judgedRoute } from './judged-route.js';
+import type { LotEntry, SiteProfile } from './entry.js';
+import { ROUTE_KEYS, judgedRoute } from './judged-route.js';
 import { fieldOf } from './keys.js';
 import type { LotFaults, LotReading, ReadingJson, UncertaintyJson } from './lot-reading.js';
+import { lotReplicates } from './lot-replicates.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
 import { missedTarget, noticesOn } from './notices.js';
@@ -42,7 +41,7 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
   const { lot, profile } = checked;
   const { only } = options;
   const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
-  const replicates = { lot: replicatesOf(run, '', lot.runs), retest: replicatesOf(run, 'retest.', lot.retestRuns) };
+  const replicates = { lot: lotReplicates(run, '', lot.runs), retest: lotReplicates(run, 'retest.', lot.retestRuns) };
   const route = judgedRoute(run, lot, replicates.lot);
   const passes = only ? undefined : passesOf(run);
   if (!only) compute(run, lot, profile, passes);
@@ -59,18 +58,6 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
     problems: problemsIn(readings),
     notices: only ? [] : noticesOn(lot, profile, run, passes, options.today),
   };
-}
-
-const ROUTE_KEYS = [
-  'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',
-  'u.repeatability', 'u.endPoint', 'u.blankEndPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
-  'u.khpEndPoint', 'u.khpBlankEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
-];
-
-function replicatesOf({ findings, givens }: LotRun, prefix: '' | 'retest.', runs: readonly RunEntry[]): Replicates {
-  const titrated = givens.chosen(`${prefix}acidKnownFrom`) === 'titration';
-  const counted = titrated ? runs.filter((run) => runState(run) === 'counted').length : 0;
-  return judgeReplicates(findings, prefix, counted, givens.chosen('runsAreDear') === 'yes');
 }
 
 /** Results that stand with their ± beside them. */

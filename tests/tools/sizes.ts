@@ -21,10 +21,10 @@ export const lateFiles: readonly string[] = late.map(({ file }) => file);
 
 /** Most bytes after gzip. */
 export const budgets = [
-  { name: 'script file', file: scriptFile, most: 110_000 },
+  { name: 'script file', file: scriptFile, most: 115_000 },
   ...late,
-  { name: 'core with decimal.js', file: coreMeasured, most: 48_000 },
-  { name: 'worker file', file: workerFile, most: 45_000 },
+  { name: 'core with decimal.js', file: coreMeasured, most: 50_000 },
+  { name: 'worker file', file: workerFile, most: 46_000 },
 ] as const;
 
 export function gzipBytes(file: string): number {
