@@ -21,7 +21,7 @@ export const deBalance: Widened<typeof enBalance> = {
   substance: 'Stoff',
   in: 'Zugang',
   out: 'Abgang',
-  predicted: 'vorhergesagt',
+  predicted: 'Prognose',
   counted: 'titriert',
   total: 'gesamt',
   difference: 'Zu- minus Abgang',
