@@ -9,6 +9,7 @@ import { ACID_FIGURE, ChargeLines, METHANOL_FIGURE } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
 
 const after = (): unknown => html`<esterway-after bare exportparts="figure, caution, field-line, field-input"></esterway-after>`;
+const balance = (): unknown => html`<esterway-balance bare exportparts="figure, flow"></esterway-balance>`;
 const cost = (): unknown => html`<esterway-cost bare exportparts="figure, field-line, field-input"></esterway-cost>`;
 const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
 
@@ -81,6 +82,7 @@ export class EsterwayCharge extends ChargeLines {
       ${this.noticesAt((field) => (this.looked === 'twoStep' && field === 'pass1.batchVolume') || field.startsWith(`${this.looked}.`))}
       ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
       <esterway-later .label=${texts.charge.after} .content=${after}></esterway-later>
+      <esterway-later .label=${texts.charge.balance} .content=${balance}></esterway-later>
       <esterway-later .label=${texts.charge.cost} .content=${cost}></esterway-later>
     `;
   }
