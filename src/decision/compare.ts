@@ -5,4 +5,5 @@ const TRUSTED = 30;
 
 /** Whether a result keeps a limit. FFA of 3.0 % by a certificate comes back as 3.000…001 % and still keeps a limit of 3.0 %. */
 export const atOrBelow = (value: Decimal, limit: Decimal): boolean =>
-  value.toSignificantDigits(TRUSTED).lte(limit.toSignificantDigits(TRUSTED));
+  // rounding keeps the order, so only what lies above can still come out equal
+  value.lte(limit) || value.toSignificantDigits(TRUSTED).lte(limit.toSignificantDigits(TRUSTED));

@@ -76,6 +76,9 @@ const ONE = new Decimal(1);
 
 type BinaryNode = NodeOf<BinaryOp>;
 
+/** A constant has no error to hand on, so its part need not be worked out. */
+const moves = ({ node }: Expression): boolean => node.op !== 'constant';
+
 class Adjoints {
   readonly sums = new Map<string, Decimal>();
 
@@ -127,12 +130,15 @@ class Adjoints {
         this.spread(node.left, adjoint);
         return this.spread(node.right, adjoint.neg());
       case 'product':
-        this.spread(node.left, adjoint.times(this.value(node.right)));
-        return this.spread(node.right, adjoint.times(this.value(node.left)));
+        if (moves(node.left)) this.spread(node.left, adjoint.times(this.value(node.right)));
+        if (moves(node.right)) this.spread(node.right, adjoint.times(this.value(node.left)));
+        return;
       case 'quotient': {
         const under = this.value(node.right);
-        this.spread(node.left, adjoint.div(under));
-        return this.spread(node.right, adjoint.times(this.value(node.left)).div(under.times(under)).neg());
+        const share = adjoint.div(under);
+        if (moves(node.left)) this.spread(node.left, share);
+        if (moves(node.right)) this.spread(node.right, share.times(this.value(node.left)).div(under).neg());
+        return;
       }
       default: {
         const right = this.value(node.right);

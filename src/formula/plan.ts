@@ -6,7 +6,7 @@ import { Quantity, keeps } from './quantity.js';
 import type { Limit } from './quantity.js';
 import { Refused, isKnown, joinUnknown } from './reading.js';
 import type { Outcome, Unknown } from './reading.js';
-import { namesIn } from './sheet.js';
+import { choicesIn, namesIn } from './sheet.js';
 import type { Sheet } from './sheet.js';
 
 /** Where a plan finds what was given. Each key is asked for once at most, when a formula first needs it. */
@@ -27,6 +27,15 @@ export interface Findings {
   option(key: string): string | Unknown;
   /** Keys of the quantities that have been computed so far, each after those its formula needed. */
   touched(): readonly string[];
+}
+
+/** What many readings share: filled by those that need it first. */
+export interface Standing {
+  /** By slot. */
+  readonly varying: readonly boolean[];
+  readonly varyingChoices: readonly boolean[];
+  readonly slots: (Outcome | undefined)[];
+  readonly options: (string | Unknown | undefined)[];
 }
 
 type Step = (run: Run) => Outcome;
@@ -79,6 +88,30 @@ export class Plan {
     return new Run(givens, this, replaced?.size ? this.#with(replaced) : this.#steps, this.#slot, this.#choiceSlot);
   }
 
+  /**
+   * The same for one of many readings that share some of their givens: what rests on nothing that varies is worked out once, by the
+   * first that needs it.
+   *
+   * @param standing made by {@link Plan.standing} of this plan
+   */
+  evaluateOneOfMany(givens: Givens, standing: Standing): Findings {
+    return new Run(givens, this, this.#steps, this.#slot, this.#choiceSlot, standing);
+  }
+
+  /** What does not vary among many readings, by which inputs and which choices do. */
+  standing(varies: (input: string) => boolean, variesChoice: (choice: string) => boolean): Standing {
+    const varying: boolean[] = [];
+    for (const key of this.order) {
+      const quantity = this.sheet.quantity(key);
+      varying.push(
+        quantity.is
+          ? [...namesIn(quantity)].some((name) => varying[this.#slot.get(name)!]) || choicesIn(quantity).some(variesChoice)
+          : varies(key) || [...namesIn(quantity)].some((name) => varying[this.#slot.get(name)!]),
+      );
+    }
+    return { varying, varyingChoices: this.choices.map(variesChoice), slots: new Array<Outcome | undefined>(varying.length), options: new Array<string | Unknown | undefined>(this.choices.length) };
+  }
+
   #with(replaced: Replaced): readonly Step[] {
     const steps = [...this.#steps];
     for (const [key, change] of replaced) {
@@ -101,6 +134,7 @@ class Run implements Findings {
     readonly steps: readonly Step[],
     readonly slotOf: ReadonlyMap<string, number>,
     readonly choiceSlotOf: ReadonlyMap<string, number>,
+    readonly standing?: Standing,
   ) {
     this.#slots = new Array<Outcome | undefined>(steps.length);
     this.#options = new Array<string | Unknown | undefined>(plan.choices.length);
@@ -122,11 +156,15 @@ class Run implements Findings {
   }
 
   at(slot: number): Outcome {
-    return (this.#slots[slot] ??= this.steps[slot]!(this));
+    const { standing } = this;
+    if (!standing || standing.varying[slot]) return (this.#slots[slot] ??= this.steps[slot]!(this));
+    return (this.#slots[slot] ??= standing.slots[slot] ??= this.steps[slot]!(this));
   }
 
   optionAt(slot: number): string | Unknown {
-    return (this.#options[slot] ??= this.givens.option(this.plan.choices[slot]!, this));
+    const { standing } = this;
+    if (!standing || standing.varyingChoices[slot]) return (this.#options[slot] ??= this.givens.option(this.plan.choices[slot]!, this));
+    return (standing.options[slot] ??= this.givens.option(this.plan.choices[slot]!, this));
   }
 }
 

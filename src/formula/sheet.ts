@@ -58,6 +58,13 @@ export function namesIn(quantity: Quantity): ReadonlySet<string> {
   return names;
 }
 
+/** Keys of the choices that a quantity's formula turns on. */
+export function choicesIn({ is }: Quantity): readonly string[] {
+  const names = new Set<string>();
+  if (is) walk(is, (node) => node.op === 'choice' && names.add(node.by));
+  return [...names];
+}
+
 function unknownNames(sheet: Sheet): string[] {
   const faults: string[] = [];
   for (const quantity of sheet.quantities.values()) {

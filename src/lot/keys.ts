@@ -51,7 +51,7 @@ export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; o
 };
 
 /** The choices that are decided on results, not typed. */
-const DECIDED: ReadonlySet<string> = new Set([
+export const DECIDED: ReadonlySet<string> = new Set([
   'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT), ...pricedChoices.map(({ key }) => key), ...settlementChoices.map(({ key }) => key),
 ]);
 

@@ -8,9 +8,10 @@ import type { LotEntry, SiteProfile } from './entry.js';
 import { judgedRoute } from './judged-route.js';
 import { fieldOf } from './keys.js';
 import { lotReplicates } from './lot-replicates.js';
-import { lotRun } from './lot-run.js';
+import { LotList } from './lot-run.js';
+import type { LotRun } from './lot-run.js';
 import { TRIAGE_KEYS, triageOf } from './triage.js';
-import { uncertaintyJson, uncertaintyOf } from './uncertainty.js';
+import { shownUncertainty, uncertaintyOf } from './uncertainty.js';
 
 /** What a list shows of a lot: figures as they are reported, decimal text. */
 export interface ListReading {
@@ -34,13 +35,18 @@ export interface ListReading {
  * Reads lots for a list: the same figures as `readLot` and `triage`, and nothing else. The entry is one that `checkLotEntry` has
  * passed, or was made by this code; the site profile likewise.
  */
-export function readForList(entry: LotEntry, site: SiteProfile): ListReading {
-  const run = lotRun(entry, site, WANTED);
+export const listReader = (site: SiteProfile): ((entry: LotEntry) => ListReading) => {
+  const list = new LotList(site, WANTED);
+  return (entry) => readForList(list.run(entry), entry);
+};
+
+function readForList(run: LotRun, entry: LotEntry): ListReading {
   const { findings, sheet } = run;
-  const { state } = triageOf(run, entry);
+  const replicates = lotReplicates(run, '', entry.runs);
+  const { state } = triageOf(run, entry, replicates);
   const ffa = findings.outcome('freeFattyAcid');
   if (!isKnown(ffa)) return { state, ...why(ffa) };
-  const route = chargedRoute(judgedRoute(run, entry, lotReplicates(run, '', entry.runs)));
+  const route = chargedRoute(judgedRoute(run, entry, replicates));
   const shown = (key: string): string | undefined => {
     const outcome = findings.outcome(key);
     return isKnown(outcome) ? shownText(outcome, sheet.quantity(key).digits) : undefined;
@@ -51,7 +57,7 @@ export function readForList(entry: LotEntry, site: SiteProfile): ListReading {
   return {
     state, route,
     ...(acidValue !== undefined && { acidValue }), ...(freeFattyAcid !== undefined && { freeFattyAcid }),
-    ...('budget' in uncertainty && { plusMinus: uncertaintyJson(uncertainty, ffa, sheet.quantity('freeFattyAcid').digits).shown }),
+    ...('budget' in uncertainty && { plusMinus: shownUncertainty(uncertainty, ffa, sheet.quantity('freeFattyAcid').digits) }),
     ...(catalyst !== undefined && { catalyst }), ...(methanol !== undefined && { methanol }),
     ...(isKnown(charge) ? {} : why(charge)),
   };

@@ -77,7 +77,7 @@ export function triage(entry: unknown, site: unknown = { version: FORMAT_VERSION
 const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
 
 /** The state of a lot that is being read anyway, with its reasons: for long lists. Its plan must hold {@link TRIAGE_KEYS}. */
-export function triageOf(run: LotRun, entry: LotEntry): Judgement {
+export function triageOf(run: LotRun, entry: LotEntry, replicates = lotReplicates(run, '', entry.runs)): Judgement {
   const { findings, givens } = run;
   const at = (key: string): Outcome => findings.outcome(key);
   const ffa = at('freeFattyAcid');
@@ -87,7 +87,7 @@ export function triageOf(run: LotRun, entry: LotEntry): Judgement {
     ffa, ...(uncertainty && 'budget' in uncertainty && { u: uncertainty.u }),
     directLimit: at('directLimit'), pretreatmentLimit: at('pretreatmentLimit'), blendingLimit: at('blendingLimit'),
     acidProofEquipment: givens.chosen('acidProofEquipment') === 'yes',
-    replicates: lotReplicates(run, '', entry.runs), titrated: givens.chosen('acidKnownFrom') === 'titration',
+    replicates, titrated: givens.chosen('acidKnownFrom') === 'titration',
     takes: { oneRun: givens.chosen('takesOneRun') !== 'no', certificate: givens.chosen('takesCertificate') !== 'no' },
     water: measured('waterContent'), acceptedWater: at('acceptedWater'), waterAbove: givens.chosen('waterAbove') as WhenAbove,
     insolubles: measured('insolubles'), acceptedInsolubles: at('acceptedInsolubles'), insolublesAbove: givens.chosen('insolublesAbove') as WhenAbove,

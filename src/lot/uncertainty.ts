@@ -4,6 +4,8 @@ import { shownText } from '../formula/digits.js';
 import type { Digits } from '../formula/quantity.js';
 import { isKnown } from '../formula/reading.js';
 import type { Unknown } from '../formula/reading.js';
+import type { Sheet } from '../formula/sheet.js';
+import type { UncertaintySource } from '../formula/uncertainty-source.js';
 import type { UncertaintyJson } from './lot-reading.js';
 import type { LotEntry, SiteProfile } from './entry.js';
 import { lotRun } from './lot-run.js';
@@ -56,10 +58,9 @@ function combined(run: LotRun, key: string): Uncertainty | Unknown {
   if (!(found instanceof Map)) return found as Unknown;
   const slopeAt = found as ReadonlyMap<string, Decimal>;
   const contributions = new Map<string, Decimal[]>();
-  for (const source of uncertaintySources(run.runs)) {
-    const moved = source.at.flatMap((at) => slopeAt.get(at) ?? []);
-    const slope = moved.reduce((sum, one) => sum.plus(one), ZERO);
-    if (slope.isZero()) continue;
+  for (const source of sourcesOf(run)) {
+    const slope = slopeOf(source, slopeAt);
+    if (!slope || slope.isZero()) continue;
     const u = findings.outcome(source.key);
     if (!isKnown(u)) return u;
     if (u.isZero()) continue;
@@ -70,6 +71,25 @@ function combined(run: LotRun, key: string): Uncertainty | Unknown {
   }
   return new Combined(contributions);
 }
+
+/** How much a result moves with an error that moves several figures at once; undefined where it moves none. */
+function slopeOf({ at }: UncertaintySource, slopeAt: ReadonlyMap<string, Decimal>): Decimal | undefined {
+  let slope: Decimal | undefined;
+  for (const key of at) {
+    const one = slopeAt.get(key);
+    if (one) slope = slope ? slope.plus(one) : one;
+  }
+  return slope;
+}
+
+/** The sources of lots with the same runs are the same. */
+function sourcesOf({ sheet, runs }: LotRun): readonly UncertaintySource[] {
+  let sources = SOURCES.get(sheet);
+  if (!sources) SOURCES.set(sheet, (sources = uncertaintySources(runs)));
+  return sources;
+}
+
+const SOURCES = new WeakMap<Sheet, readonly UncertaintySource[]>();
 
 /** Roots are dear, and most who ask want the whole only: the budget is worked out when asked for. */
 class Combined implements Uncertainty {
@@ -138,12 +158,17 @@ export function uncertainties(entry: LotEntry, site: SiteProfile, keys: readonly
   }));
 }
 
-/** As JSON, U shown to the decimals of the result it stands beside, but to no less than its first digit. */
-export function uncertaintyJson({ u }: Uncertainty, value: Decimal, digits: Digits): UncertaintyJson {
+/** As JSON, U to the decimals of the result it stands beside, but to no less than its first digit. */
+export function uncertaintyJson(uncertainty: Uncertainty, value: Decimal, digits: Digits): UncertaintyJson {
+  const { u } = uncertainty;
+  return { u: u.toString(), expanded: u.times(COVERAGE_FACTOR).toString(), shown: shownUncertainty(uncertainty, value, digits) };
+}
+
+/** U as it is shown beside its result. */
+export function shownUncertainty({ u }: Uncertainty, value: Decimal, digits: Digits): string {
   const expanded = u.times(COVERAGE_FACTOR);
   const beside = shownText(expanded, { decimals: decimalsOf(shownText(value, digits)) });
-  const shown = new Decimal(beside).isZero() && !expanded.isZero() ? shownText(expanded, { significant: 1 }) : beside;
-  return { u: u.toString(), expanded: expanded.toString(), shown };
+  return /[1-9]/.test(beside) || expanded.isZero() ? beside : shownText(expanded, { significant: 1 });
 }
 
 const decimalsOf = (text: string): number => text.split('.')[1]?.length ?? 0;

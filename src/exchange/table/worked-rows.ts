@@ -1,5 +1,5 @@
 import type { SiteProfile } from '../../lot/entry.js';
-import { readForList } from '../../lot/list-reading.js';
+import { listReader } from '../../lot/list-reading.js';
 import type { ListReading } from '../../lot/list-reading.js';
 import { STATES } from '../../decision/triage.js';
 import type { DeliveryState } from '../../decision/triage.js';
@@ -44,6 +44,7 @@ export function* workedRows({ table, columns, mark, dates, site }: RowsTask): Ge
   const states = Object.fromEntries(STATES.map((state) => [state, 0])) as Record<DeliveryState, number>;
   const problems: Record<string, number> = {};
   const count = (code: string): void => void (problems[code] = (problems[code] ?? 0) + 1);
+  const read = listReader(site);
   let empty = 0;
   for (let from = 0; from < table.rows.length; from += SLICE) {
     const slice: WorkedRow[] = [];
@@ -54,12 +55,12 @@ export function* workedRows({ table, columns, mark, dates, site }: RowsTask): Ge
         slice.push({ row });
         continue;
       }
-      const read = readForList(entry, site);
-      states[read.state]++;
+      const found = read(entry);
+      states[found.state]++;
       for (const { code } of cells) count(code);
-      if (read.problem && !cells.some(({ code }) => code === read.problem?.code)) count(read.problem.code);
-      if (read.missing) count('missing');
-      slice.push({ row, ...(entry.name !== undefined && { name: entry.name }), ...read, ...(cells.length && { cells }) });
+      if (found.problem && !cells.some(({ code }) => code === found.problem?.code)) count(found.problem.code);
+      if (found.missing) count('missing');
+      slice.push({ row, ...(entry.name !== undefined && { name: entry.name }), ...found, ...(cells.length && { cells }) });
     }
     yield slice;
   }
