@@ -21,6 +21,8 @@ const entries = {
   stock: { values: below },
   balance: { values: below },
   'monte-carlo-worker': { values: below },
+  'rows-worker': { values: [...below, 'exchange'] },
+  sheets: { values: Object.keys(folders) },
   index: { values: [...Object.keys(folders), 'core', 'working'] },
   more: { values: Object.keys(folders) },
   intake: { values: Object.keys(folders) },

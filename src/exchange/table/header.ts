@@ -24,8 +24,9 @@ export const plainHeading = (heading: string): string => parted(heading).name;
 function parted(heading: string): { readonly name: string; readonly unit?: string } {
   const text = heading.replace(/\s+/g, ' ').trim();
   const inBrackets = /^(.*?)\s*[[(]([^[\]()]*(?:\([^()]*\))?[^[\]()]*)[\])]\s*$/.exec(text);
-  const behind = /^(.*?)(?:,? in|,|\s)\s*([^\s,]+(?: KOH\/g)?)$/.exec(text);
-  for (const [, name = '', symbol = ''] of [inBrackets, behind].filter((found) => found !== null)) {
+  const behindComma = /^(.*?)(?:,| in )\s*([^,]+)$/.exec(text);
+  const behind = /^(.*?)\s([^\s,]+(?: KOH\/g)?)$/.exec(text);
+  for (const [, name = '', symbol = ''] of [inBrackets, behindComma, behind].filter((found) => found !== null)) {
     const unit = unitOf(symbol);
     if (unit !== undefined) return { name: even(name), unit };
   }

@@ -56,7 +56,7 @@ const CONTROL = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/g;
 function looksBinary(text: string): boolean {
   if (/^(?:PK\u0003\u0004|%PDF-|\u00d0\u00cf\u0011\u00e0|\ufffd\ufffd\u0011\ufffd|\u0089PNG|\ufffdPNG|GIF8|\u001f[\u008b\ufffd])/.test(text)) return true;
   const looked = text.slice(0, 20_000);
-  return (looked.match(CONTROL)?.length ?? 0) + (looked.match(/\ufffd/g)?.length ?? 0) > looked.length / 50;
+  return (looked.match(CONTROL)?.length ?? 0) + (looked.match(/\ufffd/g)?.length ?? 0) > looked.length / 20;
 }
 
 /** What separates the cells, by the first line that has anything in it: a tab before a semicolon before a comma. */
