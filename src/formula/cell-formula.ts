@@ -1,4 +1,4 @@
-import type { Constant, Expression, FunctionOp } from './expression.js';
+import type { BinaryOp, Constant, Expression, FunctionOp } from './expression.js';
 import { InfixNotation, RANK, write } from './notation.js';
 import type { Printed } from './notation.js';
 import type { Sheet } from './sheet.js';
@@ -17,6 +17,15 @@ const SIGNS = {
  */
 export function cellFormula(expression: Expression, sheet: Sheet, addressOf: AddressOf): string {
   return write(expression, sheet, new CellNotation(addressOf)).out;
+}
+
+/**
+ * The same for cells of which some hold a word instead of a figure that is not known: such a formula comes to an
+ * error, never to a figure. Spreadsheets leave words out of `MIN`, `MAX` and `MEDIAN` and put them above every
+ * figure; a word plus nothing is an error.
+ */
+export function strictCellFormula(expression: Expression, sheet: Sheet, addressOf: AddressOf): string {
+  return write(expression, sheet, new StrictNotation(addressOf)).out;
 }
 
 class CellNotation extends InfixNotation {
@@ -50,3 +59,19 @@ class CellNotation extends InfixNotation {
     return undefined;
   }
 }
+
+class StrictNotation extends CellNotation {
+  override binary(op: BinaryOp, left: Printed<string>, right: Printed<string>): Printed<string> {
+    return op === 'least' || op === 'greatest' ? super.binary(op, figure(left), figure(right)) : super.binary(op, left, right);
+  }
+
+  override median(all: readonly Printed<string>[]): Printed<string> {
+    return super.median(all.map(figure));
+  }
+
+  override threshold(left: Printed<string>, right: Printed<string>, below: Printed<string>, otherwise: Printed<string>): Printed<string> {
+    return super.threshold(figure(left), figure(right), below, otherwise);
+  }
+}
+
+const figure = (part: Printed<string>): Printed<string> => (/^[\d.]+$/.test(part.out) ? part : { out: `${part.out}+0`, rank: RANK.sum });

@@ -1,0 +1,30 @@
+/** Results of lots as rows of a sheet. */
+export const enResults = {
+  heads: {
+    name: 'Lot',
+    source: 'Source',
+    date: 'Date',
+    site: 'Site',
+    acidValue: 'Acid value as KOH',
+    acidValueExpanded: 'Acid value, ±',
+    freeFattyAcid: 'Free fatty acid',
+    freeFattyAcidExpanded: 'Free fatty acid, ±',
+    route: 'Route',
+    state: 'State',
+    oilMass: 'Oil',
+    oilVolume: 'Oil by volume',
+    passMethanol: 'Acid step {pass}: methanol',
+    passSulfuric: 'Acid step {pass}: sulfuric acid',
+    baseMethanol: 'Base step: methanol',
+    baseCatalyst: 'Base step: catalyst',
+    ester: 'Ester to expect',
+    glycerol: 'Glycerol to expect',
+  },
+  head: '{name} [{unit}]',
+  states: {
+    complete: 'complete',
+    missing: 'figures are missing',
+    refused: 'a figure was refused',
+    unreadable: 'cannot be read',
+  },
+};
