@@ -142,8 +142,8 @@ describe('the ES modules', () => {
   const { mean, u } = monteCarlo(order)!.results['freeFattyAcid']!;
 
   /** What a worker makes of the order, started by a module of the page; as text, for the test runner would rewrite the import. */
-  const drawnBy = (module: string) => page.evaluate<MonteCarloReport>(`import('${module}').then(({ startWorker }) => new Promise((resolve, reject) => {
-    const worker = startWorker();
+  const drawnBy = (module: string) => page.evaluate<MonteCarloReport>(`import('${module}').then(({ startMonteCarlo }) => new Promise((resolve, reject) => {
+    const worker = startMonteCarlo();
     worker.onerror = () => reject(new Error('the worker did not start'));
     worker.onmessage = ({ data }) => 'done' in data || resolve(data);
     worker.postMessage(${JSON.stringify(order)});

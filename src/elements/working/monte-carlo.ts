@@ -15,7 +15,7 @@ import { USUAL_DRAWS } from '../../lot/monte-carlo.js';
 import type { MonteCarlo, MonteCarloOrder, Simulated } from '../../lot/monte-carlo.js';
 import { uncertaintyOf } from '../../lot/uncertainty.js';
 import { drawInPage, drawInWorker } from '../parts/monte-carlo-run.js';
-import type { Drawing } from '../parts/monte-carlo-run.js';
+import type { Running } from '../parts/sliced-work.js';
 import { plotStyles } from '../parts/plot.js';
 import { histogram, histogramStyles } from './histogram.js';
 
@@ -103,7 +103,7 @@ export class MonteCarloCheck implements ReactiveController {
   readonly #element: ReactiveControllerHost;
   readonly #host: MonteCarloHost;
   #state: State = { is: 'idle' };
-  #drawing: Drawing | undefined;
+  #drawing: Running | undefined;
   #seed = 0;
   /** What the state is about: it is void when any of the three is another. */
   #about: readonly [key: string, entry: LotEntry, site: SiteProfile] | undefined;

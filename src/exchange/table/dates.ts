@@ -5,7 +5,7 @@ import type { Table } from './table.js';
 export type DateOrder = 'day-first' | 'month-first';
 
 /** Surely one of the two; not to be told (`asked`, with a date that could be read both ways); or no date needs it. */
-export type OrderFound = { readonly order: DateOrder } | { readonly order?: undefined; readonly asked?: string };
+export type OrderFound = { readonly order: DateOrder; readonly asked?: undefined } | { readonly order?: undefined; readonly asked?: string };
 
 /** Looks at all dates of a sheet. */
 export function dateOrderOf(table: Table, columns: Columns): OrderFound {

@@ -4,7 +4,7 @@ import type { Columns } from './columns.js';
 import type { Table } from './table.js';
 
 /** Which mark of decimals a sheet uses: surely, or not to be told; `mixed` where cells of both kinds are in it, with a row of each. */
-export type MarkFound = { readonly mark: DecimalMark } | { readonly mark?: undefined; readonly mixed?: { readonly point: number; readonly comma: number } };
+export type MarkFound = { readonly mark: DecimalMark; readonly mixed?: undefined } | { readonly mark?: undefined; readonly mixed?: { readonly point: number; readonly comma: number } };
 
 /** Looks at all figures of the columns in use. One mark with other than three digits behind it, or both marks in one figure, are proof. */
 export function decimalMarkOf(table: Table, columns: Columns): MarkFound {
