@@ -214,8 +214,12 @@ export class Book {
     }
   }
 
-  /** Puts in what a file has and the book has not. What is there stays as it is. Asked again after an interruption, it adds the rest. */
-  async restore(text: string): Promise<Restored | BookRefused> {
+  /**
+   * Puts in what a file has and the book has not. What is there stays as it is. Asked again after an interruption, it adds the rest.
+   *
+   * @param told called now and then with how many of all versions have been looked at
+   */
+  async restore(text: string, told?: (done: number, all: number) => void): Promise<Restored | BookRefused> {
     const records = readBookText(text);
     if ('refused' in records) return records;
     let [added, already, different] = [0, 0, 0];
@@ -232,6 +236,7 @@ export class Book {
           else different += 1;
         }
         this.#take(batch.filter((_, index) => results[index]?.status === undefined));
+        told?.(start + batch.length, records.length);
       }
       return { added, already, different };
     } catch (fault) {
