@@ -19,8 +19,8 @@ export interface LotSummary {
   readonly state: string;
 }
 
-/** Says what becomes of a delivery, as a word. */
-export type StateOf = (entry: LotEntry, site: SiteProfile) => string;
+/** Says what becomes of a delivery, as a word; nothing where it does not know. */
+export type StateOf = (entry: LotEntry, site: SiteProfile) => string | undefined;
 
 /** What is worth finding a lot by; undefined where the lot cannot be read at all. */
 export function summaryOf(entry: LotEntry, site: SiteProfile, stateOf?: StateOf): LotSummary | undefined {

@@ -1,67 +1,15 @@
-import { expect as expectPage } from '@open-wc/testing';
 import { html } from 'lit';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
-import { cdp } from 'vitest/browser';
-import { openBook } from '../../src/book/book.js';
-import type { Book } from '../../src/book/book.js';
-import { browserStore } from '../../src/book/browser-store.js';
-import type { EsterwayBook } from '../../src/elements/book/book.js';
-import { defineBook } from '../../src/elements/define-book.js';
 import { EMPTY_SITE } from '../../src/index.js';
-import type { EsterwaySite, LotEntry } from '../../src/index.js';
-import { deBook as german } from '../../src/locales/de-book.js';
+import type { EsterwaySite } from '../../src/index.js';
 import { enBook } from '../../src/locales/en-book.js';
-import { button, choose, click, controls, deep, emulate, enter, find, focusedName, input, nameOf, place, press, settled, words } from './tools/page.js';
-import { certified, clean, figure, site, sour } from './tools/lots.js';
-import { de, en, fill, plainSpaces } from './tools/texts.js';
+import { clearAway, delivery, filled, kept, name, newName, openElsewhere, placeBook, ready, rowNames, rows, until } from './tools/books.js';
+import { button, choose, click, controls, deep, enter, find, focusedName, input, place, settled, words } from './tools/page.js';
+import { clean, figure, site, sour } from './tools/lots.js';
+import { en, fill } from './tools/texts.js';
 
-defineBook();
-
-let names = 0;
-let name = '';
-const elsewhere: Book[] = [];
-beforeEach(() => (name = `book-test-${Date.now()}-${++names}`));
-afterEach(async () => {
-  document.documentElement.style.colorScheme = '';
-  vi.restoreAllMocks();
-  await emulate();
-  for (const book of elsewhere.splice(0)) await book.close();
-  indexedDB.deleteDatabase(`_pouch_${name}`);
-});
-
-/** Waits for what the database answers. */
-async function until(element: Element, text: string): Promise<void> {
-  await vi.waitFor(() => expect(words(element)).toContain(plainSpaces(text)), { timeout: 8000, interval: 20 });
-  await settled();
-}
-const ready = async (element: Element, opening = enBook.opening): Promise<void> => {
-  await vi.waitFor(() => expect(words(element)).not.toContain(opening), { timeout: 8000, interval: 20 });
-  await settled();
-};
-
-async function placeBook(entry: LotEntry = sour, lang = 'en'): Promise<EsterwayBook> {
-  const element = await place<EsterwayBook>(html`<esterway-book lang=${lang} name=${name} .entry=${entry}></esterway-book>`);
-  await ready(element, lang === 'de' ? german.opening : enBook.opening);
-  return element;
-}
-
-/** The same database as another tab has it open. */
-async function openElsewhere(): Promise<Book> {
-  const book = await openBook(name, { store: browserStore });
-  if ('refused' in book) throw new Error(JSON.stringify(book));
-  elsewhere.push(book);
-  return book;
-}
-
-const delivery = (of: string, ffa: string, source = 'Canteen', date = '2026-03-02'): LotEntry => ({ ...certified(ffa), name: of, source, date });
-async function filled(): Promise<void> {
-  const book = await openElsewhere();
-  for (const entry of [delivery('HK-1', '1.2'), delivery('HK-2', '8', 'Snack fryers', '2026-03-04'), delivery('HK-3', '30', 'Canteen', '2026-03-06')]) await book.keep(entry, EMPTY_SITE, { by: 'Lenz' });
-}
-const rows = (element: Element): HTMLElement[] => controls(element).filter((one) => one.matches('.row'));
-const rowNames = (element: Element): string[] => rows(element).map((row) => words(row.querySelector('b')!));
-const kept = (of: string, number: string): string => fill(enBook.kept, { name: of, number });
-const passes = (element: Element) => expectPage(element).to.be.accessible();
+beforeEach(newName);
+afterEach(clearAway);
 
 describe('keeping the lot on the bench', () => {
   test('is said with its number, told as an event, and there when the page is opened again', async () => {
@@ -232,7 +180,7 @@ describe('two windows at once', () => {
   test('what a window of its own keeps appears here', async () => {
     const element = await placeBook();
     const frame = document.body.appendChild(document.createElement('iframe'));
-    const modules = ['book/book', 'book/browser-store'].map((file) => JSON.stringify(new URL(`../../src/${file}.ts`, import.meta.url).href));
+    const modules = ['book/book', 'book/browser-store'].map((file) => JSON.stringify(`${location.origin}/src/${file}.ts`));
     // a document of its own: its own code, its own connection to the database
     frame.srcdoc = `<script type="module">
       const [{ openBook }, { browserStore }] = await Promise.all([${modules.map((one) => `import(${one})`).join(',')}]);
@@ -255,145 +203,5 @@ describe('two windows at once', () => {
     await ready(second);
     expect(rowNames(second)).toEqual(['HK-0412', 'HK-0417']);
     second.remove();
-  });
-});
-
-describe('the whole book', () => {
-  const exported = async (element: EsterwayBook): Promise<{ readonly text: string; readonly file: string }> => {
-    const blobs: Blob[] = [];
-    vi.spyOn(URL, 'createObjectURL').mockImplementation((blob) => (blobs.push(blob as Blob), '#'));
-    const files: string[] = [];
-    vi.spyOn(HTMLAnchorElement.prototype, 'click').mockImplementation(function (this: HTMLAnchorElement) {
-      files.push(this.download);
-    });
-    await click(controls(element).find((one) => words(one) === enBook.whole)!);
-    await click(button(element, enBook.export));
-    await until(element, fill(enBook.exported, { count: '3', file: files[0] ?? '?' }));
-    return { text: await blobs[0]!.text(), file: files[0]! };
-  };
-  const restore = async (element: EsterwayBook, text: string): Promise<void> => {
-    const field = element.shadowRoot!.querySelector<HTMLInputElement>('input[type=file]')!;
-    const chosen = new DataTransfer();
-    chosen.items.add(new File([text], 'book.json'));
-    field.files = chosen.files;
-    field.dispatchEvent(new Event('change'));
-    await settled();
-  };
-
-  test('goes into a file, and from there into another book', async () => {
-    await filled();
-    const element = await placeBook();
-    const { text, file } = await exported(element);
-    expect(file).toMatch(new RegExp(`^${name}-\\d{4}-\\d\\d-\\d\\d\\.json$`));
-    expect((JSON.parse(text) as { records: unknown[] }).records).toHaveLength(3);
-    element.remove();
-    name += '-b';
-    const other = await placeBook();
-    await click(controls(other).find((one) => words(one) === enBook.whole)!);
-    await restore(other, text);
-    await until(other, fill(enBook.restored, { added: '3', already: '0' }));
-    expect(rowNames(other)).toEqual(['HK-3', 'HK-2', 'HK-1']);
-    await restore(other, text.replace('"name":"HK-1"', '"name":"forged"'));
-    await until(other, fill(enBook.different, { count: '1' }));
-    expect(rowNames(other)).toEqual(['HK-3', 'HK-2', 'HK-1']);
-    await restore(other, text.replace('"version":1', '"version":2'));
-    await until(other, enBook.faults['newer-version']);
-    await restore(other, 'a shopping list');
-    await until(other, enBook.faults['not-json']);
-  });
-});
-
-describe('what goes wrong', () => {
-  test('a disk that is full is said, what was typed stays, and later it is kept', async () => {
-    const element = await placeBook();
-    await enter(element, enBook.by, 'M. Lenz');
-    const origin = location.origin;
-    const { usage } = (await cdp().send('Storage.getUsageAndQuota' as never, { origin } as never)) as { usage: number };
-    await cdp().send('Storage.overrideQuotaForOrigin' as never, { origin, quotaSize: Math.max(1, usage - 1) } as never);
-    try {
-      element.entry = { ...sour, source: 'x'.repeat(9000) };
-      await settled();
-      await click(button(element, enBook.keep));
-      await until(element, enBook.faults['storage-full']);
-      expect(input(element, enBook.by).value).toBe('M. Lenz');
-      expect(element.entry.name).toBe('HK-0417');
-      expect(rows(element)).toHaveLength(0);
-    } finally {
-      await cdp().send('Storage.overrideQuotaForOrigin' as never, { origin } as never);
-    }
-    element.entry = sour;
-    await settled();
-    await click(button(element, enBook.keep));
-    await until(element, kept('HK-0417', '1'));
-  });
-
-  test('a browser that keeps nothing is said; allowed, it opens', async () => {
-    const there = vi.spyOn(window, 'indexedDB', 'get').mockReturnValue(undefined as never);
-    const element = await placeBook();
-    expect(words(element)).toContain(enBook.faults['no-storage']);
-    await passes(element);
-    there.mockRestore();
-    await click(button(element, enBook.again));
-    await until(element, enBook.empty);
-  });
-});
-
-describe('on every page', () => {
-  const full = async (lang = 'en'): Promise<EsterwayBook> => {
-    await filled();
-    const element = await placeBook({ ...delivery('HK-2', '9', 'Snack fryers', '2026-03-04') }, lang);
-    await click(rows(element)[0]!);
-    const texts = lang === 'de' ? german : enBook;
-    await until(element, texts.amendThis);
-    await click(button(element, texts.keep));
-    await until(element, texts.leave);
-    for (const one of deep(element)) if (one.localName === 'details') (one as HTMLDetailsElement).open = true;
-    await settled();
-    return element;
-  };
-
-  test('axe finds nothing, in the dark neither', async () => {
-    const element = await full();
-    await passes(element);
-    document.documentElement.style.colorScheme = 'light dark';
-    await emulate({ 'prefers-color-scheme': 'dark' });
-    await passes(element);
-  });
-
-  test('in German, with commas', async () => {
-    const element = await full('de');
-    const text = words(element);
-    expect(text).toContain('FFA 30,0 %');
-    expect(text).toContain(german.states['two-step']);
-    expect(text).toContain(fill(german.change, { field: de.fields.certificateFfa, before: '8 %', after: '9 %' }));
-    await passes(element);
-  });
-
-  test.each([270, 320, 700])('nothing is wider than %i px, and targets keep 44 px', async (width) => {
-    const element = await full('de');
-    element.style.inlineSize = `${width}px`;
-    await settled();
-    const { left, right } = element.getBoundingClientRect();
-    for (const one of deep(element)) {
-      if (one.closest('.unseen') || !one.checkVisibility()) continue;
-      const box = one.getBoundingClientRect();
-      if (box.width === 0) continue;
-      expect([one.localName, one.className, box.right <= right + 0.5 && box.left >= left - 0.5]).toEqual([one.localName, one.className, true]);
-    }
-    for (const one of controls(element)) expect([nameOf(one), one.getBoundingClientRect().height >= 43.5]).toEqual([nameOf(one), true]);
-  });
-
-  test('keys lead through it: a row opens and closes by Enter', async () => {
-    await filled();
-    const element = await placeBook();
-    input(element, enBook.by).focus();
-    await press('{Enter}');
-    expect(focusedName()).toBe(enBook.search);
-    rows(element)[0]!.focus();
-    await press('{Enter}');
-    await until(element, enBook.amendThis);
-    expect(rows(element)[0]!.getAttribute('aria-expanded')).toBe('true');
-    await press('{Enter}');
-    expect(words(element)).not.toContain(enBook.amendThis);
   });
 });

@@ -2,8 +2,7 @@ import { html, nothing } from 'lit';
 import type { PropertyValues, TemplateResult } from 'lit';
 import { property, state } from 'lit/decorators.js';
 import type { Book, Kept } from '../../book/book.js';
-import { dayOf } from '../../book/catalogue.js';
-import type { BookFound, CatalogueEntry } from '../../book/catalogue.js';
+import type { BookFound } from '../../book/catalogue.js';
 import type { LotRecord } from '../../book/record.js';
 import type { BookRefused } from '../../book/refusal.js';
 import { sameJson } from '../../book/same.js';
@@ -12,13 +11,13 @@ import { deBook } from '../../locales/de-book.js';
 import { enBook } from '../../locales/en-book.js';
 import { fill } from '../../locales/fill.js';
 import type { LotEntry } from '../../lot/entry.js';
-import { readLot } from '../../lot/read-lot.js';
 import { EsterwayUndoEvent } from '../parts/events.js';
 import { fieldStyles } from '../parts/field-styles.js';
 import { SectionElement } from '../parts/section.js';
-import { dayWords, figureWords, lotName, momentWords, refusalWords, stateWords } from './book-words.js';
+import { lotName, momentWords, refusalWords } from './book-words.js';
 import type { BookTongue } from './book-words.js';
 import { EsterwayKeptEvent } from './events.js';
+import { lotRow } from './row.js';
 import { saveFile } from './save-file.js';
 import { queryOf, searchFields } from './search.js';
 import type { Search } from './search.js';
@@ -27,6 +26,7 @@ import type { BookLoan } from './shared-books.js';
 import { bookStyles } from './styles.js';
 import { textLine } from './text-line.js';
 import { changeList, versionList } from './versions.js';
+import { wholeBook } from './whole-book.js';
 
 const TEXTS = { en: enBook, de: deBook };
 /** Lots shown at first, and further ones at a press. */
@@ -34,12 +34,6 @@ const PAGE = 20;
 
 /** Where something is said: at the keeping, at the list, or at the whole book. */
 type Place = 'keep' | 'list' | 'whole';
-
-/** By the verdict of the route. */
-const byRoute: StateOf = (entry, site) => {
-  const reading = readLot(entry, site, { only: [] });
-  return 'faults' in reading ? 'not-known' : reading.route.verdict;
-};
 
 /**
  * The intake book, in a database of the browser: keeps the lot on the bench, finds lots again, puts one back on the bench, amends
@@ -65,8 +59,8 @@ export class EsterwayBook extends SectionElement {
 
   /** Name of the database. */
   @property() name = 'esterway-book';
-  /** Says what becomes of a delivery, as a word; the verdict of its route unless set before the element is put on a page. */
-  @property({ attribute: false }) stateOf: StateOf = byRoute;
+  /** Says what becomes of a delivery, as a word; where it says nothing, the verdict of the route is noted. */
+  @property({ attribute: false }) stateOf: StateOf | undefined;
 
   @state() private book: Book | undefined;
   @state() private refused: BookRefused | undefined;
@@ -127,7 +121,7 @@ export class EsterwayBook extends SectionElement {
   private async borrow(): Promise<void> {
     this.giveBack();
     this.#borrowed = this.name;
-    const loan = (this.#loan = borrowBook(this.name, (entry, site) => this.stateOf(entry, site)));
+    const loan = (this.#loan = borrowBook(this.name, (entry, site) => this.stateOf?.(entry, site)));
     const book = await loan.book;
     if (this.#loan !== loan) return;
     if ('refused' in book) return void (this.refused = book);
@@ -174,7 +168,7 @@ export class EsterwayBook extends SectionElement {
       ${book.size ? this.list(book) : html`<p class="quiet">${words.empty}</p>`}
       <details class="no-print">
         <summary>${words.whole}</summary>
-        ${this.whole(book)} ${this.told('whole')}
+        ${wholeBook(this.tongue, { empty: book.size === 0, busy: this.busy, save: () => void this.export(), restore: (file) => void this.restore(file) })} ${this.told('whole')}
       </details>
     `;
   }
@@ -227,20 +221,10 @@ export class EsterwayBook extends SectionElement {
             <div class="actions no-print"><button class="action" part="action" type="button" @click=${this.undo}>${words.undo}</button></div>`
         : nothing}
       <ol class="lots" aria-label=${words.list}>
-        ${found.lots.map((lot) => html`<li>${this.row(lot)} ${this.opened?.lot === lot.lot ? this.details(this.opened.versions) : nothing}</li>`)}
+        ${found.lots.map((lot) => html`<li>${lotRow(lot, this.opened?.lot === lot.lot, this.tongue, () => this.toggle(lot.lot))} ${this.opened?.lot === lot.lot ? this.details(this.opened.versions) : nothing}</li>`)}
       </ol>
       ${found.total > found.lots.length ? html`<button class="action more no-print" part="action" type="button" @click=${() => (this.shown += PAGE)}>${words.more}</button>` : nothing}
     `;
-  }
-
-  private row(lot: CatalogueEntry): TemplateResult {
-    const { tongue } = this;
-    const { source, state } = lot.summary;
-    const [ffa = ''] = lot.summary.freeFattyAcid === undefined ? [] : figureWords(lot, tongue);
-    return html`<button class="row" type="button" aria-expanded=${this.opened?.lot === lot.lot ? 'true' : 'false'} @click=${() => this.toggle(lot.lot)}>
-      <b>${lotName(lot, tongue)}</b><span>${ffa}</span>
-      <span class="small quiet">${[dayWords(dayOf(lot), tongue), source].filter(Boolean).join(' · ')}</span><span class="small">${stateWords(state, tongue)}</span>
-    </button>`;
   }
 
   private details(versions: readonly LotRecord[]): TemplateResult {
@@ -254,18 +238,6 @@ export class EsterwayBook extends SectionElement {
         ? html`<esterway-history bare .source=${source} .points=${this.book.history(source)}></esterway-history>`
         : nothing}
     </div>`;
-  }
-
-  private whole(book: Book): TemplateResult {
-    const { words } = this;
-    return html`
-      <p class="small quiet">${words.here}</p>
-      <div class="actions">
-        <button class="action" part="action" type="button" ?disabled=${this.busy || book.size === 0} @click=${this.export}>${words.export}</button>
-        <button class="action" part="action" type="button" ?disabled=${this.busy} @click=${this.chooseFile}>${words.restore}</button>
-      </div>
-      <input id="file" type="file" accept=".json,application/json" hidden aria-label=${words.restore} @change=${this.restore} />
-    `;
   }
 
   // -- what a person does ---------------------------------------------------
@@ -386,17 +358,8 @@ export class EsterwayBook extends SectionElement {
     });
   }
 
-  private chooseFile(): void {
-    this.shadowRoot?.getElementById('file')?.click();
-  }
-
-  private async restore(event: Event): Promise<void> {
-    const input = event.target as HTMLInputElement;
-    const file = input.files?.[0];
-    if (!file) return;
+  private async restore(file: File): Promise<void> {
     const text = await file.text();
-    // the same file can be chosen again
-    input.value = '';
     await this.doing('whole', async (book) => {
       const told = (done: number, all: number): void => {
         this.said = { at: 'whole', text: fill(this.words.restoring, { done: this.number(String(done)), all: this.number(String(all)) }) };
