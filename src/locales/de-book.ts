@@ -64,6 +64,7 @@ export const deBook: Widened<typeof enBook> = {
   keptAt: 'eingetragen {when}',
   keptAtBy: 'eingetragen {when} von {by}',
   twice: 'Fassung {number} wurde an zwei Stellen zugleich geschrieben; beide bleiben stehen. Es gilt die letzte in dieser Liste.',
+  quoted: '„{text}“',
   changed: 'Anders als in der Fassung davor:',
   nothing: 'leer',
   change: '{field}: {before} → {after}',

@@ -65,6 +65,7 @@ export const enBook = {
   keptAt: 'kept {when}',
   keptAtBy: 'kept {when} by {by}',
   twice: 'Version {number} was written at two places at once; both stand. The last one in this list counts.',
+  quoted: '“{text}”',
   changed: 'Otherwise than the version before:',
   nothing: 'empty',
   change: '{field}: {before} → {after}',

@@ -56,8 +56,8 @@ function nameWords({ field }: BookChange, { words, texts }: BookTongue): string 
   return fill(words.struck, { run: where });
 }
 
-function valueWords(text: BookText, { field, option }: BookChange, { texts, tag }: BookTongue): string {
-  if (typeof text !== 'string') return 'text' in text ? `${showNumber(text.text, tag)}\u00a0${text.unit}`.trim() : `“${text.typed}” ${text.unit}`.trim();
+function valueWords(text: BookText, { field, option }: BookChange, { words, texts, tag }: BookTongue): string {
+  if (typeof text !== 'string') return 'text' in text ? `${showNumber(text.text, tag)}\u00a0${text.unit}`.trim() : `${fill(words.quoted, { text: text.typed })} ${text.unit}`.trim();
   if (!option) return text;
   const all = texts.options as Readonly<Record<string, Readonly<Record<string, string>>>>;
   return (all[field] ?? all[field.replace('retest.', '')])?.[text] ?? text;

@@ -199,7 +199,7 @@ export class EsterwayBook extends SectionElement {
     return html`
       <p>${same ? fill(words.same, { number }) : fill(words.inBook, { name: lotName(record, tongue), number, kept: momentWords(record.keptAt, tongue) })}</p>
       ${changeList(record, desk, tongue)}
-      <div class="fields">${textLine({ id: 'reason', label: words.reason, value: this.reason, typed: (text) => (this.reason = text) })} ${by}</div>
+      <div class="fields">${textLine({ id: 'reason', wide: true, label: words.reason, value: this.reason, typed: (text) => (this.reason = text) })} ${by}</div>
       <div class="actions">
         <button class="action main" part="action" type="button" ?disabled=${this.busy || same} @click=${() => this.amend(record)}>${fill(words.amend, { number: String(record.number + 1) })}</button>
         <button class="action" part="action" type="button" ?disabled=${this.busy || same} @click=${this.keepAnother}>${words.another}</button>
@@ -218,7 +218,7 @@ export class EsterwayBook extends SectionElement {
       ${this.told('list')}
       ${laid && laid.entry === this.desk.entry
         ? html`<p class="note" role="status">${laid.text}</p>
-            <div class="actions no-print"><button class="action" part="action" type="button" @click=${this.undo}>${words.undo}</button></div>`
+            <div class="actions no-print"><button class="action" part="action" type="button" @click=${() => this.dispatchEvent(new EsterwayUndoEvent())}>${words.undo}</button></div>`
         : nothing}
       <ol class="lots" aria-label=${words.list}>
         ${found.lots.map((lot) => html`<li>${lotRow(lot, this.opened?.lot === lot.lot, this.tongue, () => this.toggle(lot.lot))} ${this.opened?.lot === lot.lot ? this.details(this.opened.versions) : nothing}</li>`)}
@@ -342,10 +342,6 @@ export class EsterwayBook extends SectionElement {
     const other = sameJson(version.site, this.desk.site) ? '' : ` ${words.otherSite}`;
     this.laid = { entry: version.entry, text: fill(words.opened, { number: String(version.number), name: lotName(version, this.tongue) }) + other };
     this.edit({ kind: 'replace', entry: version.entry });
-  }
-
-  private undo(): void {
-    this.dispatchEvent(new EsterwayUndoEvent());
   }
 
   private async export(): Promise<void> {

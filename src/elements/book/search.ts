@@ -55,7 +55,7 @@ export function searchFields(search: Search, book: Book, tongue: BookTongue, pro
   };
   const reversed = search.from && search.to && search.from > search.to ? words.daysReversed : undefined;
   return html`
-    <div class="fields">${textLine({ id: 'text', label: words.search, type: 'search', placeholder: words.searchHint, value: search.text ?? '', typed: (text) => put('text', text) })}</div>
+    <div class="fields">${textLine({ id: 'text', label: words.search, type: 'search', wide: true, placeholder: words.searchHint, value: search.text ?? '', typed: (text) => put('text', text) })}</div>
     <details>
       <summary>${words.narrow}</summary>
       <div class="fields">

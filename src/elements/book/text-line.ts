@@ -11,11 +11,13 @@ interface TextLine {
   readonly type?: 'text' | 'date' | 'search';
   readonly placeholder?: string;
   readonly problem?: string | undefined;
+  /** Over the whole width, for a sentence. */
+  readonly wide?: boolean;
 }
 
 /** A field for words or a day; Enter goes on to the next. */
-export function textLine({ id, label, value, typed, type = 'text', placeholder = '', problem }: TextLine): TemplateResult {
-  return html`<div>
+export function textLine({ id, label, value, typed, type = 'text', placeholder = '', problem, wide = false }: TextLine): TemplateResult {
+  return html`<div class=${wide ? 'wide' : nothing}>
     <label for=${id}>${label}</label>
     <div class="line ${problem ? 'wrong' : ''}" part="field-line">
       <input

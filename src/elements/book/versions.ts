@@ -33,7 +33,7 @@ function oneVersion(version: LotRecord, before: LotRecord | undefined, tongue: B
   return html`
     <p><b>${fill(words.version, { number: String(version.number) })}</b> <span class="small quiet">${kept}</span></p>
     <p class="small">${[...figureWords(version, tongue), stateWords(version.summary.state, tongue)].join(' · ')}</p>
-    ${version.reason === undefined ? nothing : html`<p>“${version.reason}”</p>`}
+    ${version.reason === undefined ? nothing : html`<p>${fill(words.quoted, { text: version.reason })}</p>`}
     ${before ? html`<p class="small quiet">${words.changed}</p>${changeList(before, version, tongue)}` : nothing}
   `;
 }
