@@ -7,4 +7,5 @@ defineIntake();
 
 export { EsterwayBlend } from './elements/blend/blend.js';
 export { EsterwayStockChangeEvent } from './elements/blend/events.js';
+export { EsterwayTriage } from './elements/triage/triage.js';
 export { defineIntake } from './elements/define-intake.js';

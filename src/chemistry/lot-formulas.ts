@@ -2,6 +2,7 @@ import { constant, named } from '../formula/expression.js';
 import { Choice, Quantity, quantity } from '../formula/quantity.js';
 import { Sheet } from '../formula/sheet.js';
 import { kilogram, mole } from '../formula/units.js';
+import * as acceptance from './acceptance.js';
 import * as acid from './acidity.js';
 import { afterPretreatment } from './after-pretreatment.js';
 import * as after from './after-reaction.js';
@@ -23,6 +24,7 @@ import * as equipment from './equipment.js';
 import * as replicate from './replicates.js';
 import { titrationRun } from './run.js';
 import type { TitrationRun } from './run.js';
+import * as settlement from './settlement.js';
 import * as standard from './standardisation.js';
 import * as site from './site-limits.js';
 import { STOICHIOMETRY } from './sources.js';
@@ -59,6 +61,17 @@ export function lotFormulas(of: LotRuns): Sheet {
   return sheet;
 }
 
+/**
+ * Adds formulas that come with a part fetched by itself; they stand in every sheet from then on. What is read without asking
+ * for them stays as it is.
+ */
+export function addFormulas(group: () => readonly Quantity[]): void {
+  if (added.has(group)) return;
+  added.add(group);
+  sheets.clear();
+}
+
+const added = new Set<() => readonly Quantity[]>();
 const sheets = new Map<string, Sheet>();
 /** Far more combinations of runs than a site meets; a bound for pages that stay open for months. */
 const MOST_SHEETS = 64;
@@ -89,12 +102,13 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
   return Sheet.define([
     ...members(titration), ...members(acid), ...members(oil), ...members(catalystProduct), ...members(methanol),
     ...members(esterification), ...members(pretreatment), ...members(site), ...members(equipment), ...members(replicate), ...members(standard), ...members(titrationPlan), ...members(dispensing),
-    ...members(neutralising), ...members(after), ...members(productCheck), ...members(heat), ...members(prices), ...members(cost),
+    ...members(neutralising), ...members(after), ...members(productCheck), ...members(heat), ...members(prices), ...members(cost), ...members(acceptance), ...members(settlement), ...settlement.settlement(asItCame.freeFattyAcid),
     ...after.afterReaction('direct', constant('0', mole)), ...after.afterReaction('twoStep', named('pretreated.methanolLeft')),
     ...(['direct', 'twoStep'] as const).flatMap(heat.methoxideHeat), ...([1, 2, 3] as const).flatMap(heat.sulfuricAcidHeat), ...(['direct', 'twoStep'] as const).flatMap(cost.routeCost),
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
     ...direct, ...([1, 2, 3] as const).flatMap(dispensing.dispensedPass), ...(['direct', 'twoStep'] as const).flatMap(dispensing.dispensedBase), ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
+    ...[...added].flatMap((group) => group()),
   ]);
 }
 

@@ -45,4 +45,5 @@ export const HEAT_IN_WATER = source('Heat of solution in water at infinite dilut
 export const METHANOL_BOILING = source('Methanol boils at 64.7 °C at 1 atm', 'memory');
 export const ENERGY_BALANCE = source('Energy balance without loss to the surroundings: Q = m · c_p · ΔT', 'derived');
 export const COSTING = source('Amounts of the batch, each at the site’s own price', 'definition');
+export const SETTLEMENT = source('The contract’s own base, allowances and rates; no standard', 'definition');
 export const PRACTICE = source('Common practice, no source', 'practice');

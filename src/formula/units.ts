@@ -51,6 +51,8 @@ export const kilowattHourPerTonne = kilowattHour.per(tonne);
 export const currency = base('money', '¤');
 export const currencyPerKilogram = currency.per(kilogram);
 export const currencyPerTonne = currency.per(tonne);
+/** Of a deduction for each per cent. */
+export const currencyPerTonnePerPercent = currencyPerTonne.per(percent, '¤/t per %');
 export const currencyPerLitre = currency.per(litre);
 export const currencyPerHour = currency.per(hour);
 export const currencyPerKilowattHour = currency.per(kilowattHour);
@@ -79,6 +81,6 @@ export const TYPED_UNITS: ReadonlyMap<string, Unit> = new Map(
     gramPerMillilitre, kilogramPerCubicMetre, milligramPerGram, gramPerHundredGram, molePerMole,
     kilogramPerKilogram, perDegree, perMinute, joulePerMole, kilogramPerCubicMetreDegree, gramPerMillilitreDegree,
     kilojoulePerMole, kilojoulePerKilogramKelvin, kilowattHourPerTonne, currency, currencyPerKilogram, currencyPerTonne, currency.per(pound),
-    currencyPerLitre, currency.per(gallonUS), currencyPerHour, currencyPerKilowattHour,
+    currencyPerLitre, currencyPerTonnePerPercent, currency.per(gallonUS), currencyPerHour, currencyPerKilowattHour,
   ].map((unit) => [unit.symbol, unit]),
 );

@@ -1,4 +1,5 @@
 import { deBatchQuantities } from './de-batch-quantities.js';
+import { deDeliveryQuantities } from './de-delivery-quantities.js';
 import { deEvidenceQuantities } from './de-evidence-quantities.js';
 import type { QuantityTexts } from './en-quantities.js';
 
@@ -160,4 +161,5 @@ export const deQuantities: QuantityTexts = {
 
   ...deEvidenceQuantities,
   ...deBatchQuantities,
+  ...deDeliveryQuantities,
 };

@@ -1,8 +1,10 @@
 import { deBatchChoices, deBatchOptions } from './de-batch-quantities.js';
 import { deBudget } from './de-budget.js';
+import { deDeliveryChoices, deDeliveryOptions } from './de-delivery-quantities.js';
 import { deFaults, deProblems } from './de-problems.js';
 import { deQuantities } from './de-quantities.js';
 import { deNotices, deReasons, deReplicates } from './de-remarks.js';
+import { deRoute } from './de-route.js';
 import type { Texts } from './en.js';
 
 /** German. Labels begin with a noun, so that they can stand in a sentence as they are. */
@@ -42,6 +44,7 @@ export const de: Texts = {
     titrationTemperature: 'Titrationstemperatur',
     standardisationTemperature: 'Temperatur bei Titerstellung',
     titrantDate: 'Titer gestellt am',
+    currency: 'Währung, kurz',
     sampleDensity: 'Dichte der Probe',
     certificateAcidValue: 'Säurezahl laut Zertifikat',
     certificateFfa: 'FFA laut Zertifikat',
@@ -83,6 +86,7 @@ export const de: Texts = {
     runsAreDear: 'Weitere Bestimmung aufwendig',
     portionTable: 'Einwaage nach',
     ...deBatchChoices,
+    ...deDeliveryChoices,
   },
   options: {
     acidKnownFrom: {
@@ -125,6 +129,7 @@ export const de: Texts = {
     runsAreDear: { yes: 'ja', no: 'nein' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
     ...deBatchOptions,
+    ...deDeliveryOptions,
   },
   problems: deProblems,
   faults: deFaults,
@@ -167,30 +172,7 @@ export const de: Texts = {
   reasons: deReasons,
   notices: deNotices,
   replicates: deReplicates,
-  route: {
-    scale: 'FFA {ffa} % auf einer Skala von 0 bis {most} %; Direktgrenze {limit} %.',
-    scaleEmpty: 'Skala von 0 bis {most} %; Direktgrenze {limit} %. FFA noch nicht bekannt.',
-    odds: 'Der wahre Wert liegt mit {below} % Wahrscheinlichkeit bei höchstens {limit} %, mit {above} % darüber.',
-    directMark: 'Direkt- grenze',
-    pretreatmentMark: 'Verest.- grenze',
-    directAllTheSame: 'Trotzdem direkt',
-    twoStepAllTheSame: 'Trotzdem zweistufig',
-    passes: '{passes} × Veresterung',
-    onePass: '1 × Veresterung',
-    soap: 'Seife',
-    blend: 'Auf {limit} % verschneiden',
-    blendWith: 'Öl mit {ffa} %',
-    fromStock: 'Aus dem Bestand verschneiden',
-    published: 'Veröffentlichte Direktgrenzen',
-    publishedRange: '0,5 bis 5\u00a0%',
-    publishedList: [
-      'Säurezahl unter 1, etwa 0,5 % FFA: Wright et al. 1944; Freedman et al. 1984',
-      'unter 0,5 % FFA und 0,06 % Wasser, Talg: Ma et al. 1998',
-      'unter 1 % nach der Veresterung: Canakci und Van Gerpen 2001',
-      'unter 3 %: Kombe et al. 2013, Übersicht',
-      'bis etwa 5 % mit Laugenzuschlag: Van Gerpen 2005, aus dem Gedächtnis',
-    ],
-  },
+  route: deRoute,
   charge: {
     direct: 'Direkt',
     twoStep: 'Zweistufig',
@@ -237,6 +219,7 @@ export const de: Texts = {
     expected: 'Zu erwarten sind {low} bis {high} % FFA: eine Schätzung, vor der Umesterung nachtitrieren.',
     belowShown: 'unter {least}',
     after: 'Nach der Reaktion',
+    balance: 'Was hineingeht und was herauskommt',
     cost: 'Kosten beider Verfahren',
     overTime: 'Was mit der Zeit übrig bleibt',
     outcome: 'Was zu erwarten ist',

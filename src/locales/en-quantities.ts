@@ -1,4 +1,5 @@
 import { enBatchQuantities } from './en-batch-quantities.js';
+import { enDeliveryQuantities } from './en-delivery-quantities.js';
 import { enEvidenceQuantities } from './en-evidence-quantities.js';
 
 /**
@@ -163,6 +164,7 @@ export const enQuantities = {
 
   ...enEvidenceQuantities,
   ...enBatchQuantities,
+  ...enDeliveryQuantities,
 };
 
 /** The same names and words in any language. */

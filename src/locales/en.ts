@@ -1,8 +1,10 @@
 import { enBatchChoices, enBatchOptions } from './en-batch-quantities.js';
 import { enBudget } from './en-budget.js';
+import { enDeliveryChoices, enDeliveryOptions } from './en-delivery-quantities.js';
 import { enFaults, enProblems } from './en-problems.js';
 import { enQuantities } from './en-quantities.js';
 import { enNotices, enReasons, enReplicates } from './en-remarks.js';
+import { enRoute } from './en-route.js';
 
 /** English: every sentence a user can read. `{…}` stands for a figure or a word put in. */
 export const en = {
@@ -41,6 +43,7 @@ export const en = {
     titrationTemperature: 'Temperature now',
     standardisationTemperature: 'Temperature when standardised',
     titrantDate: 'Standardised on',
+    currency: 'Money, written',
     sampleDensity: 'Density of the sample',
     certificateAcidValue: 'Acid value on the certificate',
     certificateFfa: 'Free fatty acid on the certificate',
@@ -82,6 +85,7 @@ export const en = {
     runsAreDear: 'A further run is dear',
     portionTable: 'Portions after',
     ...enBatchChoices,
+    ...enDeliveryChoices,
   },
   options: {
     acidKnownFrom: {
@@ -124,6 +128,7 @@ export const en = {
     runsAreDear: { yes: 'yes', no: 'no' },
     portionTable: { 'iso-660': 'ISO 660', d664: 'ASTM D664', d974: 'ASTM D974' },
     ...enBatchOptions,
+    ...enDeliveryOptions,
   },
   problems: enProblems,
   faults: enFaults,
@@ -166,30 +171,7 @@ export const en = {
   reasons: enReasons,
   notices: enNotices,
   replicates: enReplicates,
-  route: {
-    scale: 'FFA {ffa} % on a scale from 0 to {most} %; direct limit {limit} %.',
-    scaleEmpty: 'Scale from 0 to {most} %; direct limit {limit} %. FFA not known yet.',
-    odds: 'The true figure is at or below {limit} % with a probability of {below} %, above it with {above} %.',
-    directMark: 'direct limit',
-    pretreatmentMark: 'acid step limit',
-    directAllTheSame: 'Direct all the same',
-    twoStepAllTheSame: 'Two-step all the same',
-    passes: '{passes} × acid step',
-    onePass: '1 × acid step',
-    soap: 'soap',
-    blend: 'Blend to {limit} %',
-    blendWith: 'oil of {ffa} %',
-    fromStock: 'Blend from stock',
-    published: 'Published direct limits',
-    publishedRange: '0.5 to 5\u00a0%',
-    publishedList: [
-      'acid value below 1, about 0.5 % FFA: Wright et al. 1944; Freedman et al. 1984',
-      'below 0.5 % FFA and 0.06 % water, tallow: Ma et al. 1998',
-      'below 1 % after the acid step: Canakci and Van Gerpen 2001',
-      'below 3 %: Kombe et al. 2013, review',
-      'up to about 5 % with extra alkali: Van Gerpen 2005, from memory',
-    ],
-  },
+  route: enRoute,
   charge: {
     direct: 'Direct',
     twoStep: 'Two-step',
@@ -236,6 +218,7 @@ export const en = {
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
     belowShown: 'below {least}',
     after: 'After the reaction',
+    balance: 'What goes in and what comes out',
     cost: 'Cost of both routes',
     overTime: 'What it leaves over time',
     outcome: 'What to expect',

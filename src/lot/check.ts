@@ -22,7 +22,7 @@ export function checkLotEntry(value: unknown, keys: KnownKeys): LotEntry | reado
 
 /** Checks a site profile from outside. Parts left out count as empty. */
 export function checkSiteProfile(value: unknown, keys: KnownKeys): SiteProfile | readonly Fault[] {
-  return check({ ...EMPTY_SITE }, value, { ...shared(keys), titrantRuns: runs(), titrantDate: text });
+  return check({ ...EMPTY_SITE }, value, { ...shared(keys), titrantRuns: runs(), titrantDate: text, currency });
 }
 
 /** Checks a document of this version against its shape; parts it leaves out are those of `empty`. */
@@ -40,6 +40,8 @@ export function check<Document extends object>(empty: Document, value: unknown, 
 
 const MOST_TEXT = 10_000;
 export const MOST_RUNS = 20;
+/** Letters of a currency that a table still has room for. */
+export const MOST_CURRENCY = 5;
 
 /** Looks at a value and adds what is wrong with it. */
 export type Check = (value: unknown, path: string, faults: Fault[]) => void;
@@ -50,6 +52,12 @@ const shared = (keys: KnownKeys): Shape => ({ version: () => undefined, name: te
 export function text(value: unknown, path: string, faults: Fault[]): void {
   if (typeof value !== 'string') faults.push({ code: 'wrong-type', path, found: kindOf(value) });
   else if (value.length > MOST_TEXT) faults.push({ code: 'too-long', path, found: String(value.length) });
+}
+
+/** A sign or a short name of money. */
+function currency(value: unknown, path: string, faults: Fault[]): void {
+  text(value, path, faults);
+  if (typeof value === 'string' && value.length > MOST_CURRENCY) faults.push({ code: 'too-long', path, found: String(value.length) });
 }
 
 /** An object with some of the named parts, and no other. */

@@ -171,4 +171,9 @@ export const DEFAULT_OPTIONS: Readonly<Record<string, string>> = {
   acidProofEquipment: 'yes',
   neutralisingAcid: 'phosphoric-dihydrogen',
   productAcidFrom: 'titration',
+  takesOneRun: 'yes',
+  takesCertificate: 'yes',
+  waterAbove: 'hold',
+  insolublesAbove: 'hold',
+  settledBy: 'as-delivered',
 };

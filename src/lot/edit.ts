@@ -9,7 +9,7 @@ export type RunCell = 'sample' | 'start' | 'end';
 export type Edit =
   | { readonly kind: 'figure'; readonly key: string; readonly figure: Figure | undefined }
   | { readonly kind: 'option'; readonly key: string; readonly option: string }
-  | { readonly kind: 'text'; readonly key: 'name' | 'source' | 'date' | 'titrantDate'; readonly text: string }
+  | { readonly kind: 'text'; readonly key: 'name' | 'source' | 'date' | 'titrantDate' | 'currency'; readonly text: string }
   | { readonly kind: 'cells'; readonly list: RunList; readonly cells: readonly CellEdit[] }
   | { readonly kind: 'strike'; readonly list: RunList; readonly index: number; readonly reason: string | undefined }
   | { readonly kind: 'replace'; readonly entry: LotEntry };

@@ -40,6 +40,8 @@ export interface SiteProfile {
   readonly titrantRuns?: readonly RunEntry[];
   /** Day of the standardisation, ISO 8601. */
   readonly titrantDate?: string;
+  /** How the site writes its money, e.g. `€`; prices are in `¤`, whatever that is. */
+  readonly currency?: string;
 }
 
 export const EMPTY_LOT: LotEntry = { version: FORMAT_VERSION, figures: {}, options: {}, runs: [], retestRuns: [] };

@@ -12,6 +12,13 @@ import type { Uncertainty } from './uncertainty.js';
 /** Sources that fall as runs are added. */
 const PER_RUN = ['u.repeatability', 'u.endPoint'];
 
+/** Keys of the quantities that a route is judged by, and of the uncertainty of the FFA. */
+export const ROUTE_KEYS = [
+  'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',
+  'u.repeatability', 'u.endPoint', 'u.blankEndPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
+  'u.khpEndPoint', 'u.khpBlankEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
+];
+
 /** The route of a lot with its guard band, and in a close call what would settle it. */
 export function judgedRoute(run: LotRun, entry: LotEntry, replicates: Replicates): Route {
   const { findings, givens } = run;
@@ -34,7 +41,8 @@ export function judgedRoute(run: LotRun, entry: LotEntry, replicates: Replicates
   return reasons.length || settle.length ? { ...route, reasons: [...reasons, ...route.reasons, ...settle] } : route;
 }
 
-function whatSettles({ u, budget }: Uncertainty, distance: Decimal, { runs }: Replicates): readonly Reason[] {
+/** What would put a result that is this far from a limit clear of it: further runs, or the source that no run takes away. */
+export function whatSettles({ u, budget }: Uncertainty, distance: Decimal, { runs }: Replicates): readonly Reason[] {
   const shareOf = (perRun: boolean): Decimal =>
     budget.filter(({ key }) => PER_RUN.includes(key) === perRun).reduce((sum, { share }) => sum.plus(share), new Decimal(0));
   const variance = u.pow(2);

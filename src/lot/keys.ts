@@ -1,4 +1,5 @@
 import { pricedChoices } from '../chemistry/cost.js';
+import { settlementChoices } from '../chemistry/settlement.js';
 import { lotFormulas } from '../chemistry/lot-formulas.js';
 import type { Unit } from '../formula/unit.js';
 import { currencyPerLitre, gramPerLitre, litre } from '../formula/units.js';
@@ -51,10 +52,11 @@ export const OPTION_BY_UNIT: Readonly<Record<string, { readonly field: string; o
 
 /** The choices that are decided on results, not typed. */
 const DECIDED: ReadonlySet<string> = new Set([
-  'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT), ...pricedChoices.map(({ key }) => key),
+  'passes', 'baseStepAcidFrom', 'temperatureTaken', 'averageBy', 'retest.averageBy', 'runsAgree', 'retest.runsAgree', ...Object.keys(OPTION_BY_UNIT), ...pricedChoices.map(({ key }) => key), ...settlementChoices.map(({ key }) => key),
 ]);
 
 const YES_NO = ['yes', 'no'] as const;
+const WHEN_ABOVE = ['hold', 'decline'] as const;
 
 /** Keys that an entry or a profile may hold. */
 export const KNOWN_KEYS: KnownKeys = knownKeys();
@@ -64,7 +66,7 @@ function knownKeys(): KnownKeys {
   const sheet = lotFormulas({ lot: none, retest: none, titrant: none });
   const figures = new Set<string>();
   for (const [key, quantity] of sheet.quantities) if (!quantity.is && !RUN_KEY.test(key)) figures.add(fieldOf(key));
-  const options = new Map<string, readonly string[]>([['acidProofEquipment', YES_NO], ['temperatureCorrected', YES_NO], ['runsAreDear', YES_NO]]);
+  const options = new Map<string, readonly string[]>([['acidProofEquipment', YES_NO], ['temperatureCorrected', YES_NO], ['runsAreDear', YES_NO], ['takesOneRun', YES_NO], ['takesCertificate', YES_NO], ['waterAbove', WHEN_ABOVE], ['insolublesAbove', WHEN_ABOVE]]);
   for (const [key, { options: known }] of sheet.choices) {
     if (!DECIDED.has(key)) options.set(key, known);
   }

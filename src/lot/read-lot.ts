@@ -1,19 +1,17 @@
 import { directCharge, twoStepCharge } from '../decision/charge.js';
-import { judgeReplicates } from '../decision/replicates.js';
-import type { Replicates } from '../decision/replicates.js';
 import type { Route } from '../decision/route.js';
 import type { Decimal } from '../formula/decimal.js';
 import { shownText } from '../formula/digits.js';
 import type { Plan } from '../formula/plan.js';
 import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
-import { checkLotEntry, checkSiteProfile } from './check.js';
-import type { Fault } from './check.js';
+import { checkedLot } from './checked.js';
 import { FORMAT_VERSION } from './entry.js';
-import type { LotEntry, RunEntry, SiteProfile } from './entry.js';
-import { judgedRoute } from './judged-route.js';
-import { KNOWN_KEYS, fieldOf } from './keys.js';
+import type { LotEntry, SiteProfile } from './entry.js';
+import { ROUTE_KEYS, judgedRoute } from './judged-route.js';
+import { fieldOf } from './keys.js';
 import type { LotFaults, LotReading, ReadingJson, UncertaintyJson } from './lot-reading.js';
+import { lotReplicates } from './lot-replicates.js';
 import { lotRun } from './lot-run.js';
 import type { LotRun } from './lot-run.js';
 import { missedTarget, noticesOn } from './notices.js';
@@ -38,18 +36,12 @@ export interface ReadOptions {
  * @param site a `SiteProfile`; the defaults stand where it says nothing
  */
 export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSION }, options: ReadOptions = {}): LotReading | LotFaults {
-  const lot = checkLotEntry(entry, KNOWN_KEYS);
-  const profile = checkSiteProfile(site, KNOWN_KEYS);
-  if (isFaults(lot) || isFaults(profile)) {
-    const faults = [
-      ...(isFaults(lot) ? lot.map((fault) => ({ ...fault, in: 'entry' as const })) : []),
-      ...(isFaults(profile) ? profile.map((fault) => ({ ...fault, in: 'site' as const })) : []),
-    ];
-    return { version: FORMAT_VERSION, faults };
-  }
+  const checked = checkedLot(entry, site);
+  if ('faults' in checked) return checked;
+  const { lot, profile } = checked;
   const { only } = options;
   const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
-  const replicates = { lot: replicatesOf(run, '', lot.runs), retest: replicatesOf(run, 'retest.', lot.retestRuns) };
+  const replicates = { lot: lotReplicates(run, '', lot.runs), retest: lotReplicates(run, 'retest.', lot.retestRuns) };
   const route = judgedRoute(run, lot, replicates.lot);
   const passes = only ? undefined : passesOf(run);
   if (!only) compute(run, lot, profile, passes);
@@ -66,20 +58,6 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
     problems: problemsIn(readings),
     notices: only ? [] : noticesOn(lot, profile, run, passes, options.today),
   };
-}
-
-const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
-
-const ROUTE_KEYS = [
-  'freeFattyAcid', 'directLimit', 'pretreatmentLimit', 'waterContent', 'waterLimitBase', 'waterLimitAcid',
-  'u.repeatability', 'u.endPoint', 'u.blankEndPoint', 'u.burette', 'u.balance', 'u.sampleVolume', 'u.sampleDensity', 'u.temperature', 'u.titrant', 'u.certificate',
-  'u.khpEndPoint', 'u.khpBlankEndPoint', 'u.khpBurette', 'u.khpBalance', 'u.khpPurity', 'u.khpMolarMass', 'u.khpTemperature', 'u.khpRepeatability',
-];
-
-function replicatesOf({ findings, givens }: LotRun, prefix: '' | 'retest.', runs: readonly RunEntry[]): Replicates {
-  const titrated = givens.chosen(`${prefix}acidKnownFrom`) === 'titration';
-  const counted = titrated ? runs.filter((run) => runState(run) === 'counted').length : 0;
-  return judgeReplicates(findings, prefix, counted, givens.chosen('runsAreDear') === 'yes');
 }
 
 /** Results that stand with their ± beside them. */

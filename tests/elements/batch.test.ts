@@ -65,6 +65,22 @@ const priced = site({
 });
 
 describe('cost of both routes', () => {
+  test('the site’s money has the name that the site gives it, in fields, table, sentences and plot', async () => {
+    const element = await placeCost(certified('2'), priced);
+    const changed: SiteProfile[] = [];
+    element.addEventListener('esterway-site-change', ({ site: profile }) => changed.push(profile));
+    await unfold(element, enCost.prices);
+    expect(words(element)).toContain('¤');
+    await enter(element, en.fields.currency, '€');
+    expect(changed.at(-1)).toMatchObject({ currency: '€', figures: priced.figures });
+    expect(words(element)).not.toContain('¤');
+    expect(words(element)).toMatch(/Two-step costs [\d,. ]+ € (more|less) a tonne of oil than direct/);
+    expect(words(element)).toContain('€/kg');
+    await enter(element, en.fields.currency, '');
+    expect(changed.at(-1)).not.toHaveProperty('currency');
+    expect(words(element)).toContain('¤');
+  });
+
   test('names every price that the totals leave out', async () => {
     const left = /Without a price, and left out: ([^.]*)\./.exec(words(await placeCost(sour, site({ figures: { oilPrice: '600 ¤/t' } }))))?.[1] ?? '';
     for (const field of ['methanolPrice', 'KOH.price', 'sulfuricPrice', 'energyPrice', 'esterPrice']) expect(left).toContain(fieldName(field, en));

@@ -29,10 +29,10 @@ describe('the default figures', () => {
 
   it('leave only what belongs to a lot or is not always needed', () => {
     const without = [...KNOWN_KEYS.figures].filter((key) => !(key in DEFAULT_FIGURES)).sort();
-    const money = /[pP]rice$|^(?:energy|hours)/; // only the site knows
+    const money = /[pP]rice$|^(?:energy|hours|settlement\.)/; // only the site knows
     expect(without.filter((key) => !money.test(key))).toEqual([
       'KOCH3-solution.heatOfSolution', 'KOCH3.heatOfSolution', 'NaOCH3-solution.heatOfSolution', 'NaOCH3.heatOfSolution',
-      'blank', 'bromophenolTitre', 'buretteCapacityTyped', 'buretteToleranceTyped', 'catalystStep', 'certificateAcidValue', 'certificateFfa', 'expectedAcidValue', 'iodineValue', 'measuredOilDensity', 'methanolStep', 'oilAmount',
+      'acceptedInsolubles', 'acceptedWater', 'arrivalTemperature', 'blank', 'blendingLimit', 'bromophenolTitre', 'buretteCapacityTyped', 'buretteToleranceTyped', 'catalystStep', 'certificateAcidValue', 'certificateFfa', 'expectedAcidValue', 'highestArrival', 'iodineValue', 'lowestArrival', 'measuredOilDensity', 'methanolStep', 'oilAmount',
       'otherAcidMolarMass', 'phenolphthaleinTitre', 'productAcidTyped', 'productSample', 'productTitre', 'retest.certificateAcidValue', 'retest.certificateFfa', 'soapSample', 'soapTitrantStrength', 'sulfuricStep', 'titrantFlaskVolume', 'titrantStrength', 'titrantWeighedMass',
       'titrationTemperature', 'vesselVolume',
     ]);

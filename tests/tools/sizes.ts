@@ -14,17 +14,17 @@ export const workerFile = resolve(root, 'dist/browser/esterway-worker.min.js');
 export const coreMeasured = resolve(root, 'node_modules/.cache/size/core.min.js');
 
 const late = [
-  { name: 'parts of the batch', file: lateFile('more'), most: 45_000 },
+  { name: 'parts of the batch', file: lateFile('more'), most: 48_000 },
   { name: 'deliveries and stock', file: lateFile('intake'), most: 30_000 },
 ] as const;
 export const lateFiles: readonly string[] = late.map(({ file }) => file);
 
 /** Most bytes after gzip. */
 export const budgets = [
-  { name: 'script file', file: scriptFile, most: 110_000 },
+  { name: 'script file', file: scriptFile, most: 115_000 },
   ...late,
-  { name: 'core with decimal.js', file: coreMeasured, most: 48_000 },
-  { name: 'worker file', file: workerFile, most: 45_000 },
+  { name: 'core with decimal.js', file: coreMeasured, most: 50_000 },
+  { name: 'worker file', file: workerFile, most: 46_000 },
 ] as const;
 
 export function gzipBytes(file: string): number {

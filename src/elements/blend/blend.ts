@@ -92,6 +92,7 @@ export class EsterwayBlend extends SectionElement {
     words: () => this.words,
     tag: () => this.languageTag,
     units: () => this.columnUnits,
+    money: (unit) => this.inMoney(unit),
     problemAt: (field) => this.stockProblem(field),
     change: (items) => this.put({ items }),
     remove: (row) => this.removeRow(row),
@@ -168,7 +169,7 @@ export class EsterwayBlend extends SectionElement {
       if (given && value && isKnown(value)) inForce[key] = 'text' in given && value.eq(given.text) ? given.text : value.toString();
     }
     return {
-      words, tag: this.languageTag, us: this.desk.units === 'us', limits: inForce, rule: limits.massRule ?? 'at-least',
+      words, tag: this.languageTag, us: this.desk.units === 'us', currency: this.desk.site.currency, limits: inForce, rule: limits.massRule ?? 'at-least',
       lot: (item) => items[item]?.name || `${words.row} ${item + 1}`,
     };
   }

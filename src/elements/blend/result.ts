@@ -10,12 +10,15 @@ import { fill } from '../../locales/fill.js';
 import type { Widened } from '../../locales/en.js';
 import type { enBlend } from '../../locales/en-blend.js';
 import type { BlendFound, BlendRefused } from '../../lot/blend.js';
+import { inMoney } from '../parts/money.js';
 
 /** The sentences, how figures are written, and what the limits are. */
 export interface BlendTongue {
   readonly words: Widened<typeof enBlend>;
   readonly tag: string;
   readonly us: boolean;
+  /** How the site writes its money. */
+  readonly currency: string | undefined;
   /** What an item is called. */
   readonly lot: (item: number) => string;
   /** The limits in force, % and kg, as decimal text. */
@@ -46,7 +49,7 @@ export function blendResult(found: BlendFound, tongue: BlendTongue): TemplateRes
   const { words, tag } = tongue;
   const { goal, mass, sour, sourThere, cost, shares, parts, step } = found;
   const ffa = shareText(shares.freeFattyAcid ?? '0', 'freeFattyAcid', tongue.limits.freeFattyAcid);
-  const unit = tongue.us ? '¤/lb' : '¤/kg';
+  const unit = inMoney(tongue.us ? '¤/lb' : '¤/kg', tongue.currency);
   const perMass = cost === undefined ? '' : shownText(new Decimal(cost).div(tongue.us ? kilogram.convert(new Decimal(mass), pound) : mass), { decimals: 3 });
   const figures = { mass: massText(mass, tongue), sour: massText(sour, tongue), sourThere: massText(sourThere, tongue), ffa: showNumber(ffa, tag), cost: showNumber(money(cost ?? '0'), tag), perMass: showNumber(perMass, tag), unit };
   const { pair } = found;
@@ -54,7 +57,7 @@ export function blendResult(found: BlendFound, tongue: BlendTongue): TemplateRes
     <div role="status"><p><b>${fill(words.found[goal], figures)}</b></p></div>
     ${found.remarks.map((code) => html`<p class="gate">${fill(words.remarks[code], { step: massText(step, tongue) })}</p>`)}
     ${partsTable(parts, tongue)}
-    ${propertyTable(found, tongue, cost === undefined ? undefined : `${figures.cost}\u00a0¤`)}
+    ${propertyTable(found, tongue, cost === undefined ? undefined : `${figures.cost}\u00a0${inMoney('¤', tongue.currency)}`)}
     ${pair ? html`<p class="small">${fill(words.pair, { lot: tongue.lot(pair.item), most: showNumber(shownText(new Decimal(pair.most), { decimals: 1 }), tag), limit: words.names[pair.by] })}</p>` : nothing}
     ${worths(found, tongue)}
     <p class="small quiet">${words.titrate}</p>

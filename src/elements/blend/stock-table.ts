@@ -24,6 +24,8 @@ export interface StockTableHost {
   tag(): string;
   /** The unit of each column. */
   units(): Readonly<Record<ItemFigure, string>>;
+  /** A unit with the name of the site's money put in. */
+  money(unit: string): string;
   problemAt(field: string): string | undefined;
   change(items: readonly StockItem[]): void;
   remove(row: number): void;
@@ -57,7 +59,7 @@ export class StockTable implements ReactiveController {
     const units = this.#section.units();
     // one empty row at the end to type the next lot in
     const rows = items.length < MOST_ITEMS ? [...items, {}] : items;
-    const label = (key: ItemFigure): TemplateResult => html`${columns[key]} <span class="unit">${units[key]}</span>`;
+    const label = (key: ItemFigure): TemplateResult => html`${columns[key]} <span class="unit">${this.#section.money(units[key])}</span>`;
     return html`
       <table class="stock" @keydown=${{ handleEvent: (event: KeyboardEvent) => this.#onKeydown(event, rows), capture: true }} @focusout=${this.#onLeave}>
         <caption class="unseen">
@@ -112,7 +114,7 @@ export class StockTable implements ReactiveController {
           </div>
         </td>
         ${ITEM_FIGURES.map(
-          (key) => html`<td data-label=${`${columns[key]} ${units[key]}`}>
+          (key) => html`<td data-label=${`${columns[key]} ${this.#section.money(units[key])}`}>
             <esterway-figure
               cell
               exportparts="line: field-line, input: field-input"

@@ -11,6 +11,7 @@ import { fieldName, quantityName } from '../../locales/quantity-name.js';
 import { breakEven } from '../../lot/break-even.js';
 import type { BreakEven } from '../../lot/break-even.js';
 import { unpriced } from '../../lot/unpriced.js';
+import { fieldStyles } from '../parts/field-styles.js';
 import { FurtherReadings } from '../parts/further-readings.js';
 import { plotStyles, ticks } from '../parts/plot.js';
 
@@ -42,6 +43,7 @@ export class EsterwayCost extends FurtherReadings {
   static override styles = [
     ...FurtherReadings.styles,
     plotStyles,
+    fieldStyles,
     css`
       table {
         inline-size: 100%;
@@ -95,7 +97,7 @@ export class EsterwayCost extends FurtherReadings {
       <details class="no-print">
         <summary>${texts.prices}</summary>
         <p class="quiet small">${texts.money}</p>
-        <div class="fields">${this.priceFields().map((key) => this.siteFigureField(key))}</div>
+        <div class="fields">${this.currencyField()} ${this.priceFields().map((key) => this.siteFigureField(key))}</div>
       </details>
       ${known ? html`${this.table()} ${this.comparison()} ${this.plot()}` : html`<p class="quiet">${this.hasPrice ? this.whyUnknown('cost.direct.perTonne') : texts.none}</p>`}
     `;
@@ -121,7 +123,7 @@ export class EsterwayCost extends FurtherReadings {
     const name = (part: string): string => quantityName(`cost.twoStep.${part}`, this.texts).split(': ').at(-1) ?? part;
     const row = (label: string, part: string): TemplateResult => html`<tr><th scope="row">${label}</th>${ROUTES.map((route) => html`<td>${cell(route, part)}</td>`)}</tr>`;
     return html`<table>
-      <thead><tr><th scope="col">${texts.part}, ¤</th><th scope="col">${texts.direct}</th><th scope="col">${texts.twoStep}</th></tr></thead>
+      <thead><tr><th scope="col">${texts.part}, ${this.inMoney('¤')}</th><th scope="col">${texts.direct}</th><th scope="col">${texts.twoStep}</th></tr></thead>
       <tbody>${shown.map((part) => row(name(part), part))}</tbody>
       <tfoot>${row(texts.batch, 'total')} ${row(texts.perTonne, 'perTonne')} ${row(`${texts.yield}, kg`, 'yield')}</tfoot>
     </table>`;
@@ -175,7 +177,7 @@ export class EsterwayCost extends FurtherReadings {
     return html`<svg class="plot" viewBox="0 0 ${WIDTH} ${HEIGHT}" role="img" aria-label=${label}>
       ${ticks(high, 4).map((cost) => svg`<path class="grid" d="M40 ${y(cost)} H${WIDTH - 8}" /><text class="end" x="36" y=${Number(y(cost)) + 4}>${this.number(String(cost))}</text>`)}
       ${ticks(widest, 4).map((share) => svg`<text class="middle" x=${x(share)} y=${HEIGHT - 16}>${this.number(String(share))}</text>`)}
-      <text class="end" x=${WIDTH - 8} y=${HEIGHT - 3}>% FFA</text><text x="0" y="8">¤/t</text>
+      <text class="end" x=${WIDTH - 8} y=${HEIGHT - 3}>% FFA</text><text x="0" y="8">${this.inMoney('¤/t')}</text>
       <path class="line" d=${line('direct')} /><path class="line broken" d=${line('twoStep')} />
       ${named('direct', texts.direct)}${named('twoStep', texts.twoStep)}
       ${crossings.map((crossing) => svg`<path class="limit" d="M${x(Number(crossing.ffa))} 10 V${HEIGHT - 30}" />`)}

@@ -1,7 +1,7 @@
 import { css, html, nothing } from 'lit';
 import { live } from 'lit/directives/live.js';
 import { fieldStyles } from '../parts/field-styles.js';
-import { moveFocus } from '../parts/focus-order.js';
+import { onEnter } from '../parts/focus-order.js';
 import { SectionElement } from '../parts/section.js';
 
 const AMOUNT_UNITS = { metric: ['kg', 't', 'L', 'lb', 'US gal'], us: ['lb', 'US gal', 'kg', 'L', 't'] } as const;
@@ -94,16 +94,10 @@ export class EsterwayLot extends SectionElement {
           autocomplete="off"
           .value=${live(this.desk.entry[key] ?? '')}
           @input=${(event: InputEvent) => this.edit({ kind: 'text', key, text: (event.target as HTMLInputElement).value })}
-          @keydown=${this.onKeydown}
+          @keydown=${onEnter}
         />
       </div>
     </div>`;
-  }
-
-  private onKeydown(event: KeyboardEvent): void {
-    if (event.key !== 'Enter' || event.isComposing) return;
-    event.preventDefault();
-    moveFocus(event.target as HTMLElement, event.shiftKey ? -1 : 1);
   }
 
   /** A date as the language writes it; what is no date stays as it was typed. */

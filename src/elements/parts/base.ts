@@ -11,6 +11,7 @@ import { DeskHolder } from './desk-holder.js';
 import { EsterwayEditEvent } from './events.js';
 import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
+import { inMoney } from './money.js';
 
 /** What a part says in each language; it comes with the part. */
 export interface PartTexts<T> {
@@ -95,7 +96,12 @@ export abstract class LotElement extends GuestElement {
 
   /** The texts of a part that is fetched by itself, in the page's language. */
   protected textsOf<T>(part: PartTexts<T>): T {
-    return part[this.languageTag.startsWith('de') ? 'de' : 'en'];
+    return inMoney(part[this.languageTag.startsWith('de') ? 'de' : 'en'], this.desk.site.currency);
+  }
+
+  /** A unit or a sentence with the name of the site's money put in. */
+  protected inMoney(text: string): string {
+    return inMoney(text, this.desk.site.currency);
   }
 
   protected get languageTag(): string {

@@ -9,6 +9,7 @@ import { fieldStyles } from './field-styles.js';
 import { moveFocus } from './focus-order.js';
 import { GuestElement } from './guest.js';
 import { LanguageController } from './language.js';
+import { inMoney } from './money.js';
 import { tokens } from './styles.js';
 
 /** A person typed in a figure field; the figure is undefined when the field was emptied. */
@@ -50,6 +51,8 @@ export class FigureField extends GuestElement {
   @property({ attribute: false }) standing: Figure | undefined;
   /** Symbols of the units offered; the first one stands until another is chosen. */
   @property({ attribute: false }) units: readonly string[] = [];
+  /** How the site writes its money, in units of price. */
+  @property({ attribute: false }) money = '';
   /** What is wrong, as a sentence with its remedy. */
   @property({ attribute: false }) problem: string | undefined;
   @property({ attribute: false }) note: string | undefined;
@@ -112,10 +115,10 @@ export class FigureField extends GuestElement {
 
   private unitPart(texts: Texts) {
     const { unit } = this;
-    if (this.units.length < 2) return unit ? html`<span class="unit">${unit}</span>` : nothing;
+    if (this.units.length < 2) return unit ? html`<span class="unit">${inMoney(unit, this.money)}</span>` : nothing;
     const offered = this.units.includes(unit) ? this.units : [unit, ...this.units];
     return html`<select class="unit" part="unit" aria-label=${texts.field.unitOf.replace('{label}', this.label)} @change=${this.onUnit}>
-      ${offered.map((symbol) => html`<option value=${symbol} ?selected=${symbol === unit}>${symbol}</option>`)}
+      ${offered.map((symbol) => html`<option value=${symbol} ?selected=${symbol === unit}>${inMoney(symbol, this.money)}</option>`)}
     </select>`;
   }
 

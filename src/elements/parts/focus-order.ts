@@ -37,3 +37,10 @@ function outermost(from: Element): Element {
   }
   return bound;
 }
+
+/** Enter in a field of plain text goes on to the next field, with Shift to the one before. */
+export function onEnter(event: KeyboardEvent): void {
+  if (event.key !== 'Enter' || event.isComposing) return;
+  event.preventDefault();
+  moveFocus(event.target as HTMLElement, event.shiftKey ? -1 : 1);
+}

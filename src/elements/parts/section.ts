@@ -79,6 +79,7 @@ export abstract class SectionElement extends LotElement {
       .figure=${entry.figures[key]}
       .standing=${this.standing(key)}
       .units=${units}
+      .money=${this.desk.site.currency ?? ''}
       .problem=${this.problemAt(key)}
       @figure-input=${(event: FigureInputEvent) => this.edit({ kind: 'figure', key, figure: event.figure })}
     ></esterway-figure>`;
@@ -167,7 +168,7 @@ export abstract class SectionElement extends LotElement {
   protected plusMinus(key: string): string | undefined {
     const shown = this.lot?.uncertainties[key]?.shown;
     const unit = this.reading(key)?.unit;
-    return shown === undefined ? undefined : fill(this.texts.result.plusMinus, { expanded: `${this.number(shown)}\u00a0${unit ?? ''}`.trim() });
+    return shown === undefined ? undefined : fill(this.texts.result.plusMinus, { expanded: `${this.number(shown)}\u00a0${this.inMoney(unit ?? '')}`.trim() });
   }
 
   /** Why a figure is not known, as a sentence. */
@@ -203,7 +204,7 @@ export abstract class SectionElement extends LotElement {
     const reading = this.reading(key);
     if (reading?.value === undefined || reading.shown === undefined) return undefined;
     const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
-    return unit ? `${this.number(text)}\u00a0${unit}` : this.number(text);
+    return unit ? `${this.number(text)}\u00a0${this.inMoney(unit)}` : this.number(text);
   }
 
   /** Whether an amount is known and more than nothing. */
@@ -218,7 +219,7 @@ export abstract class SectionElement extends LotElement {
       return html`<span class="figure quiet" title=${this.whyUnknown(key)}>–<span class="unseen">${this.whyUnknown(key)}</span></span>`;
     }
     const { text, unit } = amountIn(reading.value, reading.shown, reading.unit, this.desk.units);
-    return html`<button class="open figure" part="figure" type="button" title=${this.texts.result.openWorking} @click=${() => this.open(key)}>${this.number(text)}${unit && withUnit ? html` <span class="unit">${unit}</span>` : nothing}</button>`;
+    return html`<button class="open figure" part="figure" type="button" title=${this.texts.result.openWorking} @click=${() => this.open(key)}>${this.number(text)}${unit && withUnit ? html` <span class="unit">${this.inMoney(unit)}</span>` : nothing}</button>`;
   }
 
   protected open(key: string): void {

@@ -119,6 +119,7 @@ export class EsterwayRoute extends SectionElement {
         </div>
       </div>
       ${this.others()}
+      <esterway-later needs="intake" .label=${this.texts.route.delivery} .content=${delivery}></esterway-later>
       <esterway-later needs="intake" .label=${this.texts.route.fromStock} .content=${this.blend}></esterway-later>
       <details class="no-print">
         <summary>${this.texts.route.published} <span class="quiet">${this.texts.route.publishedRange}</span></summary>
@@ -194,6 +195,8 @@ export class EsterwayRoute extends SectionElement {
     `;
   }
 }
+
+const delivery = (): unknown => html`<esterway-triage bare></esterway-triage>`;
 
 declare global {
   interface HTMLElementTagNameMap {

@@ -167,13 +167,13 @@ export class EsterwayWorking extends SectionElement {
           ? html`<div class="formula" part="formula" tabindex="0" role="group" aria-label=${`${shown.symbol.text} = ${shown.formula.general.text}`}>
                 ${mathElement({ tag: 'math', content: [{ tag: 'mrow', content: [...inside(shown.symbol.math), { tag: 'mo', content: '=' }, ...inside(shown.formula.general.math)] }] })}
               </div>
-              <p class="figures" part="figures">= ${shown.formula.figures.text}</p>`
+              <p class="figures" part="figures">= ${this.inMoney(shown.formula.figures.text)}</p>`
           : html`<p class="figures">${texts.working.given}: ${texts.working.givenFrom[reading?.from === 'formula' ? 'none' : (reading?.from ?? 'none')]}</p>`}
-        <p class="outcome">= <b>${shown.result ?? this.whyUnknown(this.of)}</b></p>
+        <p class="outcome">= <b>${shown.result === undefined ? this.whyUnknown(this.of) : this.inMoney(shown.result)}</b></p>
         ${reading?.value !== undefined && reading.value.length > 10
           ? html`<details>
               <summary>${texts.working.fullValue}</summary>
-              <p class="small quiet full">${this.number(reading.value)} ${reading.unit}</p>
+              <p class="small quiet full">${this.number(reading.value)} ${this.inMoney(reading.unit)}</p>
             </details>`
           : nothing}
         ${this.budget()} ${this.sources(shown)} ${this.rests(shown)}
@@ -187,7 +187,7 @@ export class EsterwayWorking extends SectionElement {
     const known = uncertainty(entry, site, this.of);
     if (!known?.budget.length) return nothing;
     const simulation = (): unknown => html`<esterway-simulation .of=${this.of}></esterway-simulation>`;
-    return html`${budgetView(known, this.reading(this.of)?.unit ?? '', this.texts, this.languageTag, (key) => (this.of = key))}
+    return html`${budgetView(known, this.inMoney(this.reading(this.of)?.unit ?? ''), this.texts, this.languageTag, (key) => (this.of = key))}
       <esterway-later .label=${this.texts.budget.simulation} .content=${simulation}></esterway-later>`;
   }
 

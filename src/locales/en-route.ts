@@ -1,0 +1,26 @@
+/** The route, the burette scale, and the ways not taken. */
+export const enRoute = {
+  scale: 'FFA {ffa} % on a scale from 0 to {most} %; direct limit {limit} %.',
+  scaleEmpty: 'Scale from 0 to {most} %; direct limit {limit} %. FFA not known yet.',
+  odds: 'The true figure is at or below {limit} % with a probability of {below} %, above it with {above} %.',
+  directMark: 'direct limit',
+  pretreatmentMark: 'acid step limit',
+  directAllTheSame: 'Direct all the same',
+  twoStepAllTheSame: 'Two-step all the same',
+  passes: '{passes} × acid step',
+  onePass: '1 × acid step',
+  soap: 'soap',
+  blend: 'Blend to {limit} %',
+  blendWith: 'oil of {ffa} %',
+  delivery: 'Delivery: take it, hold it or decline it',
+  fromStock: 'Blend from stock',
+  published: 'Published direct limits',
+  publishedRange: '0.5 to 5\u00a0%',
+  publishedList: [
+    'acid value below 1, about 0.5 % FFA: Wright et al. 1944; Freedman et al. 1984',
+    'below 0.5 % FFA and 0.06 % water, tallow: Ma et al. 1998',
+    'below 1 % after the acid step: Canakci and Van Gerpen 2001',
+    'below 3 %: Kombe et al. 2013, review',
+    'up to about 5 % with extra alkali: Van Gerpen 2005, from memory',
+  ],
+};
