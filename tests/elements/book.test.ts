@@ -23,6 +23,7 @@ describe('keeping the lot on the bench', () => {
     expect(told).toEqual([['string', 1]]);
     expect(rowNames(element)).toEqual(['HK-0417']);
     expect(words(rows(element)[0]!)).toContain('FFA 4.29 %');
+    expect(words(rows(element)[0]!)).toContain(enBook.states['for-pretreatment']);
     element.remove();
     const again = await placeBook();
     expect(rowNames(again)).toEqual(['HK-0417']);

@@ -6,7 +6,6 @@ import type { BookFound } from '../../book/catalogue.js';
 import type { LotRecord } from '../../book/record.js';
 import type { BookRefused } from '../../book/refusal.js';
 import { sameJson } from '../../book/same.js';
-import type { StateOf } from '../../book/summary.js';
 import { deBook } from '../../locales/de-book.js';
 import { enBook } from '../../locales/en-book.js';
 import { fill } from '../../locales/fill.js';
@@ -17,6 +16,7 @@ import { SectionElement } from '../parts/section.js';
 import { lotName, momentWords, refusalWords } from './book-words.js';
 import type { BookTongue } from './book-words.js';
 import { EsterwayKeptEvent } from './events.js';
+import { judgedState } from './judged-state.js';
 import { lotRow } from './row.js';
 import { saveFile } from './save-file.js';
 import { queryOf, searchFields } from './search.js';
@@ -59,8 +59,8 @@ export class EsterwayBook extends SectionElement {
 
   /** Name of the database. */
   @property() name = 'esterway-book';
-  /** Says what becomes of a delivery, as a word; where it says nothing, the verdict of the route is noted. */
-  @property({ attribute: false }) stateOf: StateOf | undefined;
+  /** Says what becomes of a delivery, as a word: by the limits of the site, unless set otherwise. */
+  @property({ attribute: false }) stateOf = judgedState;
 
   @state() private book: Book | undefined;
   @state() private refused: BookRefused | undefined;
@@ -121,7 +121,7 @@ export class EsterwayBook extends SectionElement {
   private async borrow(): Promise<void> {
     this.giveBack();
     this.#borrowed = this.name;
-    const loan = (this.#loan = borrowBook(this.name, (entry, site) => this.stateOf?.(entry, site)));
+    const loan = (this.#loan = borrowBook(this.name, (entry, site) => this.stateOf(entry, site)));
     const book = await loan.book;
     if (this.#loan !== loan) return;
     if ('refused' in book) return void (this.refused = book);
