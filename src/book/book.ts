@@ -90,6 +90,7 @@ export class Book {
   readonly #options: BookOptions;
   #end: (() => void) | undefined;
   #lost: BookRefused | undefined;
+  #revision = 0;
 
   constructor(
     private readonly store: Store,
@@ -124,6 +125,11 @@ export class Book {
   /** Why what other tabs keep is no longer seen; undefined while all is well. */
   get lost(): BookRefused | undefined {
     return this.#lost;
+  }
+
+  /** Another number whenever something came in. */
+  get revision(): number {
+    return this.#revision;
   }
 
   /** Calls back whenever something came in, from wherever. Gives back what ends it. */
@@ -291,6 +297,7 @@ export class Book {
   }
 
   #tell(): void {
+    this.#revision += 1;
     for (const listener of this.#listeners) listener();
   }
 

@@ -205,4 +205,18 @@ describe('two windows at once', () => {
     expect(rowNames(second)).toEqual(['HK-0412', 'HK-0417']);
     second.remove();
   });
+
+  test('under another name there is another book', async () => {
+    const element = await placeBook();
+    await click(button(element, enBook.keep));
+    await until(element, kept('HK-0417', '1'));
+    const before = name;
+    newName();
+    element.name = name;
+    await until(element, enBook.empty);
+    element.name = before;
+    await vi.waitFor(() => expect(rowNames(element)).toEqual(['HK-0417']));
+    element.remove();
+    indexedDB.deleteDatabase(`_pouch_${before}`);
+  });
 });

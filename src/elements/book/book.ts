@@ -17,6 +17,7 @@ import { lotName, momentWords, refusalWords } from './book-words.js';
 import type { BookTongue } from './book-words.js';
 import { EsterwayKeptEvent } from './events.js';
 import { judgedState } from './judged-state.js';
+import { onceAFrame } from './once-a-frame.js';
 import { lotRow } from './row.js';
 import { saveFile } from './save-file.js';
 import { queryOf, searchFields } from './search.js';
@@ -81,7 +82,7 @@ export class EsterwayBook extends SectionElement {
   #loan: BookLoan | undefined;
   #unwatch: (() => void) | undefined;
   #found: BookFound | undefined;
-  #foundFor: readonly [Search, number] | undefined;
+  #foundFor: readonly unknown[] | undefined;
 
   override connectedCallback(): void {
     super.connectedCallback();
@@ -93,9 +94,9 @@ export class EsterwayBook extends SectionElement {
     this.giveBack();
   }
 
-  protected override updated(changed: PropertyValues<this>): void {
-    // set before the first rendering it is the name that was opened
-    if (changed.has('name') && this.hasUpdated && this.#borrowed !== undefined && this.#borrowed !== this.name) void this.borrow();
+  protected override willUpdate(changed: PropertyValues<this>): void {
+    super.willUpdate(changed);
+    if (this.#borrowed !== undefined && this.#borrowed !== this.name) void this.borrow();
   }
 
   protected override get heading(): string {
@@ -126,7 +127,7 @@ export class EsterwayBook extends SectionElement {
     if (this.#loan !== loan) return;
     if ('refused' in book) return void (this.refused = book);
     this.book = book;
-    this.#unwatch = book.watch(() => this.onCameIn());
+    this.#unwatch = book.watch(onceAFrame(() => this.onCameIn()));
   }
 
   private giveBack(): void {
@@ -138,16 +139,17 @@ export class EsterwayBook extends SectionElement {
 
   /** Something came in, from here or another window. */
   private onCameIn(): void {
-    this.#found = undefined;
     this.requestUpdate();
     const { opened: open, book } = this;
     if (open && book?.newestOf(open.lot)?.id !== open.newest) void this.openLot(open.lot);
   }
 
   private get found(): BookFound {
-    if (!this.#found || this.#foundFor?.[0] !== this.search || this.#foundFor[1] !== this.shown) {
-      this.#found = this.book?.find({ ...queryOf(this.search), limit: this.shown }) ?? { total: 0, lots: [] };
-      this.#foundFor = [this.search, this.shown];
+    const { book, search, shown } = this;
+    const key = [search, shown, book?.revision] as const;
+    if (!this.#found || key.some((part, i) => part !== this.#foundFor?.[i])) {
+      this.#found = book?.find({ ...queryOf(search), limit: shown }) ?? { total: 0, lots: [] };
+      this.#foundFor = key;
     }
     return this.#found;
   }
