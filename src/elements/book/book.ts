@@ -1,5 +1,5 @@
 import { html, nothing } from 'lit';
-import type { PropertyValues, TemplateResult } from 'lit';
+import type { TemplateResult } from 'lit';
 import { property, state } from 'lit/decorators.js';
 import type { Book, Kept } from '../../book/book.js';
 import type { BookFound } from '../../book/catalogue.js';
@@ -94,8 +94,7 @@ export class EsterwayBook extends SectionElement {
     this.giveBack();
   }
 
-  protected override willUpdate(changed: PropertyValues<this>): void {
-    super.willUpdate(changed);
+  protected override willUpdate(): void {
     if (this.#borrowed !== undefined && this.#borrowed !== this.name) void this.borrow();
   }
 
