@@ -23,6 +23,9 @@ const runtime = [
   'decimal.js',
   'simple-statistics',
   'yalps',
+  'events',
+  'pouchdb-core',
+  'pouchdb-adapter-idb',
 ];
 
 const shared: UserConfig = {
@@ -92,7 +95,7 @@ const builds: Record<string, () => UserConfig> = {
         formats: ['es'],
       },
       rolldownOptions: {
-        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps'],
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps', 'events', /^pouchdb-/],
         output: {
           preserveModules: true,
           preserveModulesRoot: at('./src'),
