@@ -6,8 +6,8 @@ import type { Plugin, UserConfig } from 'vite';
 import { defineConfig, type ViteUserConfig } from 'vitest/config';
 import { chromiumArgs, chromiumPath, pageDefaults } from './tests/tools/browser.ts';
 import { scriptFiles } from './.config/script-files.ts';
-import { sharedChunk } from './.config/shared-chunk.ts';
-import { coreMeasured, lateFile, lateFiles, printSizes, scriptFile, workerFile } from './tests/tools/sizes.ts';
+import { chunkOf } from './.config/chunk-of.ts';
+import { coreMeasured, lateFile, lateFiles, printSizes, rowsWorkerFile, scriptFile, workerFile } from './tests/tools/sizes.ts';
 
 const at = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
 
@@ -33,7 +33,7 @@ const shared: UserConfig = {
     alias: [
       // demo pages and tests may import the package by its public name
       { find: /^esterway$/, replacement: at('./src/index.ts') },
-      { find: /^esterway\/(define|core|working|more|intake|stock|balance)$/, replacement: at('./src') + '/$1.ts' },
+      { find: /^esterway\/(define|core|working|more|intake|intake-book|sheets|stock|balance)$/, replacement: at('./src') + '/$1.ts' },
     ],
     dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
   },
@@ -45,6 +45,7 @@ const plainFiles: Readonly<Record<string, string>> = {
   'esterway.min.js': scriptFile,
   ...Object.fromEntries(lateFiles.map((file) => [basename(file), file])),
   'esterway-worker.min.js': workerFile,
+  'esterway-rows-worker.min.js': rowsWorkerFile,
 };
 
 const asTheyLie: Plugin = {
@@ -83,7 +84,7 @@ const builds: Record<string, () => UserConfig> = {
   lib: () => ({
     ...shared,
     publicDir: false,
-    plugins: [workerFrom("new Worker(new URL('../../../browser/esterway-worker.min.js', import.meta.url), { type: 'module' })")],
+    plugins: [workersFrom((file) => `new Worker(new URL('../../../browser/${file}', import.meta.url), { type: 'module' })`)],
     build: {
       target: 'es2022',
       outDir: 'dist',
@@ -91,7 +92,7 @@ const builds: Record<string, () => UserConfig> = {
       minify: false,
       sourcemap: true,
       lib: {
-        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts'), intake: at('./src/intake.ts'), stock: at('./src/stock.ts'), balance: at('./src/balance.ts') },
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts'), intake: at('./src/intake.ts'), 'intake-book': at('./src/intake-book.ts'), sheets: at('./src/sheets.ts'), stock: at('./src/stock.ts'), balance: at('./src/balance.ts') },
         formats: ['es'],
       },
       rolldownOptions: {
@@ -109,6 +110,8 @@ const builds: Record<string, () => UserConfig> = {
   script: () => bundle('./src/define.ts', 'Esterway', scriptFile),
   /** What computes Monte Carlo off the page's thread: one file for the script file and for the ES modules. Built after the script file. */
   worker: () => bundle('./src/monte-carlo-worker.ts', 'EsterwayWorker', workerFile),
+  /** What works rows of a sheet out off the page's thread, likewise. */
+  rows: () => bundle('./src/rows-worker.ts', 'EsterwayRowsWorker', rowsWorkerFile),
   /** What `esterway/core` weighs with its dependency inside; only measured, never shipped. */
   core: () => bundle('./src/core.ts', 'EsterwayCore', coreMeasured),
   /** The demo pages as static files. */
@@ -128,16 +131,16 @@ const builds: Record<string, () => UserConfig> = {
 };
 
 function bundle(entry: string, name: string, file: string): UserConfig {
-  const beside = file === workerFile;
+  const beside = file === workerFile || file === rowsWorkerFile;
   const { version } = JSON.parse(readFileSync(at('./package.json'), 'utf8')) as { version: string };
   return {
     ...shared,
     publicDir: false,
     plugins: [
       smallTemplates,
-      workerFrom('undefined'),
+      workersFrom(() => 'undefined'),
       ...(file === scriptFile ? [scriptFiles({ main: basename(file), name, fileOf: (chunk) => basename(lateFile(chunk.replace('define-', ''))) })] : []),
-      ...(beside ? [sizeTable] : []),
+      ...(file === rowsWorkerFile ? [sizeTable] : []),
     ],
     build: {
       target: 'es2022',
@@ -154,7 +157,7 @@ function bundle(entry: string, name: string, file: string): UserConfig {
         preserveEntrySignatures: 'allow-extension', // what the parts share stays in the script file
         output: {
           chunkFileNames: '[name].js',
-          ...(file === scriptFile && { codeSplitting: { includeDependenciesRecursively: false, groups: [{ name: sharedChunk(at(entry)), debugName: 'shared' }] } }),
+          ...(file === scriptFile && { codeSplitting: { includeDependenciesRecursively: false, groups: [{ name: chunkOf(at(entry)), debugName: 'main and shared' }] } }),
           postBanner: `/*! Esterway ${version}, MIT. Holds ${beside ? '' : 'Lit (BSD-3-Clause) and '}decimal.js (MIT): LICENSES.md */`,
         },
       },
@@ -176,22 +179,25 @@ const smallTemplates: Plugin = {
   },
 };
 
+/** The built file of each worker, by the module that it is made from. */
+const WORKERS: Readonly<Record<string, string>> = { 'monte-carlo-worker': basename(workerFile), 'rows-worker': basename(rowsWorkerFile) };
+
 /**
- * The sources start their worker as Vite serves it; a build starts the built one. The words are put in at
+ * The sources start their workers as Vite serves them; a build starts the built ones. The words are put in at
  * the end, since Vite would bundle a worker of its own for what it sees.
  */
-function workerFrom(built: string): Plugin {
-  const written = /new Worker\(new URL\('\.\.\/\.\.\/monte-carlo-worker\.ts', import\.meta\.url\), \{ type: 'module' \}\)/;
-  const standIn = '__esterway_worker__';
+function workersFrom(built: (file: string) => string): Plugin {
+  const written = /new Worker\(new URL\('\.\.\/\.\.\/([\w-]+)\.ts', import\.meta\.url\), \{ type: 'module' \}\)/g;
   return {
-    name: 'worker-from',
+    name: 'workers-from',
     enforce: 'pre',
     transform(code, id) {
       if (!id.endsWith('/worker-place.ts')) return undefined;
-      if (!written.test(code)) throw new Error('worker-place.ts starts its worker in other words');
-      return { code: code.replace(written, standIn), map: null };
+      const found = [...code.matchAll(written)].map(([, name]) => name ?? '');
+      if (found.sort().join() !== Object.keys(WORKERS).sort().join()) throw new Error('worker-place.ts starts its workers in other words');
+      return { code: code.replace(written, (_, name: string) => `__esterway_${name.replaceAll('-', '$')}__`), map: null };
     },
-    renderChunk: (code) => (code.includes(standIn) ? { code: code.replace(standIn, built), map: null } : undefined),
+    renderChunk: (code) => (/__esterway_[\w$]+?__/.test(code) ? { code: code.replace(/__esterway_([\w$]+?)__/g, (_, name: string) => built(WORKERS[name.replaceAll('$', '-')] ?? '')), map: null } : undefined),
   };
 }
 

@@ -26,6 +26,7 @@ const entries = {
   index: { values: [...Object.keys(folders), 'core', 'working'] },
   more: { values: Object.keys(folders) },
   intake: { values: Object.keys(folders) },
+  'intake-book': { values: Object.keys(folders) },
   define: { values: [...Object.keys(folders), 'core', 'index'] },
 };
 

@@ -22,6 +22,8 @@ export const de: Texts = {
     label: 'Ölannahme und Ansatz',
     untitled: 'Neue Partie',
     undo: 'Rückgängig',
+    book: 'Eingangsbuch',
+    rows: 'Zeilen aus einer Tabelle',
     newLot: 'Neue Partie',
     print: 'Ansatz drucken',
     newLotDone: 'Neue Partie begonnen; Maßlösung und Methode bleiben. „Rückgängig“ holt die letzte zurück.',

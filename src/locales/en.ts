@@ -21,6 +21,8 @@ export const en = {
     label: 'Oil intake and charge',
     untitled: 'New lot',
     undo: 'Undo',
+    book: 'Intake book',
+    rows: 'Rows from a sheet',
     newLot: 'New lot',
     print: 'Print the charge',
     newLotDone: 'A new lot is begun; titrant and method stay. Undo brings the last one back.',

@@ -1,5 +1,7 @@
 import { css, html } from 'lit';
 import { property, query, state } from 'lit/decorators.js';
+import type { SheetHost } from '../../exchange/sheet-host/sheet-host.js';
+import type { ColumnMemory } from '../../exchange/table/columns.js';
 import type { BlendStock } from '../../lot/blend-stock.js';
 import { nextLot } from '../../lot/edit.js';
 import { EMPTY_LOT } from '../../lot/entry.js';
@@ -12,6 +14,7 @@ import type {} from '../charge/charge-sheet.js';
 import type { EsterwayStockChangeEvent } from '../blend/events.js';
 import type { EsterwayCharge } from '../charge/charge.js';
 import { loadParts } from '../parts/late-parts.js';
+import type { EsterwayColumnsChangeEvent } from '../rows/events.js';
 import type { EsterwayWorking } from '../working/working.js';
 
 /**
@@ -25,6 +28,9 @@ import type { EsterwayWorking } from '../working/working.js';
  * @fires {EsterwaySiteChangeEvent} esterway-site-change - a person changed a site value; keep it and set it again next time
  * @fires {EsterwayOpenEvent} esterway-open - a person wants to see how a figure was worked out; the panel opens it
  * @fires {EsterwayStockChangeEvent} esterway-stock-change - a person changed what is in stock; keep it and set `stock` again next time
+ *
+ * @fires {EsterwayKeptEvent} esterway-kept - a person kept or amended a lot in the intake book
+ * @fires {EsterwayColumnsChangeEvent} esterway-columns-change - a person corrected what a column of a sheet is; keep it and set `columnMemory` again next time
  *
  * @slot - more actions, beside the panel's own
  *
@@ -61,6 +67,9 @@ export class EsterwayPanel extends LotElement {
       }
       .columns > * {
         border-block-end: 1px solid var(--_rule);
+      }
+      .later {
+        padding-inline: 38px 14px;
       }
       .actions {
         display: flex;
@@ -109,6 +118,11 @@ export class EsterwayPanel extends LotElement {
   /** What is in stock to blend, and the limits of the blend; a page may keep it. */
   @property({ attribute: false }) stock: BlendStock | undefined;
 
+  /** The sheet around the page, if there is one: its rows are read, and results written beside them. */
+  @property({ attribute: false }) sheet: SheetHost | undefined;
+  /** What columns of sheets were taken for before; a page may keep it. */
+  @property({ attribute: false }) columnMemory: ColumnMemory | undefined;
+
   @query('esterway-working') private readonly working!: EsterwayWorking | null;
   @query('esterway-charge') private readonly charge!: EsterwayCharge | null;
   /** What was just done, for those who do not see it happen. */
@@ -145,9 +159,19 @@ export class EsterwayPanel extends LotElement {
         <esterway-route exportparts=${parts} .stock=${this.stock} @esterway-stock-change=${this.onStock}></esterway-route>
         <esterway-charge exportparts=${parts}></esterway-charge>
         <esterway-working class="no-print" exportparts=${parts}></esterway-working>
+        <div class="later no-print">
+          <esterway-later needs="book" .label=${this.texts.panel.book} .content=${book}></esterway-later>
+          <esterway-later needs="sheets" .label=${this.texts.panel.rows} .content=${this.rows}></esterway-later>
+        </div>
         <esterway-site-values class="no-print" folded exportparts=${parts}></esterway-site-values>
       </div>
     `;
+  }
+
+  private readonly rows = (): unknown => html`<esterway-rows bare .host=${this.sheet} .columnMemory=${this.columnMemory} @esterway-columns-change=${this.onColumns}></esterway-rows>`;
+
+  private onColumns({ columnMemory }: EsterwayColumnsChangeEvent): void {
+    this.columnMemory = columnMemory;
   }
 
   private onStock({ stock }: EsterwayStockChangeEvent): void {
@@ -187,6 +211,8 @@ export class EsterwayPanel extends LotElement {
     this.said = this.texts.panel.undone;
   }
 }
+
+const book = (): unknown => html`<esterway-book bare exportparts="figure"></esterway-book>`;
 
 declare global {
   interface HTMLElementTagNameMap {

@@ -2,11 +2,13 @@ import { runBeside, script, shelf } from './beside.js';
 
 /**
  * Groups of parts that a page seldom needs, each in a file of its own that is fetched when a person opens one of them:
- * what belongs to the batch, and what belongs to the stock.
+ * what belongs to the batch, to deliveries and the stock, the intake book with its database, and what reads and writes sheets.
  */
 const GROUPS = {
   more: async () => (await import('../define-more.js')).defineMore(),
   intake: async () => (await import('../define-intake.js')).defineIntake(),
+  book: async () => (await import('../define-book.js')).defineBook(),
+  sheets: async () => (await import('../define-sheets.js')).defineSheets(),
 } as const;
 export type LateParts = keyof typeof GROUPS;
 

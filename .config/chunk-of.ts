@@ -3,25 +3,30 @@ import type { Rolldown } from 'vite';
 type Modules = Pick<Rolldown.ChunkingContext, 'getModuleInfo'>;
 
 /**
- * Which chunk a module goes to: what two late groups need and the script file does not is `shared`, so that no group holds a copy.
- * All else is left to the bundler.
+ * Which chunk a module goes to: what the script file needs at once is `main`; what two late groups need beside that is `shared`, so
+ * that no group holds a copy. All else is left to the bundler.
  *
  * @param entry the module that the script file begins with
  */
-export function sharedChunk(entry: string): (id: string, modules: Modules) => string | undefined {
-  let shared: ReadonlySet<string> | undefined;
+export function chunkOf(entry: string): (id: string, modules: Modules) => string | undefined {
+  let places: Places | undefined;
   return (id, modules) => {
-    shared ??= sharedModules(entry, modules);
-    return shared.has(id) ? 'shared' : undefined;
+    places ??= placesIn(entry, modules);
+    return places.main.has(id) ? 'main' : places.shared.has(id) ? 'shared' : undefined;
   };
 }
 
-function sharedModules(entry: string, modules: Modules): ReadonlySet<string> {
+interface Places {
+  readonly main: ReadonlySet<string>;
+  readonly shared: ReadonlySet<string>;
+}
+
+function placesIn(entry: string, modules: Modules): Places {
   const inMain = reached(entry, modules);
   const late = new Set([...inMain].flatMap((id) => modules.getModuleInfo(id)?.dynamicallyImportedIds ?? []));
   const counts = new Map<string, number>();
   for (const start of late) for (const id of reached(start, modules)) if (!inMain.has(id)) counts.set(id, (counts.get(id) ?? 0) + 1);
-  return new Set([...counts].flatMap(([id, count]) => (count > 1 ? [id] : [])));
+  return { main: inMain, shared: new Set([...counts].flatMap(([id, count]) => (count > 1 ? [id] : []))) };
 }
 
 /** All modules that one imports at once, directly or not, itself among them. */
