@@ -1,9 +1,9 @@
-import { MOST_DIGITS } from '../../formula/decimal.js';
-import { Decimal } from '../../formula/decimal.js';
+import { Decimal, MOST_DIGITS } from '../../formula/decimal.js';
 import { fieldLabel } from '../../locales/quantity-name.js';
 import type { LotEntry, RunEntry } from '../../lot/entry.js';
 import type { Figure } from '../../lot/figure.js';
 import { KNOWN_KEYS } from '../../lot/keys.js';
+import { MOST_SHEET_DIGITS } from '../results/row.js';
 import { address, number, text } from './cells.js';
 import type { Cell, SheetPage } from './cells.js';
 import type { FigureCells } from './figure-formula.js';
@@ -93,8 +93,6 @@ export function figureCell(figure: Figure | undefined): Cell {
 
 /** Text that `readFigure` takes; more digits than that are refused there, and must not pass for a number here. */
 const isDecimal = (of: string): boolean => /^-?\d{1,200}(?:\.\d{1,200})?$/.test(of) && of.replace(/[-.]/g, '').replace(/^0+/, '').length <= MOST_DIGITS;
-
-const MOST_SHEET_DIGITS = 15;
 
 export const shortenedIn = (cell: Cell, where: string): readonly Shortened[] =>
   cell?.kind === 'number' && new Decimal(cell.text).precision() > MOST_SHEET_DIGITS ? [{ where, text: cell.text }] : [];

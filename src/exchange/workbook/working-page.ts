@@ -1,4 +1,3 @@
-import { strictCellFormula } from '../../formula/cell-formula.js';
 import type { Quantity } from '../../formula/quantity.js';
 import { isKnown } from '../../formula/reading.js';
 import type { Outcome } from '../../formula/reading.js';
@@ -9,6 +8,7 @@ import type { LotRun } from '../../lot/lot-run.js';
 import { address, formula, literal, text } from './cells.js';
 import type { Cell, SheetPage, SheetRow } from './cells.js';
 import { inUnit, withinLimits } from './figure-formula.js';
+import { FormulaTexts } from './formula-texts.js';
 import type { LotsPage } from './lots-page.js';
 import { isDecided, optionFormula } from './option-formula.js';
 import type { LotCells } from './option-formula.js';
@@ -33,7 +33,8 @@ export function workingPage(keys: readonly string[], lots: readonly WorkedLot[],
   const { heads, sheets } = words.own;
   const rowOf = new Map(keys.map((key, at) => [key, at + HEADS]));
   const addressIn = (column: number) => (key: string): string => address(column, rowOf.get(key) ?? 0);
-  const columns = lots.map((lot, at): LotColumn => new LotColumn(lot, {
+  const formulas = new FormulaTexts(rowOf);
+  const columns = lots.map((lot, at): LotColumn => new LotColumn(lot, SITE_COLUMN + 1 + at, formulas, {
     working: addressIn(SITE_COLUMN + 1 + at),
     figure: (field) => typed.figure(field, at),
     option: (key) => typed.option(key, at),
@@ -89,7 +90,13 @@ class SiteColumn {
 }
 
 class LotColumn {
-  constructor(private readonly lot: WorkedLot, private readonly cells: LotCells, private readonly notKnown: string) {}
+  constructor(
+    private readonly lot: WorkedLot,
+    private readonly column: number,
+    private readonly formulas: FormulaTexts,
+    private readonly cells: LotCells,
+    private readonly notKnown: string,
+  ) {}
 
   cell(key: string, site: SiteColumn): Cell {
     const { run } = this.lot;
@@ -105,12 +112,12 @@ class LotColumn {
   }
 
   private figure(quantity: Quantity, site: SiteColumn): string {
-    const { working } = this.cells;
-    if (quantity.is) return withinLimits(strictCellFormula(quantity.is, this.lot.run.sheet, working), quantity.limits, working);
+    const computed = this.formulas.of(quantity, this.lot.run.sheet, this.column);
+    if (computed !== undefined) return computed;
     const standing = site.address(quantity.key);
     const typed = this.cells.figure(fieldOf(quantity.key));
     if (!typed) return standing ?? 'NA()';
-    const given = withinLimits(inUnit(typed, quantity.unit), quantity.limits, working);
+    const given = withinLimits(inUnit(typed, quantity.unit), quantity.limits, this.cells.working);
     return standing ? `IF(${typed.figure}="",${standing},${given})` : given;
   }
 }
