@@ -23,6 +23,7 @@ const runtime = [
   'decimal.js',
   'simple-statistics',
   'yalps',
+  'fflate',
 ];
 
 const shared: UserConfig = {
@@ -92,7 +93,7 @@ const builds: Record<string, () => UserConfig> = {
         formats: ['es'],
       },
       rolldownOptions: {
-        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps'],
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps', 'fflate'],
         output: {
           preserveModules: true,
           preserveModulesRoot: at('./src'),
