@@ -91,6 +91,8 @@ function written(cell: Cell, at: string): string {
   if (!cell) return '';
   const place = `r="${at}" s="${styleOf(cell)}"`;
   switch (cell.kind) {
+    case 'blank':
+      return `<c ${place}/>`;
     case 'text':
       return `<c ${place} t="inlineStr"><is><t xml:space="preserve">${cellText(cell.text)}</t></is></c>`;
     case 'number':

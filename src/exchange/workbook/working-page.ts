@@ -2,7 +2,6 @@ import type { Quantity } from '../../formula/quantity.js';
 import { isKnown } from '../../formula/reading.js';
 import type { Outcome } from '../../formula/reading.js';
 import { fill } from '../../locales/fill.js';
-import { fieldLabel, quantityName } from '../../locales/quantity-name.js';
 import { fieldOf } from '../../lot/keys.js';
 import type { LotRun } from '../../lot/lot-run.js';
 import { address, formula, literal, text } from './cells.js';
@@ -14,6 +13,7 @@ import { isDecided, optionFormula } from './option-formula.js';
 import type { LotCells } from './option-formula.js';
 import { choicesIn } from './rows-needed.js';
 import type { SitePage } from './site-page.js';
+import { choiceName, rowName } from './words.js';
 import type { WorkbookWords } from './words.js';
 
 /** A lot in the working, by its column. */
@@ -61,11 +61,10 @@ function shownKeys(lots: readonly WorkedLot[]): ReadonlySet<string> {
   return new Set(lots.flatMap(({ touched, run: { sheet } }) => [...touched].flatMap((key) => [key, ...choicesIn(sheet, key)])));
 }
 
-function describe(key: string, lots: readonly WorkedLot[], { texts }: WorkbookWords): readonly Cell[] {
+function describe(key: string, lots: readonly WorkedLot[], words: WorkbookWords): readonly Cell[] {
   const quantity = lots.map(({ run: { sheet } }) => sheet.quantities.get(key)).find((one) => one !== undefined);
-  const name = quantity ? quantityName(key, texts) : fieldLabel(key, texts);
-  const sources = quantity?.cites.map(({ title, mark }) => fill(texts.site.source, { title, mark: texts.marks[mark] })) ?? [];
-  return [text(name.charAt(0).toUpperCase() + name.slice(1)), text(key, 'quiet'), text(quantity?.symbol ?? ''), text(quantity?.unit.symbol ?? ''), text(sources.join('; '), 'quiet')];
+  const sources = quantity?.cites.map(({ title, mark }) => fill(words.texts.site.source, { title, mark: words.texts.marks[mark] })) ?? [];
+  return [text(quantity ? rowName(key, words) : choiceName(key, words)), text(key, 'quiet'), text(quantity?.symbol ?? ''), text(quantity?.unit.symbol ?? ''), text(sources.join('; '), 'quiet')];
 }
 
 /** A formula that shows a word where it comes to no figure. */

@@ -7,6 +7,7 @@ import type { LotEntry, RunEntry } from '../../../src/core.js';
 import { columnName } from '../../../src/exchange/workbook/cells.js';
 import { cellText } from '../../../src/exchange/workbook/xml-text.js';
 import { workbookOf } from '../../../src/exchange/workbook/workbook.js';
+import { choiceName, rowName, workbookWords } from '../../../src/exchange/workbook/words.js';
 import { deWorkbook } from '../../../src/locales/de-workbook.js';
 import { enWorkbook } from '../../../src/locales/en-workbook.js';
 import { isKnown } from '../../../src/formula/reading.js';
@@ -47,6 +48,9 @@ function entryIn(keys: readonly string[], row: readonly CellValue[]): LotEntry {
 
 /** The entry with each figure as the number it is, so that 8.40 and 8.4 are alike. */
 const asNumbers = (entry: LotEntry): unknown => JSON.parse(JSON.stringify(entry), (key, value: unknown) => (key === 'text' ? Number(value) : value)) as unknown;
+
+/** A key in which no word has been found for anything; one that is a word itself has no point or capital in it. */
+const bare = (key: string): string => (/[.A-Z]/.test(key) ? key.toLowerCase() : '');
 
 /** How many brackets stand inside each other. */
 function deepest(formula: string): number {
@@ -113,6 +117,14 @@ describe('a workbook of lots', () => {
     const standing = book.rows('Site').find((cells) => cells[1] === 'NaOH.assay')!;
     expect(standing.slice(2, 5)).toEqual([98, '%', expect.stringContaining('recalled from the source')]);
     expect(book.rows('Site').find((cells) => cells[1] === 'KOH.assay')!.slice(2, 5)).toEqual([89.5, '%', 'set by the site']);
+  });
+
+  it('names every row in words', () => {
+    for (const words of [workbookWords('en'), workbookWords('de')]) {
+      const { quantities, choices } = lotRun(lots[0]!, PLANT).sheet;
+      for (const key of quantities.keys()) expect(rowName(key, words).toLowerCase()).not.toBe(bare(key));
+      for (const key of choices.keys()) expect(choiceName(key, words).toLowerCase()).not.toBe(bare(key));
+    }
   });
 
   it('speaks German', () => {
