@@ -31,7 +31,7 @@ const shared: UserConfig = {
     alias: [
       // demo pages and tests may import the package by its public name
       { find: /^esterway$/, replacement: at('./src/index.ts') },
-      { find: /^esterway\/(define|core|working|more|intake|stock)$/, replacement: at('./src') + '/$1.ts' },
+      { find: /^esterway\/(define|core|working|more|intake|stock|balance)$/, replacement: at('./src') + '/$1.ts' },
     ],
     dedupe: ['lit', 'lit-html', 'lit-element', '@lit/reactive-element'],
   },
@@ -89,7 +89,7 @@ const builds: Record<string, () => UserConfig> = {
       minify: false,
       sourcemap: true,
       lib: {
-        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts'), intake: at('./src/intake.ts'), stock: at('./src/stock.ts') },
+        entry: { index: at('./src/index.ts'), define: at('./src/define.ts'), core: at('./src/core.ts'), working: at('./src/working.ts'), more: at('./src/more.ts'), intake: at('./src/intake.ts'), stock: at('./src/stock.ts'), balance: at('./src/balance.ts') },
         formats: ['es'],
       },
       rolldownOptions: {

@@ -19,6 +19,7 @@ const entries = {
   core: { values: below },
   working: { values: below },
   stock: { values: below },
+  balance: { values: below },
   'monte-carlo-worker': { values: below },
   index: { values: [...Object.keys(folders), 'core', 'working'] },
   more: { values: Object.keys(folders) },
@@ -27,7 +28,7 @@ const entries = {
 };
 
 /** What knows no page: no DOM, no Lit. */
-export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts', 'src/working.ts', 'src/stock.ts'];
+export const pageless = [...below.map((folder) => `src/${folder}/**/*.ts`), 'src/core.ts', 'src/working.ts', 'src/stock.ts', 'src/balance.ts'];
 
 /** @param {string} path with forward slashes, below src */
 function roomOf(path) {

@@ -12,6 +12,7 @@ export { defineEsterway } from './elements/define-all.js';
 export type { EsterwayBlend } from './elements/blend/blend.js';
 export type { EsterwayStockChangeEvent } from './elements/blend/events.js';
 export type { BlendStock, StockItem, StockLimits } from './lot/blend-stock.js';
+export type { EsterwayBalance } from './elements/balance/balance.js';
 export type { EsterwayTriage } from './elements/triage/triage.js';
 export type { EsterwayCurve } from './elements/curve/curve.js';
 export type { EsterwayTitrant } from './elements/titrant/titrant.js';

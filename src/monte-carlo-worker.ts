@@ -1,7 +1,12 @@
 // Computes a Monte Carlo check off the page's thread. One order a worker: to cancel it, end the worker.
 
+import { balanceFormulas } from './chemistry/balance.js';
+import { addFormulas } from './chemistry/lot-formulas.js';
 import { monteCarloSlices } from './lot/monte-carlo.js';
 import type { MonteCarloOrder, MonteCarloReport } from './lot/monte-carlo.js';
+
+// a figure of the balance can be asked for like any other
+addFormulas(balanceFormulas);
 
 const report = (said: MonteCarloReport): void => self.postMessage(said);
 

@@ -7,6 +7,7 @@ defineMore();
 
 export { EsterwayCurve } from './elements/curve/curve.js';
 export { EsterwayAfter } from './elements/after/after.js';
+export { EsterwayBalance } from './elements/balance/balance.js';
 export { EsterwayCost } from './elements/cost/cost.js';
 export { EsterwayTitrant } from './elements/titrant/titrant.js';
 export { defineMore } from './elements/define-more.js';

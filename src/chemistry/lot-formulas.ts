@@ -61,6 +61,17 @@ export function lotFormulas(of: LotRuns): Sheet {
   return sheet;
 }
 
+/**
+ * Adds formulas that come with a part fetched by itself; they stand in every sheet from then on. What is read without asking
+ * for them stays as it is.
+ */
+export function addFormulas(group: () => readonly Quantity[]): void {
+  if (added.has(group)) return;
+  added.add(group);
+  sheets.clear();
+}
+
+const added = new Set<() => readonly Quantity[]>();
 const sheets = new Map<string, Sheet>();
 /** Far more combinations of runs than a site meets; a bound for pages that stay open for months. */
 const MOST_SHEETS = 64;
@@ -97,6 +108,7 @@ function build({ lot, retest, titrant }: LotRuns): Sheet {
     ...titrated.all, ...retitrated.all, ...standardisation(titrant), ...asItCame.all, ...afterAcidStep.all, alkaliPerLitreOfOil(asItCame.acidContent),
     glyceridesBy, fat, ...fats.all, conversion, entrainedEster, acidAmount,
     ...direct, ...([1, 2, 3] as const).flatMap(dispensing.dispensedPass), ...(['direct', 'twoStep'] as const).flatMap(dispensing.dispensedBase), ...first.all, ...second.all, ...third.all, ...pretreated.all, ...twoStep, site.blendOil(asItCame.freeFattyAcid),
+    ...[...added].flatMap((group) => group()),
   ]);
 }
 

@@ -1,4 +1,5 @@
 import { EsterwayAfter } from './after/after.js';
+import { EsterwayBalance } from './balance/balance.js';
 import { ChargeSheet } from './charge/charge-sheet.js';
 import { ResidualPlot } from './charge/residual.js';
 import { EsterwayCost } from './cost/cost.js';
@@ -20,6 +21,7 @@ const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstruct
   ['esterway-simulation', SimulationElement],
   ['esterway-second-check', SecondCheckElement],
   ['esterway-check-sheet', CheckSheetElement],
+  ['esterway-balance', EsterwayBalance],
 ];
 
 /** Registers the parts of the batch that a page seldom needs. A tag that is taken already stays as it is. */

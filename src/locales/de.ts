@@ -219,6 +219,7 @@ export const de: Texts = {
     expected: 'Zu erwarten sind {low} bis {high} % FFA: eine Schätzung, vor der Umesterung nachtitrieren.',
     belowShown: 'unter {least}',
     after: 'Nach der Reaktion',
+    balance: 'Was hineingeht und was herauskommt',
     cost: 'Kosten beider Verfahren',
     overTime: 'Was mit der Zeit übrig bleibt',
     outcome: 'Was zu erwarten ist',

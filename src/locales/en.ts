@@ -218,6 +218,7 @@ export const en = {
     expected: 'Expected {low} to {high} % FFA: an estimate, retest before the base step.',
     belowShown: 'below {least}',
     after: 'After the reaction',
+    balance: 'What goes in and what comes out',
     cost: 'Cost of both routes',
     overTime: 'What it leaves over time',
     outcome: 'What to expect',

@@ -4,13 +4,23 @@ import type { Texts } from './en.js';
 type Words = Readonly<Record<string, string>>;
 
 /** `retest.run1.titre`, `titrant.run1.portion`, `pass2.conversion.slow`, `direct.catalyst`: `cost.direct.total`: where, and which run or pass, and what. */
-const KEY = /^(retest\.|titrant\.|after\.|heat\.|cost\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
+const KEY = /^(retest\.|titrant\.|after\.|heat\.|cost\.|balance\.)?(?:(run|pass)(\d+)\.|(direct\.|twoStep\.|pretreated\.|planned\.|u\.))?([^.](?:.*?[^.])?)(\.slow|\.fast)?$/;
 /** A site value that each catalyst or acid has for itself: `KOH.assay`. */
 const PRODUCT = /^(.+)(\.assay|\.baseLoad|\.density|\.solubility|\.heatOfSolution|\.price)$/;
 
+const added = new WeakMap<Texts, Words>();
+
+/** Adds names that come with a part fetched by itself. */
+export function addQuantityNames(texts: Texts, names: Words): void {
+  const words = namesOf(texts);
+  if (!Object.keys(names).every((key) => key in words)) added.set(texts, { ...words, ...names });
+}
+
+const namesOf = (texts: Texts): Words => added.get(texts) ?? texts.quantities;
+
 /** The name of a quantity in words, `run 1: net titre`; the key itself where it has no name. */
 export function quantityName(key: string, texts: Texts): string {
-  const quantities: Words = texts.quantities;
+  const quantities = namesOf(texts);
   return inContext(key, texts, (around, base) => around.map((part) => own(quantities, part + base)).find(Boolean) ?? own(quantities, base)) ?? labelOf(key, texts) ?? key;
 }
 
@@ -45,7 +55,7 @@ const capitalNouns = ({ quantities: { titre } }: Texts): boolean => titre !== ti
 
 /** What `nameOf` finds for the last part of a key, between the words for what stands around it. */
 function inContext(key: string, texts: Texts, nameOf: (around: readonly string[], base: string) => string | undefined): string | undefined {
-  const { quantities } = texts;
+  const quantities = namesOf(texts);
   const [, group = '', counted, n = '', part, base = '', pace] = KEY.exec(key) ?? [];
   const context = (counted && `${counted}.`) ?? part ?? '';
   const name = nameOf([group, context].filter(Boolean), base) ?? productName(base, texts);

@@ -5,12 +5,11 @@ import { shownText } from '../formula/digits.js';
 import type { Plan } from '../formula/plan.js';
 import { Refused, isKnown } from '../formula/reading.js';
 import type { Outcome, Problem } from '../formula/reading.js';
-import { checkLotEntry, checkSiteProfile } from './check.js';
-import type { Fault } from './check.js';
+import { checkedLot } from './checked.js';
 import { FORMAT_VERSION } from './entry.js';
 import type { LotEntry, SiteProfile } from './entry.js';
 import { ROUTE_KEYS, judgedRoute } from './judged-route.js';
-import { KNOWN_KEYS, fieldOf } from './keys.js';
+import { fieldOf } from './keys.js';
 import type { LotFaults, LotReading, ReadingJson, UncertaintyJson } from './lot-reading.js';
 import { lotReplicates } from './lot-replicates.js';
 import { lotRun } from './lot-run.js';
@@ -37,15 +36,9 @@ export interface ReadOptions {
  * @param site a `SiteProfile`; the defaults stand where it says nothing
  */
 export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSION }, options: ReadOptions = {}): LotReading | LotFaults {
-  const lot = checkLotEntry(entry, KNOWN_KEYS);
-  const profile = checkSiteProfile(site, KNOWN_KEYS);
-  if (isFaults(lot) || isFaults(profile)) {
-    const faults = [
-      ...(isFaults(lot) ? lot.map((fault) => ({ ...fault, in: 'entry' as const })) : []),
-      ...(isFaults(profile) ? profile.map((fault) => ({ ...fault, in: 'site' as const })) : []),
-    ];
-    return { version: FORMAT_VERSION, faults };
-  }
+  const checked = checkedLot(entry, site);
+  if ('faults' in checked) return checked;
+  const { lot, profile } = checked;
   const { only } = options;
   const run = lotRun(lot, profile, only && [...only, ...ROUTE_KEYS]);
   const replicates = { lot: lotReplicates(run, '', lot.runs), retest: lotReplicates(run, 'retest.', lot.retestRuns) };
@@ -66,8 +59,6 @@ export function readLot(entry: unknown, site: unknown = { version: FORMAT_VERSIO
     notices: only ? [] : noticesOn(lot, profile, run, passes, options.today),
   };
 }
-
-const isFaults = (checked: object): checked is readonly Fault[] => Array.isArray(checked);
 
 /** Results that stand with their ± beside them. */
 const WITH_UNCERTAINTY = ['acidValue', 'freeFattyAcid', 'retest.acidValue', 'retest.freeFattyAcid', 'titrantConcentration'];

@@ -21,11 +21,11 @@ describe('public entries', () => {
     expect(named.filter((path) => !existsSync(resolve(root, path)))).toEqual([]);
   });
 
-  it.each(['core', 'working', 'stock', 'index'])('%s can be imported where there is no page', (name) => {
+  it.each(['core', 'working', 'stock', 'balance', 'index'])('%s can be imported where there is no page', (name) => {
     expect(exportsInNode(`dist/esm/${name}.js`)).not.toEqual([]);
   });
 
-  it.each(['core', 'working', 'stock'])('%s knows neither page nor Lit', (name) => {
+  it.each(['core', 'working', 'stock', 'balance'])('%s knows neither page nor Lit', (name) => {
     for (const [file, text] of moduleGraph(`dist/esm/${name}.js`)) {
       const packages = importsOf(text).filter((specifier) => !specifier.startsWith('.'));
       expect(packages.filter((used) => !['decimal.js', 'simple-statistics', 'yalps'].includes(used)), file).toEqual([]);

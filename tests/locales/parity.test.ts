@@ -1,17 +1,20 @@
 import { readFileSync, readdirSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
-import { lotFormulas } from '../../src/chemistry/lot-formulas.js';
+import { balanceFormulas } from '../../src/chemistry/balance.js';
+import { addFormulas, lotFormulas } from '../../src/chemistry/lot-formulas.js';
 import { CAUTIONS } from '../../src/decision/charge.js';
 import { REASON_CODES } from '../../src/decision/route.js';
 import { NUMBER_DOUBTS } from '../../src/exchange/number-text.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../src/lot/defaults.js';
 import { KNOWN_KEYS, fieldOf } from '../../src/lot/keys.js';
 import { NOTICE_CODES } from '../../src/lot/lot-reading.js';
+import { deBalanceQuantities } from '../../src/locales/de-balance-quantities.js';
 import { de } from '../../src/locales/de.js';
+import { enBalanceQuantities } from '../../src/locales/en-balance-quantities.js';
 import { en } from '../../src/locales/en.js';
 import { fill } from '../../src/locales/fill.js';
 import type { Texts } from '../../src/locales/en.js';
-import { fieldLabel, fieldName, quantityName } from '../../src/locales/quantity-name.js';
+import { addQuantityNames, fieldLabel, fieldName, quantityName } from '../../src/locales/quantity-name.js';
 
 /** Texts that come with a part of their own, by the name of the file that they share in both languages. */
 const files = readdirSync(new URL('../../src/locales/', import.meta.url)).filter((file) => /^(?:en|de)-/.test(file));
@@ -21,6 +24,9 @@ const partsOf = (language: string) =>
 const whole = (texts: Texts, language: 'en' | 'de') => ({ texts, parts: partsOf(language) });
 
 const languages: Readonly<Record<string, Texts>> = { en, de };
+addFormulas(balanceFormulas);
+addQuantityNames(en, enBalanceQuantities);
+addQuantityNames(de, deBalanceQuantities);
 const two = { runs: 2, counted: [0, 1] };
 const sheet = lotFormulas({ lot: two, retest: { runs: 1, counted: [0] }, titrant: two });
 
@@ -104,10 +110,12 @@ describe.each(Object.entries(languages))('%s', (language, texts) => {
   });
 
   it('every name that is kept is used', () => {
+    const late = language === 'de' ? deBalanceQuantities : enBalanceQuantities;
     const used = new Set<string>();
-    const watched = new Proxy(texts.quantities, { get: (names, key) => (used.add(String(key)), Reflect.get(names, key)) });
+    const kept = { ...texts.quantities, ...late };
+    const watched = new Proxy(kept, { get: (names, key) => (used.add(String(key)), Reflect.get(names, key) as unknown) });
     for (const key of sheet.quantities.keys()) quantityName(key, { ...texts, quantities: watched });
-    expect(Object.keys(texts.quantities).filter((key) => !used.has(key))).toEqual([]);
+    expect(Object.keys(kept).filter((key) => !used.has(key))).toEqual([]);
   });
 
   it('every figure that can be missing, refused or set for a site has a name', () => {
@@ -143,6 +151,8 @@ describe('the words of a key', () => {
     ['after.direct.acid', 'after the reaction, direct: neutralising acid to weigh', 'nach der Reaktion, direkt: Neutralisationssäure, Einwaage'],
     ['heat.pass2.riseInBatch', 'heat of mixing, pass 2: temperature rise in oil and methanol, without cooling', 'Mischungswärme, Durchgang 2: Erwärmung von Öl und Methanol, ohne Kühlung'],
     ['cost.twoStep.methanol', 'cost, two-step: methanol', 'Kosten, zweistufig: Methanol'],
+    ['balance.pass2.waterDrawn', 'mass balance, pass 2: water drawn off', 'Massenbilanz, Durchgang 2: abgezogenes Wasser'],
+    ['balance.twoStep.methanolUpper', 'mass balance, two-step, base step: methanol in the ester layer', 'Massenbilanz, zweistufig, Umesterung: Methanol in der Esterphase'],
     ['acetic.density', 'density of glacial acetic acid', 'Dichte von Eisessig'],
   ])('%s is a quantity', (key, english, german) => {
     expect([quantityName(key, en), quantityName(key, de)]).toEqual([english, german]);

@@ -4,10 +4,12 @@ import type { RouteName } from '../../chemistry/route-name.js';
 import type { ChargeLine, ChargeStep } from '../../decision/charge.js';
 import type { Verdict } from '../../decision/route.js';
 import { fill } from '../../locales/fill.js';
+import { chooseStyles } from '../parts/choose-styles.js';
 import { ACID_FIGURE, ChargeLines, METHANOL_FIGURE } from './charge-lines.js';
 import { chargeStyles } from './charge-styles.js';
 
 const after = (): unknown => html`<esterway-after bare exportparts="figure, caution, field-line, field-input"></esterway-after>`;
+const balance = (): unknown => html`<esterway-balance bare exportparts="figure, flow"></esterway-balance>`;
 const cost = (): unknown => html`<esterway-cost bare exportparts="figure, field-line, field-input"></esterway-cost>`;
 const overTime = (): unknown => html`<esterway-residual></esterway-residual>`;
 
@@ -36,7 +38,7 @@ const FIRST_AMOUNT = { direct: 'direct.catalyst', twoStep: 'pass1.sulfuric' } as
  * @cssprop --esterway-pink-soft - behind the retest
  */
 export class EsterwayCharge extends ChargeLines {
-  static override styles = [...ChargeLines.styles, chargeStyles];
+  static override styles = [...ChargeLines.styles, chooseStyles, chargeStyles];
 
   /** The route looked at, where a person has chosen one; else the one recommended. */
   @state() private chosen: RouteName | undefined;
@@ -80,6 +82,7 @@ export class EsterwayCharge extends ChargeLines {
       ${this.noticesAt((field) => (this.looked === 'twoStep' && field === 'pass1.batchVolume') || field.startsWith(`${this.looked}.`))}
       ${this.known(FIRST_AMOUNT[this.looked]) ? html`${steps.map((step) => this.step(step, steps))} ${this.outcome()}` : nothing}
       <esterway-later .label=${texts.charge.after} .content=${after}></esterway-later>
+      <esterway-later .label=${texts.charge.balance} .content=${balance}></esterway-later>
       <esterway-later .label=${texts.charge.cost} .content=${cost}></esterway-later>
     `;
   }
