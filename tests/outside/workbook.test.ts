@@ -109,7 +109,7 @@ describe.skipIf(!office)('a workbook worked out by LibreOffice', () => {
       const keys = new Set(rows.map(({ key }) => key));
       for (const key of Object.keys(reading.readings)) if (!keys.has(key)) differing.push(`${book}.${at} ${key} has no row`);
     }));
-    expect(differing).toEqual([]);
+    expect(differing.slice(0, 40)).toEqual([]);
     expect(compared).toBeGreaterThan(20_000);
     expect(figures).toBeGreaterThan(15_000);
   });
