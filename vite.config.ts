@@ -26,6 +26,8 @@ const runtime = [
   'events',
   'pouchdb-core',
   'pouchdb-adapter-idb',
+  'fflate',
+  'papaparse',
 ];
 
 const shared: UserConfig = {
@@ -96,7 +98,7 @@ const builds: Record<string, () => UserConfig> = {
         formats: ['es'],
       },
       rolldownOptions: {
-        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps', 'events', /^pouchdb-/],
+        external: [/^lit(\/|$)/, /^@lit\//, 'decimal.js', 'simple-statistics', 'yalps', 'events', /^pouchdb-/, 'fflate', 'papaparse'],
         output: {
           preserveModules: true,
           preserveModulesRoot: at('./src'),

@@ -24,6 +24,8 @@ export const deResults: Widened<typeof enResults> = {
     glycerol: 'Glycerin, zu erwarten',
   },
   head: '{name} [{unit}]',
+  marks: { page: 'wie auf dieser Seite', point: 'Punkt', comma: 'Komma' },
+  long: 'Tabellen behalten 15 Stellen und lassen den Rest ohne Meldung weg; mehr hat: {columns}.',
   states: {
     complete: 'vollständig',
     missing: 'Werte fehlen',

@@ -20,9 +20,17 @@ export const deWorkbook: Widened<typeof enWorkbook> = {
   leftOut: 'Ausgelassen, weil nicht lesbar: {name}.',
   unnamed: 'Partie {n}',
   notKnown: 'nicht bekannt',
-  typed: 'eingetragen',
   heads: {
     name: 'Bezeichnung', key: 'Schlüssel', symbol: 'Zeichen', unit: 'Einheit', source: 'Quelle', site: 'Betrieb', value: 'Wert', struck: 'Gestrichen', unitOf: 'Einheit',
   },
+  /** Was sich aus dem Eingetragenen oder Gefundenen ergibt. */
+  decided: {
+    temperatureTaken: 'Temperatur korrigiert', titrantStrengthBy: 'Gehalt der Maßlösung angegeben als', oilAmountBy: 'Öl angegeben als',
+    oilPriceBy: 'Ölpreis angegeben je', esterPriceBy: 'Esterpreis angegeben je', methanolPriceBy: 'Methanolpreis angegeben je',
+    passes: 'Durchgänge der Veresterung', baseStepAcidFrom: 'Säure vor der Umesterung aus', averageBy: 'Titrationen gemittelt als', runsAgree: 'Titrationen stimmen überein',
+  },
+  retest: 'Nachtitration: {name}',
+  priced: 'mit Preis: {name}',
+  ofRoute: { direct: 'direkt', twoStep: 'zweistufig' },
   setBySite: 'vom Betrieb festgelegt',
 };

@@ -21,6 +21,8 @@ export const enResults = {
     glycerol: 'Glycerol to expect',
   },
   head: '{name} [{unit}]',
+  marks: { page: 'as in this page', point: 'point', comma: 'comma' },
+  long: 'Sheets keep 15 digits and drop the rest in silence; more has: {columns}.',
   states: {
     complete: 'complete',
     missing: 'figures are missing',

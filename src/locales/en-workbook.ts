@@ -17,9 +17,17 @@ export const enWorkbook = {
   leftOut: 'Left out, since it could not be read: {name}.',
   unnamed: 'Lot {n}',
   notKnown: 'not known',
-  typed: 'typed',
   heads: {
     name: 'Name', key: 'Key', symbol: 'Symbol', unit: 'Unit', source: 'Source', site: 'Site', value: 'Value', struck: 'Struck out', unitOf: 'Unit',
   },
+  /** Choices that follow from what was typed or found. */
+  decided: {
+    temperatureTaken: 'corrected for temperature', titrantStrengthBy: 'titrant strength given by', oilAmountBy: 'oil given by',
+    oilPriceBy: 'price of oil given by', esterPriceBy: 'price of ester given by', methanolPriceBy: 'price of methanol given by',
+    passes: 'passes of the acid step', baseStepAcidFrom: 'acid at the base step from', averageBy: 'runs averaged by', runsAgree: 'runs agree',
+  },
+  retest: 'retest: {name}',
+  priced: 'priced: {name}',
+  ofRoute: { direct: 'direct', twoStep: 'two-step' },
   setBySite: 'set by the site',
 };

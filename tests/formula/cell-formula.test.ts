@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { cellFormula } from '../../src/formula/cell-formula.js';
-import { constant, exponential, greatest, least, logarithm, whereBelow } from '../../src/formula/expression.js';
+import { cellFormula, strictCellFormula } from '../../src/formula/cell-formula.js';
+import { constant, exponential, greatest, least, logarithm, median, whereBelow } from '../../src/formula/expression.js';
 import type { Expression } from '../../src/formula/expression.js';
 import { choice, quantity } from '../../src/formula/quantity.js';
 import { Sheet } from '../../src/formula/sheet.js';
@@ -71,6 +71,14 @@ describe('a formula in a cell', () => {
     const inch = choice('route', ['1"', 'other']);
     const y = quantity({ key: 'y', symbol: 'y', unit: one, is: inch.of({ '1"': '1', other: '2' }) });
     expect(cellFormula(y.is!, Sheet.define([inch, y]), address)).toBe('IF(B3="1""",1,IF(B3="other",2,NA()))');
+  });
+
+  it('comes to an error over a word, where it is asked to: sheets leave words out of MIN, MAX and MEDIAN and put them above figures', () => {
+    const strict = (is: Expression): string => strictCellFormula(is, Sheet.define([x, z, quantity({ key: 'y', symbol: 'y', unit: one, is })]), address);
+    expect(strict(least(x, greatest(z.times('2'), '0.5')))).toBe('MIN(B1+0,MAX(B2*2+0,0.5)+0)');
+    expect(strict(median([x, z, '3']))).toBe('MEDIAN(B1+0,B2+0,3)');
+    expect(strict(whereBelow(x, '3', z, x.per(z)))).toBe('IF(B1+0<3,B2,B1/B2)');
+    expect(strict(x.minus(z))).toBe('B1-B2');
   });
 
   it('compares strictly', () => {

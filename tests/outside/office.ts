@@ -42,3 +42,14 @@ export function recalculated(workbooks: readonly Uint8Array[]): Uint8Array[] {
     rmSync(folder, { recursive: true, force: true });
   }
 }
+
+/** The same file with another cell in place of one of a sheet, as a person would type over it. */
+export function withCell(workbook: Uint8Array, sheet: number, address: string, value: string | number): Uint8Array {
+  const parts = unzipSync(workbook);
+  const path = `xl/worksheets/sheet${sheet}.xml`;
+  const cell = new RegExp(`<c r="${address}"( s="\\d+")?[^>]*?(?:/>|>.*?</c>)`);
+  const xml = strFromU8(parts[path]!);
+  if (!cell.test(xml)) throw new Error(`${path} has no cell ${address}`);
+  const typed = typeof value === 'number' ? `<c r="${address}"><v>${value}</v></c>` : `<c r="${address}" t="inlineStr"><is><t>${value}</t></is></c>`;
+  return zipSync({ ...parts, [path]: strToU8(xml.replace(cell, typed)) });
+}

@@ -30,7 +30,7 @@ export const budgets = [
   ...late,
   { name: 'core with decimal.js', file: coreMeasured, most: 50_000 },
   { name: 'worker file', file: workerFile, most: 46_000 },
-  { name: 'worker file for rows', file: rowsWorkerFile, most: 56_000 },
+  { name: 'worker file for rows', file: rowsWorkerFile, most: 62_000 },
 ] as const;
 
 export function gzipBytes(file: string): number {

@@ -27,6 +27,10 @@ const EMPTY: ResultCell = { kind: 'empty', text: '' };
 /** Whether a sheet would drop digits of a figure without saying so. */
 export const beyondSheet = ({ kind, text }: ResultCell): boolean => kind === 'number' && new Decimal(text).precision() > MOST_SHEET_DIGITS;
 
+/** Columns in which a figure has more digits than a sheet keeps: to be said before the rows are handed on. */
+export const columnsBeyondSheet = (rows: readonly (readonly ResultCell[])[], columns: readonly ResultColumn[]): readonly ResultColumn[] =>
+  columns.filter((_, at) => rows.some((row) => row[at] && beyondSheet(row[at])));
+
 /** The row of a lot: a cell for each column, empty where nothing is known. */
 export function resultRow(
   entry: LotEntry, site: SiteProfile, reading: LotReading | LotFaults, columns: readonly ResultColumn[], { words, figures = 'reported' }: ResultOptions,

@@ -1,5 +1,13 @@
+import { decimalMark } from '../number-format.js';
 import type { DecimalMark } from '../number-text.js';
 import type { ResultCell } from './row.js';
+
+/** Whose decimal mark figures are written with: that of the page, or the one that the sheet expects. */
+export const MARK_CHOICES = ['page', 'point', 'comma'] as const;
+export type MarkChoice = (typeof MARK_CHOICES)[number];
+
+/** @param language of the page, BCP 47 */
+export const chosenMark = (choice: MarkChoice, language: string): DecimalMark => (choice === 'page' ? decimalMark(language) : choice === 'comma' ? ',' : '.');
 
 export type Rows = readonly (readonly ResultCell[])[];
 

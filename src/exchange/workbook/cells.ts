@@ -10,6 +10,8 @@ export type Cell =
   | { readonly kind: 'number'; readonly text: string; readonly look: Look }
   /** Without the equals sign; with what it comes to, for readers that do not compute. */
   | { readonly kind: 'formula'; readonly formula: string; readonly cached: Decimal | string; readonly look: Look }
+  /** Empty, to be typed into. */
+  | { readonly kind: 'blank'; readonly look: Look }
   | undefined;
 
 export interface SheetRow {
@@ -28,6 +30,9 @@ export interface SheetPage {
 }
 
 export const text = (of: string, look: Look = 'plain'): Cell => (of ? { kind: 'text', text: of, look } : undefined);
+export const BLANK: Cell = { kind: 'blank', look: 'typed' };
+/** A text to be changed, or the place for it. */
+export const typedText = (of: string | undefined): Cell => (of ? text(of, 'typed') : BLANK);
 export const number = (of: string, look: Look = 'plain'): Cell => ({ kind: 'number', text: of, look });
 export const formula = (of: string, cached: Decimal | string, look: Look = 'plain'): Cell => ({ kind: 'formula', formula: of, cached, look });
 

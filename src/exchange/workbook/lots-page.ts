@@ -1,10 +1,10 @@
-import { MOST_DIGITS } from '../../formula/decimal.js';
-import { Decimal } from '../../formula/decimal.js';
+import { Decimal, MOST_DIGITS } from '../../formula/decimal.js';
 import { fieldLabel } from '../../locales/quantity-name.js';
 import type { LotEntry, RunEntry } from '../../lot/entry.js';
 import type { Figure } from '../../lot/figure.js';
 import { KNOWN_KEYS } from '../../lot/keys.js';
-import { address, number, text } from './cells.js';
+import { MOST_SHEET_DIGITS } from '../results/row.js';
+import { BLANK, address, number, text, typedText } from './cells.js';
 import type { Cell, SheetPage } from './cells.js';
 import type { FigureCells } from './figure-formula.js';
 import type { WorkbookWords } from './words.js';
@@ -39,9 +39,9 @@ export function lotsPage(lots: readonly LotEntry[], words: WorkbookWords): LotsP
   const fields = [...KNOWN_KEYS.figures].filter((key) => lots.some(({ figures }) => key in figures));
   const options = [...KNOWN_KEYS.options.keys()].filter((key) => lots.some((lot) => key in lot.options));
   const columns: Column[] = [
-    ...(['name', 'source', 'date'] as const).map((key): Column => ({ key, label: texts.lot[key], cell: (entry) => text(entry[key] ?? '', 'typed') })),
+    ...(['name', 'source', 'date'] as const).map((key): Column => ({ key, label: texts.lot[key], cell: (entry) => typedText(entry[key]) })),
     ...fields.flatMap((key) => figureColumns(key, ({ figures }) => figures[key], words)),
-    ...options.map((key): Column => ({ key, label: fieldLabel(key, texts), cell: (entry) => text(entry.options[key] ?? '', 'typed') })),
+    ...options.map((key): Column => ({ key, label: fieldLabel(key, texts), cell: (entry) => typedText(entry.options[key]) })),
     ...LISTS.flatMap(([prefix, list]) => runColumns(prefix, lots.map((lot) => lot[list]), (entry) => entry[list], words)),
   ];
   const columnOf = new Map(columns.map(({ key }, at) => [key, at]));
@@ -71,7 +71,7 @@ function figureColumns(key: string, figureOf: (entry: LotEntry) => Figure | unde
   const label = fieldLabel(key, texts);
   return [
     { key, label, cell: (entry) => figureCell(figureOf(entry)) },
-    { key: unitKey(key), label: own.heads.unitOf, cell: (entry) => text(figureOf(entry)?.unit ?? '', 'typed') },
+    { key: unitKey(key), label: own.heads.unitOf, cell: (entry) => typedText(figureOf(entry)?.unit) },
   ];
 }
 
@@ -86,15 +86,13 @@ function runColumns(prefix: string, all: readonly (readonly RunEntry[])[], runsO
 
 /** A figure as typed; one that could not be read stands as text. */
 export function figureCell(figure: Figure | undefined): Cell {
-  if (!figure) return undefined;
-  if ('doubt' in figure) return text(figure.typed, 'typed');
-  return isDecimal(figure.text) ? number(figure.text, 'typed') : text(figure.text, 'typed');
+  if (!figure) return BLANK;
+  if ('doubt' in figure) return typedText(figure.typed);
+  return isDecimal(figure.text) ? number(figure.text, 'typed') : typedText(figure.text);
 }
 
 /** Text that `readFigure` takes; more digits than that are refused there, and must not pass for a number here. */
 const isDecimal = (of: string): boolean => /^-?\d{1,200}(?:\.\d{1,200})?$/.test(of) && of.replace(/[-.]/g, '').replace(/^0+/, '').length <= MOST_DIGITS;
-
-const MOST_SHEET_DIGITS = 15;
 
 export const shortenedIn = (cell: Cell, where: string): readonly Shortened[] =>
   cell?.kind === 'number' && new Decimal(cell.text).precision() > MOST_SHEET_DIGITS ? [{ where, text: cell.text }] : [];

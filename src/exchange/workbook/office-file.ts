@@ -3,6 +3,7 @@ import { Decimal } from '../../formula/decimal.js';
 import { address } from './cells.js';
 import type { Cell, Look, SheetPage, SheetRow } from './cells.js';
 import { cellText, xmlText } from './xml-text.js';
+import { guardedText } from '../results/table-text.js';
 
 // The few parts of an Office Open XML workbook (ECMA-376) that cells, formulas and their results need.
 
@@ -42,7 +43,7 @@ function relations(all: readonly (readonly [type: string, target: string])[]): s
 
 function workbook(pages: readonly SheetPage[]): string {
   const sheets = pages.map(({ name }, at) => `<sheet name="${xmlText(name)}" sheetId="${at + 1}" r:id="rId${at + 1}"/>`);
-  return `<workbook xmlns="${MAIN}" xmlns:r="${OFFICE}"><sheets>${sheets.join('')}</sheets><calcPr calcId="0" fullCalcOnLoad="1"/></workbook>`;
+  return `<workbook xmlns="${MAIN}" xmlns:r="${OFFICE}"><sheets>${sheets.join('')}</sheets><calcPr fullCalcOnLoad="1"/></workbook>`;
 }
 
 /** Decimals up to this are kept in sight as typed, trailing zeros too. */
@@ -55,7 +56,9 @@ function styles(): string {
   const formats = decimals.map((count, at) => `<numFmt numFmtId="${FIRST_FORMAT + at}" formatCode="0.${'0'.repeat(count)}"/>`);
   const plain = (font: number, fill = 0, more = ''): string => `<xf numFmtId="0" fontId="${font}" fillId="${fill}" borderId="0" xfId="0"${more ? ` applyAlignment="1"><alignment ${more}/></xf>` : '/>'}`;
   const typed = decimals.map((_, at) => `<xf numFmtId="${FIRST_FORMAT + at}" fontId="0" fillId="2" borderId="0" xfId="0" applyNumberFormat="1"/>`);
-  const formatted = [plain(0), plain(1, 0, 'wrapText="1" vertical="top"'), plain(2), plain(0, 0, 'wrapText="1" vertical="top"'), plain(0, 2), ...typed];
+  // a text that looks like a formula stays one when it is edited
+  const quoted = '<xf numFmtId="49" fontId="0" fillId="2" borderId="0" xfId="0" quotePrefix="1" applyNumberFormat="1"/>';
+  const formatted = [plain(0), plain(1, 0, 'wrapText="1" vertical="top"'), plain(2), plain(0, 0, 'wrapText="1" vertical="top"'), plain(0, 2), ...typed, quoted];
   const font = (more: string): string => `<font>${more}<sz val="11"/><name val="Calibri"/></font>`;
   const fill = (inner: string): string => `<fill><patternFill ${inner}</fill>`;
   return `<styleSheet xmlns="${MAIN}"><numFmts count="${formats.length}">${formats.join('')}</numFmts>`
@@ -67,6 +70,7 @@ function styles(): string {
 
 function styleOf(cell: NonNullable<Cell>): number {
   const look = LOOKS.indexOf(cell.look);
+  if (cell.kind === 'text' && guardedText(cell.text) !== cell.text) return LOOKS.length + MOST_DECIMALS;
   if (cell.kind !== 'number' || cell.look !== 'typed') return look;
   return look + Math.min(MOST_DECIMALS, cell.text.split('.')[1]?.length ?? 0);
 }
@@ -87,6 +91,8 @@ function written(cell: Cell, at: string): string {
   if (!cell) return '';
   const place = `r="${at}" s="${styleOf(cell)}"`;
   switch (cell.kind) {
+    case 'blank':
+      return `<c ${place}/>`;
     case 'text':
       return `<c ${place} t="inlineStr"><is><t xml:space="preserve">${cellText(cell.text)}</t></is></c>`;
     case 'number':

@@ -3,7 +3,7 @@ import { fieldLabel } from '../../locales/quantity-name.js';
 import { DEFAULT_FIGURES, DEFAULT_OPTIONS } from '../../lot/defaults.js';
 import type { SiteProfile } from '../../lot/entry.js';
 import type { Figure } from '../../lot/figure.js';
-import { address, text } from './cells.js';
+import { address, text, typedText } from './cells.js';
 import type { SheetPage, SheetRow } from './cells.js';
 import type { FigureCells } from './figure-formula.js';
 import { figureCell, shortenedIn } from './lots-page.js';
@@ -28,8 +28,8 @@ export function sitePage(site: SiteProfile, figures: readonly AskedFigure[], opt
   const { heads, sheets } = own;
   const rows: SheetRow[] = [
     { cells: [heads.name, heads.key, heads.value, heads.unit, heads.source].map((head) => text(head, 'head')) },
-    { cells: [text(heads.site), text('name', 'quiet'), text(site.name ?? '', 'typed')] },
-    { cells: [text(fieldLabel('titrantDate', texts)), text('titrantDate', 'quiet'), text(site.titrantDate ?? '', 'typed')] },
+    { cells: [text(heads.site), text('name', 'quiet'), typedText(site.name)] },
+    { cells: [text(fieldLabel('titrantDate', texts)), text('titrantDate', 'quiet'), typedText(site.titrantDate)] },
   ];
   const rowOf = new Map<string, number>();
   const shortened: Shortened[] = [];
@@ -42,12 +42,12 @@ export function sitePage(site: SiteProfile, figures: readonly AskedFigure[], opt
     const label = fieldLabel(field, texts);
     const cell = figureCell(figure);
     shortened.push(...shortenedIn(cell, `${sheets.site}, ${label}`));
-    add(field, { cells: [text(label), text(field, 'quiet'), cell, text(figure?.unit ?? unit, 'typed'), text(figureSource(site, field, { texts, own }))] });
+    add(field, { cells: [text(label), text(field, 'quiet'), cell, typedText(figure?.unit ?? unit), text(figureSource(site, field, { texts, own }))] });
   }
   for (const key of options) {
     const option = site.options[key] ?? DEFAULT_OPTIONS[key] ?? '';
     const words = (texts.options as Readonly<Record<string, Readonly<Record<string, string>>>>)[key.replace('retest.', '')];
-    add(key, { cells: [text(fieldLabel(key, texts)), text(key, 'quiet'), text(option, 'typed'), text(words?.[option] ?? ''), text(key in site.options ? own.setBySite : '')] });
+    add(key, { cells: [text(fieldLabel(key, texts)), text(key, 'quiet'), typedText(option), text(words?.[option] ?? ''), text(key in site.options ? own.setBySite : '')] });
   }
   const cellAt = (key: string, column: number): string | undefined => {
     const row = rowOf.get(key);

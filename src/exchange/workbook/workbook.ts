@@ -1,10 +1,12 @@
+import { isKnown } from '../../formula/reading.js';
 import type { Sheet } from '../../formula/sheet.js';
-import { checkSiteProfile } from '../../lot/check.js';
+import { checkedLot } from '../../lot/checked.js';
 import { EMPTY_LOT, EMPTY_SITE } from '../../lot/entry.js';
 import type { LotEntry, SiteProfile } from '../../lot/entry.js';
 import { KNOWN_KEYS, fieldOf, runCell } from '../../lot/keys.js';
 import type { LotFaults } from '../../lot/lot-reading.js';
 import { lotRun } from '../../lot/lot-run.js';
+import type { LotRun } from '../../lot/lot-run.js';
 import { readLot } from '../../lot/read-lot.js';
 import { fill } from '../../locales/fill.js';
 import { lotsPage } from './lots-page.js';
@@ -43,10 +45,13 @@ export function workbookOf(lots: readonly LotEntry[], site: SiteProfile = EMPTY_
   const read = lots.map((entry, lot) => ({ entry, lot, name: nameOf(entry, lot), reading: readLot(entry, site) }));
   const leftOut = read.flatMap(({ lot, reading }) => ('faults' in reading ? [{ lot, faults: reading.faults }] : []));
   const known = read.flatMap(({ entry, name, reading }) => ('faults' in reading ? [] : [{ entry: { ...EMPTY_LOT, ...entry }, name, reading }]));
-  const readableSite = checkSiteProfile(site, KNOWN_KEYS);
-  const profile = 'version' in readableSite ? readableSite : EMPTY_SITE;
+  const readable = checkedLot(EMPTY_LOT, site);
+  const profile = 'faults' in readable ? EMPTY_SITE : readable.profile;
 
-  const worked = known.map(({ entry, name, reading }): WorkedLot => ({ name, run: lotRun(entry, profile), touched: new Set(Object.keys(reading.readings)) }));
+  const worked = known.map(({ entry, name, reading }): WorkedLot => {
+    const run = lotRun(entry, profile);
+    return { name, run, touched: new Set([...Object.keys(reading.readings), ...furtherResults(run)]) };
+  });
   const ofSite = lotRun(EMPTY_LOT, profile);
   const sheets = [...new Set([...worked.map(({ run }) => run.sheet), ofSite.sheet])];
   const keys = rowsNeeded(sheets, worked.flatMap(({ touched }) => [...touched]));
@@ -60,6 +65,10 @@ export function workbookOf(lots: readonly LotEntry[], site: SiteProfile = EMPTY_
   ];
   return { bytes: officeFile(pages), shortened, leftOut };
 }
+
+/** Results that the panel works out where its parts are opened: after the reaction, heat, balance, cost, settlement; those that are known. */
+const furtherResults = ({ sheet, findings }: LotRun): readonly string[] =>
+  [...sheet.quantities.keys()].filter((key) => /^(?:after|heat|balance|cost|settlement)\./.test(key) && isKnown(findings.outcome(key)));
 
 /** Inputs that may stand for the site: all but the runs of a lot. */
 function askedFigures(keys: readonly string[], sheets: readonly Sheet[]): readonly AskedFigure[] {

@@ -1,19 +1,19 @@
-import { strictCellFormula } from '../../formula/cell-formula.js';
 import type { Quantity } from '../../formula/quantity.js';
 import { isKnown } from '../../formula/reading.js';
 import type { Outcome } from '../../formula/reading.js';
 import { fill } from '../../locales/fill.js';
-import { fieldLabel, quantityName } from '../../locales/quantity-name.js';
 import { fieldOf } from '../../lot/keys.js';
 import type { LotRun } from '../../lot/lot-run.js';
 import { address, formula, literal, text } from './cells.js';
 import type { Cell, SheetPage, SheetRow } from './cells.js';
 import { inUnit, withinLimits } from './figure-formula.js';
+import { FormulaTexts } from './formula-texts.js';
 import type { LotsPage } from './lots-page.js';
 import { isDecided, optionFormula } from './option-formula.js';
 import type { LotCells } from './option-formula.js';
 import { choicesIn } from './rows-needed.js';
 import type { SitePage } from './site-page.js';
+import { choiceName, rowName } from './words.js';
 import type { WorkbookWords } from './words.js';
 
 /** A lot in the working, by its column. */
@@ -33,7 +33,8 @@ export function workingPage(keys: readonly string[], lots: readonly WorkedLot[],
   const { heads, sheets } = words.own;
   const rowOf = new Map(keys.map((key, at) => [key, at + HEADS]));
   const addressIn = (column: number) => (key: string): string => address(column, rowOf.get(key) ?? 0);
-  const columns = lots.map((lot, at): LotColumn => new LotColumn(lot, {
+  const formulas = new FormulaTexts(rowOf);
+  const columns = lots.map((lot, at): LotColumn => new LotColumn(lot, SITE_COLUMN + 1 + at, formulas, {
     working: addressIn(SITE_COLUMN + 1 + at),
     figure: (field) => typed.figure(field, at),
     option: (key) => typed.option(key, at),
@@ -60,11 +61,10 @@ function shownKeys(lots: readonly WorkedLot[]): ReadonlySet<string> {
   return new Set(lots.flatMap(({ touched, run: { sheet } }) => [...touched].flatMap((key) => [key, ...choicesIn(sheet, key)])));
 }
 
-function describe(key: string, lots: readonly WorkedLot[], { texts }: WorkbookWords): readonly Cell[] {
+function describe(key: string, lots: readonly WorkedLot[], words: WorkbookWords): readonly Cell[] {
   const quantity = lots.map(({ run: { sheet } }) => sheet.quantities.get(key)).find((one) => one !== undefined);
-  const name = quantity ? quantityName(key, texts) : fieldLabel(key, texts);
-  const sources = quantity?.cites.map(({ title, mark }) => fill(texts.site.source, { title, mark: texts.marks[mark] })) ?? [];
-  return [text(name.charAt(0).toUpperCase() + name.slice(1)), text(key, 'quiet'), text(quantity?.symbol ?? ''), text(quantity?.unit.symbol ?? ''), text(sources.join('; '), 'quiet')];
+  const sources = quantity?.cites.map(({ title, mark }) => fill(words.texts.site.source, { title, mark: words.texts.marks[mark] })) ?? [];
+  return [text(quantity ? rowName(key, words) : choiceName(key, words)), text(key, 'quiet'), text(quantity?.symbol ?? ''), text(quantity?.unit.symbol ?? ''), text(sources.join('; '), 'quiet')];
 }
 
 /** A formula that shows a word where it comes to no figure. */
@@ -89,7 +89,13 @@ class SiteColumn {
 }
 
 class LotColumn {
-  constructor(private readonly lot: WorkedLot, private readonly cells: LotCells, private readonly notKnown: string) {}
+  constructor(
+    private readonly lot: WorkedLot,
+    private readonly column: number,
+    private readonly formulas: FormulaTexts,
+    private readonly cells: LotCells,
+    private readonly notKnown: string,
+  ) {}
 
   cell(key: string, site: SiteColumn): Cell {
     const { run } = this.lot;
@@ -105,12 +111,12 @@ class LotColumn {
   }
 
   private figure(quantity: Quantity, site: SiteColumn): string {
-    const { working } = this.cells;
-    if (quantity.is) return withinLimits(strictCellFormula(quantity.is, this.lot.run.sheet, working), quantity.limits, working);
+    const computed = this.formulas.of(quantity, this.lot.run.sheet, this.column);
+    if (computed !== undefined) return computed;
     const standing = site.address(quantity.key);
     const typed = this.cells.figure(fieldOf(quantity.key));
     if (!typed) return standing ?? 'NA()';
-    const given = withinLimits(inUnit(typed, quantity.unit), quantity.limits, working);
+    const given = withinLimits(inUnit(typed, quantity.unit), quantity.limits, this.cells.working);
     return standing ? `IF(${typed.figure}="",${standing},${given})` : given;
   }
 }

@@ -3,7 +3,7 @@ import { EMPTY_LOT, EMPTY_SITE, readLot } from '../../../src/core.js';
 import type { LotEntry } from '../../../src/core.js';
 import { resultColumns, resultHeads } from '../../../src/exchange/results/columns.js';
 import type { ResultKind } from '../../../src/exchange/results/columns.js';
-import { beyondSheet, resultRow } from '../../../src/exchange/results/row.js';
+import { beyondSheet, columnsBeyondSheet, resultRow } from '../../../src/exchange/results/row.js';
 import type { ResultCell, ResultOptions } from '../../../src/exchange/results/row.js';
 import { deResults } from '../../../src/locales/de-results.js';
 import { de } from '../../../src/locales/de.js';
@@ -75,6 +75,9 @@ describe('the row of a lot', () => {
     // a figure as typed is shown as typed, and can be longer than a sheet keeps
     const long = rowOf(lot({ figures: { oilAmount: '800.0000000000001234 kg' } }));
     expect([long['oilMass']!.text, beyondSheet(long['oilMass']!)]).toEqual(['800.0', false]);
+    const columns = resultColumns('batch');
+    const rows = [resultRow(TITRATED, EMPTY_SITE, read(TITRATED), columns, { words, figures: 'full' })];
+    expect(columnsBeyondSheet(rows, columns).map(({ key }) => key)).toContain('acidValue');
     expect(beyondSheet({ kind: 'number', text: '123456789012345000000' })).toBe(false);
     expect(beyondSheet({ kind: 'number', text: '1234567890123456' })).toBe(true);
   });

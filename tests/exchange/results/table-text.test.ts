@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { asCsv, asHtmlTable, asTsv, guardedText } from '../../../src/exchange/results/table-text.js';
+import { asCsv, asHtmlTable, asTsv, chosenMark, guardedText } from '../../../src/exchange/results/table-text.js';
 import type { ResultCell } from '../../../src/exchange/results/row.js';
 
 const text = (of: string): ResultCell => ({ kind: 'text', text: of });
@@ -42,6 +42,10 @@ describe('a table as text', () => {
     expect(asCsv([row], { mark: ',', delimiter: ',' })).toBe('"-0,40","12345,60",,x\r\n');
     expect(asCsv([row], { mark: ',', delimiter: ';', byteOrderMark: true })).toBe('\ufeff-0,40;12345,60;;x\r\n');
     expect(asHtmlTable([row], ',')).toBe('<meta charset="utf-8"><table><tbody><tr><td align="right">-0,40</td><td align="right">12345,60</td><td></td><td>x</td></tr></tbody></table>');
+  });
+
+  it('takes the mark of the page or of the sheet', () => {
+    expect([chosenMark('page', 'de'), chosenMark('page', 'en-US'), chosenMark('point', 'de'), chosenMark('comma', 'en')]).toEqual([',', '.', '.', ',']);
   });
 
   it('of no rows is empty', () => {
