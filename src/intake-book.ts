@@ -7,6 +7,7 @@ defineBook();
 
 export { EsterwayBook } from './elements/book/book.js';
 export { EsterwayKeptEvent } from './elements/book/events.js';
+export { EsterwayHistory } from './elements/history/history.js';
 export { defineBook } from './elements/define-book.js';
 export { openBook } from './book/book.js';
 export { browserStore } from './book/browser-store.js';

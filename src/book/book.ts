@@ -1,8 +1,9 @@
+import type { HistoryPoint } from '../lot/history.js';
 import { EMPTY_LOT } from '../lot/entry.js';
 import type { LotEntry, SiteProfile } from '../lot/entry.js';
 import { bookText, readBookText } from './book-file.js';
 import { Catalogue, lineOf } from './catalogue.js';
-import type { BookFound, BookQuery, CatalogueEntry, HistoryPoint } from './catalogue.js';
+import type { BookFound, BookQuery, CatalogueEntry } from './catalogue.js';
 import { follow } from './followed.js';
 import { VERSION_ID, newBench, newLotId, newVersionId } from './ids.js';
 import { RECORD_VERSION, byAge, readRecord } from './record.js';

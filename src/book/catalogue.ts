@@ -1,3 +1,4 @@
+import type { HistoryPoint } from '../lot/history.js';
 import { RECORD_VERSION, byAge, compareText, isObject } from './record.js';
 import type { LotRecord } from './record.js';
 import type { StoredDocument } from './store.js';
@@ -30,17 +31,6 @@ export interface BookFound {
   readonly total: number;
   /** The newest version of each, the lot kept last first. */
   readonly lots: readonly CatalogueEntry[];
-}
-
-/** A point in the history of a source. */
-export interface HistoryPoint {
-  /** Day, ISO 8601. */
-  readonly date: string;
-  readonly freeFattyAcid?: string;
-  readonly acidValue?: string;
-  readonly water?: string;
-  /** The lot. */
-  readonly id: string;
 }
 
 interface Shelf {
@@ -107,13 +97,13 @@ export class Catalogue {
   history(source: string): readonly HistoryPoint[] {
     const lots = this.#sorted().filter(({ newest }) => newest.summary.source === source).map(({ newest }) => newest);
     const points = lots.map((lot) => {
-      const { freeFattyAcid, acidValue, water } = lot.summary;
+      const { name, freeFattyAcid, acidValue, water } = lot.summary;
       return {
-        date: dayOf(lot), id: lot.lot,
+        date: dayOf(lot), id: lot.lot, ...(name !== undefined && { name }),
         ...(freeFattyAcid !== undefined && { freeFattyAcid }), ...(acidValue !== undefined && { acidValue }), ...(water !== undefined && { water }),
       };
     });
-    return points.sort((a, b) => compareText(a.date, b.date) || compareText(a.id, b.id));
+    return points.sort((a, b) => compareText(a.date, b.date) || compareText(a.id ?? '', b.id ?? ''));
   }
 
   #distinct(of: (summary: CatalogueEntry['summary']) => string | undefined): readonly string[] {

@@ -46,4 +46,5 @@ export const METHANOL_BOILING = source('Methanol boils at 64.7 °C at 1 atm', 'm
 export const ENERGY_BALANCE = source('Energy balance without loss to the surroundings: Q = m · c_p · ΔT', 'derived');
 export const COSTING = source('Amounts of the batch, each at the site’s own price', 'definition');
 export const SETTLEMENT = source('The contract’s own base, allowances and rates; no standard', 'definition');
+export const ISO_7870_2 = source('ISO 7870-2: chart of individuals and moving range, factors 2.66, 3.267 and 1.128', 'memory');
 export const PRACTICE = source('Common practice, no source', 'practice');

@@ -1,6 +1,8 @@
 import { EsterwayBook } from './book/book.js';
+import { EsterwayHistory } from './history/history.js';
 
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
+  ['esterway-history', EsterwayHistory],
   ['esterway-book', EsterwayBook],
 ];
 

@@ -40,7 +40,7 @@ export const deRows: Widened<typeof enRows> = {
   parts: { sample: 'Bestimmung {run}: Probe', start: 'Bestimmung {run}: Start', end: 'Bestimmung {run}: Ende', titre: 'Bestimmung {run}: Verbrauch' },
   twice: 'Das ist schon eine andere Spalte. Nur die erste zählt.',
   mark: 'Dezimalzeichen',
-  marks: { '.': 'ein Punkt, 8.4', ',': 'ein Komma, 8,4' },
+  marks: { '.': 'ein Punkt', ',': 'ein Komma' },
   markFound: 'So sind die Zahlen geschrieben.',
   markUnknown: 'Die Zahlen verraten es nicht. Bitte prüfen.',
   markMixed: 'Beides kommt vor: ein Punkt in Zeile {point}, ein Komma in Zeile {comma}. Nach jeder Zahl, die zweierlei heißen kann, wird gefragt.',

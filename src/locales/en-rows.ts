@@ -37,7 +37,7 @@ export const enRows = {
   parts: { sample: 'run {run}: sample', start: 'run {run}: start', end: 'run {run}: end', titre: 'run {run}: titre' },
   twice: 'Another column is that already. Only the first counts.',
   mark: 'Decimals are written with',
-  marks: { '.': 'a point, 8.4', ',': 'a comma, 8,4' },
+  marks: { '.': 'a point', ',': 'a comma' },
   markFound: 'So the figures are written.',
   markUnknown: 'The figures do not tell. Check it.',
   markMixed: 'Both are in the sheet: a point in row {point}, a comma in row {comma}. Each figure that can mean two things is asked about.',

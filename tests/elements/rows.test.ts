@@ -138,7 +138,7 @@ describe('results', () => {
     await choose(element, enRows.target, ',');
     await click(button(element, enRows.copy));
     await vi.waitFor(() => expect(write).toHaveBeenCalledOnce());
-    const item = write.mock.calls[0]![0]![0]!;
+    const item = write.mock.calls[0]![0][0]!;
     const text = await (await item.getType('text/plain')).text();
     expect(text.split('\r\n')[0]).toBe('Row\tLot\tFFA [%]\tFFA ± [%]\tAcid value [mg/g]\tState\tRoute\tCatalyst [kg]\tMethanol [kg]\tProblem');
     expect(text).toMatch(/^2\tA1\t2,10\t0,\d+\t4,2\taccepted\tdirect\t/m);

@@ -18,7 +18,7 @@ export const coreMeasured = resolve(root, 'node_modules/.cache/size/core.min.js'
 const late = [
   { name: 'parts of the batch', file: lateFile('more'), most: 48_000 },
   { name: 'deliveries and stock', file: lateFile('intake'), most: 30_000 },
-  { name: 'intake book', file: lateFile('book'), most: 45_000 },
+  { name: 'intake book', file: lateFile('book'), most: 50_000 },
   { name: 'sheets', file: lateFile('sheets'), most: 45_000 },
   { name: 'shared by these', file: lateFile('shared'), most: 15_000 },
 ] as const;

@@ -235,7 +235,7 @@ export class EsterwayBook extends SectionElement {
     return html`<div class="lot">
       ${versionList(versions, tongue, (version) => this.layOnBench(version))}
       ${newest ? html`<div class="actions no-print"><button class="action" part="action" type="button" @click=${() => this.beginAmending(newest)}>${words.amendThis}</button></div>` : nothing}
-      ${source !== undefined && this.book && customElements.get('esterway-history')
+      ${source !== undefined && this.book
         ? html`<esterway-history bare .source=${source} .points=${this.book.history(source)}></esterway-history>`
         : nothing}
     </div>`;
