@@ -36,15 +36,32 @@ export function signalsIn(values: readonly Decimal[], { centre, deviation }: Cha
     ...runs(side, NINE).map(({ direction, from, to }) => signal('nine-on-one-side', direction, from, to)),
     // six lots have five steps between them
     ...runs(steps, SIX - 1).map(({ direction, from, to }) => signal('six-in-a-row', direction, from - 1, to)),
-    ...two.flatMap((direction, i) => (i >= 1 && direction && [two[i - 1], two[i - 2]].includes(direction) ? [signal('two-of-three', direction, two[i - 1] === direction ? i - 1 : i - 2, i)] : [])),
+    ...joined(two.flatMap((direction, i) => (i >= 1 && direction && [two[i - 1], two[i - 2]].includes(direction) ? [{ direction, from: two[i - 1] === direction ? i - 1 : i - 2, to: i }] : []))).map(({ direction, from, to }) => signal('two-of-three', direction, from, to)),
   ].sort((a, b) => a.to - b.to || RUN_RULES.indexOf(a.rule) - RUN_RULES.indexOf(b.rule));
 }
 
 const signal = (rule: RunRule, direction: number, from: number, to: number): Signal => ({ rule, direction: direction > 0 ? 'up' : 'down', from, to });
 
+interface Stretch {
+  readonly direction: number;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** Stretches that share a lot are one. */
+function joined(stretches: readonly Stretch[]): readonly Stretch[] {
+  const found: Stretch[] = [];
+  for (const one of stretches) {
+    const before = found.at(-1);
+    if (before?.direction === one.direction && one.from <= before.to) found[found.length - 1] = { ...before, to: one.to };
+    else found.push(one);
+  }
+  return found;
+}
+
 /** Stretches of at least so many of the same sign, zeros left out. */
-function runs(signs: readonly number[], least: number): readonly { readonly direction: number; readonly from: number; readonly to: number }[] {
-  const found = [];
+function runs(signs: readonly number[], least: number): readonly Stretch[] {
+  const found: Stretch[] = [];
   let from = 0;
   for (let i = 1; i <= signs.length; i++) {
     if (signs[i] === signs[from]) continue;

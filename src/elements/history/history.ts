@@ -39,7 +39,8 @@ export class EsterwayHistory extends SectionElement {
     ...SectionElement.styles,
     plotStyles,
     css`
-      p {
+      p,
+      li {
         margin-block: 5px;
       }
       table {
@@ -161,7 +162,7 @@ export class EsterwayHistory extends SectionElement {
       <p>${fill(words.centre, this.figures)}</p>
       <div role="status">
         ${signals.length
-          ? html`${signals.map(({ rule, direction, from, to }) => html`<p class="gate">${fill(words.rules[rule][direction], { from: day(from), to: day(to) })}</p>`)}<p>${words.ask}</p>`
+          ? html`<ul class="gate">${signals.map(({ rule, direction, from, to }) => html`<li>${fill(words.rules[rule][direction], { from: day(from), to: day(to) })}</li>`)}</ul><p>${words.ask}</p>`
           : html`<p>${words.steady}</p>`}
       </div>
     `;
@@ -191,7 +192,7 @@ export class EsterwayHistory extends SectionElement {
 
   private dateWords(date: string): string {
     const time = Date.parse(`${date.slice(0, 10)}T00:00:00Z`);
-    return Number.isNaN(time) ? date || this.words.noDate : new Intl.DateTimeFormat(this.languageTag, { day: 'numeric', month: 'short', year: '2-digit', timeZone: 'UTC' }).format(time);
+    return Number.isNaN(time) ? date || this.words.noDate : new Intl.DateTimeFormat(this.languageTag, { day: 'numeric', month: 'short', year: 'numeric', timeZone: 'UTC' }).format(time);
   }
 }
 
