@@ -78,7 +78,7 @@ const site: UserConfig = {
   publicDir: false,
   plugins: [asTheyLie],
   server: { host: 'localhost', fs: { allow: [at('.')] } },
-  optimizeDeps: { include: runtime },
+  optimizeDeps: { include: [...runtime, 'tabulator-tables'] },
 };
 
 const builds: Record<string, () => UserConfig> = {

@@ -4,6 +4,7 @@ export const german: Readonly<Record<string, string>> = {
   pages: 'Seiten',
   desk: 'Annahme',
   apart: 'Abschnitte einzeln',
+  sheet: 'Neben einer Tabelle',
   script: 'Ein Script-Tag',
   language: 'Sprache',
   units: 'Einheiten',

@@ -8,3 +8,7 @@ defineSheets();
 export { EsterwayRows } from './elements/rows/rows.js';
 export { EsterwayColumnsChangeEvent } from './elements/rows/events.js';
 export { defineSheets } from './elements/define-sheets.js';
+export type { ColumnMemory } from './exchange/table/columns.js';
+export { clipboardHost } from './exchange/sheet-host/clipboard-host.js';
+export type { ClipboardWords } from './exchange/sheet-host/clipboard-host.js';
+export type { FilledCells, SheetBlock, SheetHost, SheetSelection, WrittenBlock } from './exchange/sheet-host/sheet-host.js';

@@ -28,7 +28,7 @@ describe.each(['A4', 'Letter'] as const)('on %s', (format) => {
       const page = await openPage(browser);
       await page.setContent(`<!doctype html><html lang="${lang}"><head><style>@page{margin:12mm}body{margin:0}</style></head><body></body></html>`);
       await page.addScriptTag({ path: built('dist/browser/esterway.min.js') });
-      await page.addScriptTag({ path: built('dist/browser/esterway-more.min.js') });
+      for (const file of ['shared', 'more']) await page.addScriptTag({ path: built(`dist/browser/esterway-${file}.min.js`) });
       await page.evaluate(([lot, site]) => {
         const sheet = document.createElement('esterway-charge-sheet');
         document.body.append(Object.assign(sheet, { entry: lot, site }));

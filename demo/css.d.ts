@@ -1,0 +1,2 @@
+// Style sheets that a page imports through Vite.
+declare module '*.css';
