@@ -5,6 +5,7 @@ import { defineSheets } from './elements/define-sheets.js';
 
 defineSheets();
 
+export { EsterwayResults } from './elements/results/results.js';
 export { EsterwayRows } from './elements/rows/rows.js';
 export { EsterwayColumnsChangeEvent } from './elements/rows/events.js';
 export { defineSheets } from './elements/define-sheets.js';

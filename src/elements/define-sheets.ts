@@ -1,7 +1,9 @@
+import { EsterwayResults } from './results/results.js';
 import { EsterwayRows } from './rows/rows.js';
 
 const ELEMENTS: readonly (readonly [tag: string, element: CustomElementConstructor])[] = [
   ['esterway-rows', EsterwayRows],
+  ['esterway-results', EsterwayResults],
 ];
 
 /** Registers what reads sheets and writes for them. A tag that is taken already stays as it is. */

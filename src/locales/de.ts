@@ -23,6 +23,7 @@ export const de: Texts = {
     untitled: 'Neue Partie',
     undo: 'Rückgängig',
     book: 'Eingangsbuch',
+    results: 'Ergebnisse für eine Tabelle',
     rows: 'Zeilen aus einer Tabelle',
     newLot: 'Neue Partie',
     print: 'Ansatz drucken',

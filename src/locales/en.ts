@@ -22,6 +22,7 @@ export const en = {
     untitled: 'New lot',
     undo: 'Undo',
     book: 'Intake book',
+    results: 'Results for a sheet',
     rows: 'Rows from a sheet',
     newLot: 'New lot',
     print: 'Print the charge',

@@ -18,7 +18,7 @@ const elements = manifest.modules.flatMap(({ declarations = [] }) => declaration
 describe('the manifest', () => {
   it('holds every public element', () => {
     expect(elements.map(({ tagName }) => tagName).sort()).toEqual([
-      'esterway-after', 'esterway-balance', 'esterway-blend', 'esterway-book', 'esterway-charge', 'esterway-cost', 'esterway-curve', 'esterway-history', 'esterway-lot', 'esterway-panel', 'esterway-route', 'esterway-rows', 'esterway-site', 'esterway-site-values', 'esterway-titrant', 'esterway-titration', 'esterway-triage', 'esterway-working',
+      'esterway-after', 'esterway-balance', 'esterway-blend', 'esterway-book', 'esterway-charge', 'esterway-cost', 'esterway-curve', 'esterway-history', 'esterway-lot', 'esterway-panel', 'esterway-results', 'esterway-route', 'esterway-rows', 'esterway-site', 'esterway-site-values', 'esterway-titrant', 'esterway-titration', 'esterway-triage', 'esterway-working',
     ]);
   });
 

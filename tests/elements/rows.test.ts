@@ -4,12 +4,13 @@ import { afterEach, describe, expect, test, vi } from 'vitest';
 import type { ColumnMemory } from '../../src/exchange/table/columns.js';
 import type { SheetBlock, SheetHost, SheetSelection } from '../../src/exchange/sheet-host/sheet-host.js';
 import { deRows } from '../../src/locales/de-rows.js';
+import { enGiving } from '../../src/locales/en-giving.js';
 import { enRows } from '../../src/locales/en-rows.js';
 import { enTriage } from '../../src/locales/en-triage.js';
 import '../../src/sheets.js';
 import type { EsterwayRows } from '../../src/sheets.js';
 import { button, choose, click, emulate, find, input, openPart, paste, place, press, select, words } from './tools/page.js';
-import { site } from './tools/lots.js';
+import { site, sour } from './tools/lots.js';
 import { en, fill } from './tools/texts.js';
 
 const SHEET = 'Lot\tSupplier\tDate\tOil kg\tFFA %\tQuality\nA1\tKitchen round\t2026-03-02\t900\t2.1\tgood\nA2\tSnack fryers\t2026-03-03\t1200\t5.4\tfair\n\t\t\t\t\t\nA3\tSnack fryers\tsoon\t800\tabc\tbad\n=cmd|\' /C calc\'!A0\tMill\t2026-03-04\t700\t1.0\t';
@@ -135,8 +136,8 @@ describe('results', () => {
     const element = await placeRows(SHEET);
     await workOut(element, 5);
     const write = vi.spyOn(navigator.clipboard, 'write').mockResolvedValue();
-    await choose(element, enRows.target, ',');
-    await click(button(element, enRows.copy));
+    await choose(element, enGiving.target, ',');
+    await click(button(element, enGiving.copy));
     await vi.waitFor(() => expect(write).toHaveBeenCalledOnce());
     const item = write.mock.calls[0]![0][0]!;
     const text = await (await item.getType('text/plain')).text();
@@ -145,7 +146,7 @@ describe('results', () => {
     // a name that a sheet would run is guarded
     expect(text).toContain("'=cmd|' /C calc'!A0");
     expect(await (await item.getType('text/html')).text()).toContain('<table>');
-    await vi.waitFor(() => expect(words(element)).toContain(fill(enRows.copied, { rows: '4' })));
+    await vi.waitFor(() => expect(words(element)).toContain(fill(enGiving.copied, { rows: '4' })));
     write.mockRestore();
   });
 
@@ -154,8 +155,8 @@ describe('results', () => {
     await workOut(element, 5);
     const write = vi.spyOn(navigator.clipboard, 'write').mockRejectedValue(new Error('barred'));
     const command = vi.spyOn(document, 'execCommand').mockReturnValue(false);
-    await click(button(element, enRows.copy));
-    await vi.waitFor(() => expect(words(element)).toContain(enRows.copyByHand));
+    await click(button(element, enGiving.copy));
+    await vi.waitFor(() => expect(words(element)).toContain(enGiving.copyByHand));
     expect(element.shadowRoot!.querySelector<HTMLTextAreaElement>('textarea[readonly]')!.value).toContain('A1\t2.10');
     write.mockRestore();
     command.mockRestore();
@@ -173,8 +174,8 @@ describe('results', () => {
     const clicked = vi.spyOn(HTMLAnchorElement.prototype, 'click').mockImplementation(function (this: HTMLAnchorElement) {
       saved.push({ name: this.download, blob: blobs.at(-1)! });
     });
-    await click(button(element, enRows.csv));
-    await click(button(element, enRows.workbook));
+    await click(button(element, enGiving.csv));
+    await click(button(element, enGiving.workbook));
     expect(saved.map(({ name }) => name)).toEqual(['esterway.csv', 'esterway.xlsx']);
     expect((await saved[0]!.blob.text()).replace('\ufeff', '')).toMatch(/^Row,Lot,FFA \[%\],/);
     expect(new Uint8Array(await saved[1]!.blob.arrayBuffer()).slice(0, 2)).toEqual(new Uint8Array([0x50, 0x4b]));
@@ -241,6 +242,23 @@ test('a file is read, whatever its letters are kept in', async () => {
   field.dispatchEvent(new Event('change'));
   await vi.waitFor(() => expect(words(element)).toContain('eingang.csv'));
   expect(select(element, '“Säurezahl”').value).toBe('certificateAcidValue');
+});
+
+test('the lot on the bench is given as a row, and as a workbook, from the panel', async () => {
+  const panel = await place(html`<esterway-panel .entry=${sour}></esterway-panel>`);
+  await openPart(panel, en.panel.results);
+  const results = find(panel, 'esterway-results');
+  const write = vi.spyOn(navigator.clipboard, 'write').mockResolvedValue();
+  await click(button(results, enGiving.copy));
+  await vi.waitFor(() => expect(write).toHaveBeenCalledOnce());
+  const [heads, row] = (await (await write.mock.calls[0]![0][0]!.getType('text/plain')).text()).split('\r\n').map((line) => line.split('\t'));
+  expect(heads!.slice(0, 3)).toEqual(['Lot', 'Source', 'Date']);
+  expect(row!.slice(0, 3)).toEqual(['HK-0417', 'Snack fryers', '2026-03-04']);
+  expect(row![heads!.indexOf('Free fatty acid [%]')]).toMatch(/^4\.\d\d$/);
+  expect(row![heads!.indexOf('Acid step 1: methanol [kg]')]).toMatch(/^\d+/);
+  write.mockRestore();
+  const empty = await place(html`<esterway-results></esterway-results>`);
+  expect(words(empty)).toContain(enGiving.nothing);
 });
 
 test('stands in the panel, fetched when it is opened, and by the keyboard', async () => {

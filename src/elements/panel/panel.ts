@@ -161,6 +161,7 @@ export class EsterwayPanel extends LotElement {
         <esterway-working class="no-print" exportparts=${parts}></esterway-working>
         <div class="later no-print">
           <esterway-later needs="book" .label=${this.texts.panel.book} .content=${book}></esterway-later>
+          <esterway-later needs="sheets" .label=${this.texts.panel.results} .content=${results}></esterway-later>
           <esterway-later needs="sheets" .label=${this.texts.panel.rows} .content=${this.rows}></esterway-later>
         </div>
         <esterway-site-values class="no-print" folded exportparts=${parts}></esterway-site-values>
@@ -212,6 +213,7 @@ export class EsterwayPanel extends LotElement {
   }
 }
 
+const results = (): unknown => html`<esterway-results bare></esterway-results>`;
 const book = (): unknown => html`<esterway-book bare exportparts="figure"></esterway-book>`;
 
 declare global {

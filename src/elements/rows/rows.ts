@@ -2,11 +2,10 @@ import { html, nothing } from 'lit';
 import type { TemplateResult } from 'lit';
 import { property, state } from 'lit/decorators.js';
 import { live } from 'lit/directives/live.js';
-import { copyRows } from '../../exchange/clipboard.js';
 import { decimalMark } from '../../exchange/number-format.js';
 import type { DecimalMark } from '../../exchange/number-text.js';
 import type { ResultCell } from '../../exchange/results/row.js';
-import { asCsv, plainCell } from '../../exchange/results/table-text.js';
+import { plainCell } from '../../exchange/results/table-text.js';
 import { counted } from '../../exchange/sheet-host/sheet-host.js';
 import type { FilledCells, SheetBlock, SheetHost, SheetSelection } from '../../exchange/sheet-host/sheet-host.js';
 import { textOfBytes } from '../../exchange/table/bytes.js';
@@ -19,17 +18,20 @@ import type { RowProblem, RowReading } from '../../exchange/table/row-entry.js';
 import { MOST_BYTES } from '../../exchange/table/table.js';
 import type { TableFault } from '../../exchange/table/table.js';
 import type { RowsSummary, WorkedRow } from '../../exchange/table/worked-rows.js';
-import { workbookOf } from '../../exchange/workbook/workbook.js';
+import { deGiving } from '../../locales/de-giving.js';
 import { deRows } from '../../locales/de-rows.js';
 import { deTriage } from '../../locales/de-triage.js';
+import { enGiving } from '../../locales/en-giving.js';
 import { enRows } from '../../locales/en-rows.js';
 import { enTriage } from '../../locales/en-triage.js';
 import type { Widened } from '../../locales/en.js';
 import { fill } from '../../locales/fill.js';
 import { fieldName } from '../../locales/quantity-name.js';
+import type { LotEntry } from '../../lot/entry.js';
 import { fieldStyles } from '../parts/field-styles.js';
 import type { OptionInputEvent } from '../parts/option-field.js';
 import { SectionElement } from '../parts/section.js';
+import { SheetGiving } from '../parts/sheet-giving.js';
 import type { Running } from '../parts/sliced-work.js';
 import { columnName, columnsView, meaningWords } from './columns-view.js';
 import { EsterwayColumnsChangeEvent } from './events.js';
@@ -40,13 +42,12 @@ import { LOOKED, SheetText } from './sheet-text.js';
 import { rowsStyles } from './styles.js';
 
 const TEXTS = { en: enRows, de: deRows };
+const GIVING_TEXTS = { en: enGiving, de: deGiving };
 const STATE_TEXTS = { en: enTriage, de: deTriage };
 /** Rows shown at once. */
 const PAGE = 25;
 /** Bad rows told before anything is worked out. */
 const MOST_TOLD = 12;
-/** A workbook of more lots is slow to open. */
-const MOST_LOTS = 50;
 
 /**
  * Reads rows of any sheet (pasted, from a file, or the selection of a sheet around it), says what was understood column by column
@@ -85,13 +86,20 @@ export class EsterwayRows extends SectionElement {
   @state() private stopped = false;
   @state() private from = 0;
   @state() private onlyProblems = false;
-  @state() private target: 'page' | DecimalMark = 'page';
-  @state() private byHand = '';
   /** What a block would be written over, until a person has said what to do. */
   @state() private filled: FilledCells | undefined;
   @state() private running: Running | undefined;
 
   #selection: SheetSelection | undefined;
+
+  readonly #giving = new SheetGiving(this, {
+    words: () => this.textsOf(GIVING_TEXTS),
+    tag: () => this.languageTag,
+    rows: () => this.cells,
+    lots: (most) => this.lots(most),
+    site: () => this.desk.site,
+    say: (text) => (this.said = text),
+  });
 
   private get words(): Widened<typeof enRows> {
     return this.textsOf(TEXTS);
@@ -303,14 +311,8 @@ export class EsterwayRows extends SectionElement {
     const { words } = this;
     return html`
       <div class="no-print">
-        <h3>${words.give}</h3>
-        <div class="fields">${this.choice(words.target, words.targets, this.target, undefined, (target) => (this.target = target as typeof this.target))}</div>
-        <div class="actions">
-          <button class="action" part="action" type="button" @click=${this.onCopy}>${words.copy}</button>
-          <button class="action" part="action" type="button" @click=${this.onCsv}>${words.csv}</button>
-          <button class="action" part="action" type="button" @click=${this.onWorkbook}>${words.workbook}</button>
-          ${this.host && this.#selection ? html`<button class="action" part="action" type="button" @click=${this.onBeside}>${words.beside}</button>` : nothing}
-        </div>
+        <h3>${this.textsOf(GIVING_TEXTS).give}</h3>
+        ${this.#giving.render(this.host && this.#selection ? html`<button class="action" part="action" type="button" @click=${this.onBeside}>${words.beside}</button>` : nothing)}
         ${this.filled
           ? html`<div class="gate" role="alertdialog" aria-label=${words.beside}>
               <p>${fill(words.filled, { count: String(this.filled.count), first: this.filled.first.map(({ address, text }) => `${address} “${text}”`).join(', ') })}</p>
@@ -321,7 +323,6 @@ export class EsterwayRows extends SectionElement {
               </div>
             </div>`
           : nothing}
-        ${this.byHand ? html`<textarea readonly aria-label=${words.copy} .value=${this.byHand} @focus=${(event: FocusEvent) => (event.target as HTMLTextAreaElement).select()}></textarea>` : nothing}
       </div>
     `;
   }
@@ -335,52 +336,22 @@ export class EsterwayRows extends SectionElement {
     return [resultHeadings(tongue), ...this.rows.filter(({ state: found }) => found).map((row) => resultCells(row, tongue))];
   }
 
-  private get targetMark(): DecimalMark {
-    return this.target === 'page' ? decimalMark(this.languageTag) : this.target;
-  }
-
-  private async onCopy(): Promise<void> {
-    const { cells, words } = this;
-    const copied = await copyRows(cells, this.targetMark, this.ownerDocument);
-    this.byHand = copied.how === 'by-hand' ? copied.text : '';
-    this.said = copied.how === 'by-hand' ? words.copyByHand : fill(words.copied, { rows: String(cells.length - 1) });
-  }
-
-  private onCsv(): void {
-    const mark = this.targetMark;
-    this.save(new Blob([asCsv(this.cells, { mark, delimiter: mark === ',' ? ';' : ',', byteOrderMark: true })], { type: 'text/csv' }), 'esterway.csv');
-  }
-
-  private onWorkbook(): void {
-    const { sheet, words } = this;
-    const { table } = sheet;
-    if (!table) return;
-    try {
-      const lots = [];
-      for (const { entry } of rowEntries(table, sheet.columns, this.mark, sheet.order)) {
-        if (entry) lots.push(entry);
-        if (lots.length > MOST_LOTS) break;
-      }
-      const { bytes } = workbookOf(lots.slice(0, MOST_LOTS), this.desk.site, { language: this.languageTag });
-      this.save(new Blob([bytes as BlobPart], { type: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet' }), 'esterway.xlsx');
-      this.said = lots.length > MOST_LOTS ? fill(words.workbookMost, { most: String(MOST_LOTS) }) : '';
-    } catch (error) {
-      this.said = fill(words.workbookFailed, { error: String(error) });
+  /** The rows as lots, at most so many and one more. */
+  private lots(most: number): readonly LotEntry[] {
+    const { sheet } = this;
+    const lots: LotEntry[] = [];
+    if (!sheet.table) return lots;
+    for (const { entry } of rowEntries(sheet.table, sheet.columns, this.mark, sheet.order)) {
+      if (entry) lots.push(entry);
+      if (lots.length > most) break;
     }
-  }
-
-  private save(blob: Blob, name: string): void {
-    const link = this.ownerDocument.createElement('a');
-    link.href = URL.createObjectURL(blob);
-    link.download = name;
-    link.click();
-    URL.revokeObjectURL(link.href);
+    return lots;
   }
 
   /** The results in the order of the rows that were read, their headings where the selection has some. */
   private get block(): SheetBlock {
     const { sheet, tongue } = this;
-    const mark = this.targetMark;
+    const { mark } = this.#giving;
     const text = (cells: readonly ResultCell[]): readonly string[] => cells.slice(2).map((cell) => plainCell(cell, mark));
     const blank = resultHeadings(tongue).slice(2).map(() => null);
     const before = (sheet.table?.firstRow ?? 1) - 1;
@@ -436,7 +407,7 @@ export class EsterwayRows extends SectionElement {
     this.summed = undefined;
     this.stopped = false;
     this.from = 0;
-    this.byHand = '';
+    this.#giving.reset();
     this.filled = undefined;
     this.sheet = sheet;
   }
