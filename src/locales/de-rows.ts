@@ -77,6 +77,7 @@ export const deRows: Widened<typeof enRows> = {
   charge: '{catalyst} kg Katalysator, {methanol} kg Methanol für die Umesterung',
   beside: 'Neben die Zeilen schreiben',
   filled: '{count} Zellen dort sind gefüllt, die ersten: {first}.',
+  filledCell: '{address} „{text}“',
   cancel: 'Abbrechen',
   onlyBlanks: 'Nur leere Zellen füllen',
   replace: 'Überschreiben',

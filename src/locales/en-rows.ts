@@ -74,6 +74,7 @@ export const enRows = {
   charge: '{catalyst} kg of catalyst, {methanol} kg of methanol for the base step',
   beside: 'Write beside the rows',
   filled: '{count} cells there hold something, the first: {first}.',
+  filledCell: '{address} “{text}”',
   cancel: 'Cancel',
   onlyBlanks: 'Fill only blank cells',
   replace: 'Write over them',

@@ -6,8 +6,7 @@ import { decimalMark } from '../../exchange/number-format.js';
 import type { DecimalMark } from '../../exchange/number-text.js';
 import type { ResultCell } from '../../exchange/results/row.js';
 import { plainCell } from '../../exchange/results/table-text.js';
-import { counted } from '../../exchange/sheet-host/sheet-host.js';
-import type { FilledCells, SheetBlock, SheetHost, SheetSelection } from '../../exchange/sheet-host/sheet-host.js';
+import type { SheetBlock, SheetHost } from '../../exchange/sheet-host/sheet-host.js';
 import { textOfBytes } from '../../exchange/table/bytes.js';
 import { EMPTY_MEMORY, remember } from '../../exchange/table/columns.js';
 import type { ColumnMemory, ColumnUse } from '../../exchange/table/columns.js';
@@ -33,10 +32,12 @@ import type { OptionInputEvent } from '../parts/option-field.js';
 import { SectionElement } from '../parts/section.js';
 import { SheetGiving } from '../parts/sheet-giving.js';
 import type { Running } from '../parts/sliced-work.js';
+import { BesideSheet } from './beside-sheet.js';
 import { columnName, columnsView, meaningWords } from './columns-view.js';
 import { EsterwayColumnsChangeEvent } from './events.js';
 import { resultCells, resultHeadings } from './result-cells.js';
 import type { ResultTongue } from './result-cells.js';
+import { countsView, rowView } from './results-view.js';
 import { workRows } from './rows-run.js';
 import { LOOKED, SheetText } from './sheet-text.js';
 import { rowsStyles } from './styles.js';
@@ -86,12 +87,15 @@ export class EsterwayRows extends SectionElement {
   @state() private stopped = false;
   @state() private from = 0;
   @state() private onlyProblems = false;
-  /** What a block would be written over, until a person has said what to do. */
-  @state() private filled: FilledCells | undefined;
   @state() private running: Running | undefined;
 
-  #selection: SheetSelection | undefined;
-
+  readonly #beside = new BesideSheet(this, {
+    words: () => this.words,
+    sheet: () => this.host,
+    block: () => this.block,
+    take: (text, said) => this.take(text, said),
+    say: (text) => (this.said = text),
+  });
   readonly #giving = new SheetGiving(this, {
     words: () => this.textsOf(GIVING_TEXTS),
     tag: () => this.languageTag,
@@ -140,7 +144,7 @@ export class EsterwayRows extends SectionElement {
         <div class="actions">
           <input class="unseen" id="file" type="file" accept=".csv,.tsv,.txt,text/csv,text/tab-separated-values,text/plain" aria-label=${words.file} tabindex="-1" @change=${this.onFile} />
           <button class="action" part="action" type="button" @click=${this.onChooseFile}>${words.file}</button>
-          ${this.host ? html`<button class="action" part="action" type="button" @click=${this.onSelection}>${words.selection}</button>` : nothing}
+          ${this.host ? html`<button class="action" part="action" type="button" @click=${() => void this.#beside.read()}>${words.selection}</button>` : nothing}
           ${sheet.text ? html`<button class="action" part="action" type="button" @click=${() => this.take('')}>${words.clear}</button>` : nothing}
         </div>
       </div>
@@ -235,7 +239,7 @@ export class EsterwayRows extends SectionElement {
   }
 
   private results(): unknown {
-    const { words, rows, running } = this;
+    const { words, rows, running, summed } = this;
     if (!rows.length || running) return nothing;
     const shown = this.onlyProblems ? rows.filter((row) => this.why(row)) : rows.filter(({ state: found }) => found);
     const from = Math.min(this.from, Math.max(0, shown.length - 1));
@@ -243,14 +247,14 @@ export class EsterwayRows extends SectionElement {
     return html`
       <div part="result">
         <h3>${words.results}</h3>
-        ${this.counts()}
+        ${summed ? countsView(summed, this.tongue, this.texts.problems) : nothing}
         <div class="fields no-print">
           ${this.choice(words.filter, { all: words.all, problems: words.withProblem }, this.onlyProblems ? 'problems' : 'all', undefined, (which) => {
             this.onlyProblems = which === 'problems';
             this.from = 0;
           })}
         </div>
-        ${page.map((row) => this.row(row))}
+        ${page.map((row) => rowView(row, this.tongue, (text) => this.number(text)))}
         ${shown.length > PAGE
           ? html`<p class="note" role="status">${fill(words.page, { from: String(from + 1), to: String(from + page.length), of: String(shown.length) })}</p>
               <div class="actions no-print">
@@ -261,40 +265,6 @@ export class EsterwayRows extends SectionElement {
         ${this.give()}
       </div>
     `;
-  }
-
-  private counts(): unknown {
-    const { words, summed } = this;
-    if (!summed) return nothing;
-    const states = this.textsOf(STATE_TEXTS).shortStates;
-    const sentences = this.texts.problems as Readonly<Record<string, string>>;
-    const line = ([name, count]: readonly [string, number]): TemplateResult => html`<dt>${name}</dt><dd>${fill(words.count, { n: String(count) })}</dd>`;
-    const found = Object.entries(summed.states).filter(([, count]) => count).map(([key, count]) => [states[key as keyof typeof states], count] as const);
-    const problems = Object.entries(summed.problems).map(([code, count]) => {
-      const own = code === 'missing' ? words.missing : ((words.problems as Readonly<Record<string, string>>)[code] ?? sentences[code] ?? code);
-      return [fill(own, { typed: '…', unit: '…', needed: '…', bound: '…' }), count] as const;
-    });
-    return html`
-      <h4>${words.states}</h4>
-      <dl>${found.map(line)}</dl>
-      ${problems.length ? html`<h4>${words.byProblem}</h4><dl>${problems.map(line)}</dl>` : nothing}
-    `;
-  }
-
-  private row(row: WorkedRow): TemplateResult {
-    const { words } = this;
-    const { name, freeFattyAcid, plusMinus, acidValue, route, catalyst, methanol } = row;
-    const number = (text: string): string => this.number(text);
-    const figures = [
-      freeFattyAcid !== undefined && `FFA ${number(freeFattyAcid)}${plusMinus === undefined ? '' : ` ± ${number(plusMinus)}`}\u00a0%`,
-      acidValue !== undefined && `${number(acidValue)}\u00a0mg/g`, route && words.routes[route],
-      catalyst !== undefined && methanol !== undefined && fill(words.charge, { catalyst: number(catalyst), methanol: number(methanol) }),
-    ].filter(Boolean);
-    const why = this.why(row);
-    return html`<div class="row">
-      <p class="top"><b>${row.row} ${name ? html`· ${name}` : nothing}</b><span>${row.state ? this.textsOf(STATE_TEXTS).shortStates[row.state] : ''}</span></p>
-      ${figures.length ? html`<p class="note">${figures.join(' · ')}</p>` : nothing} ${why ? html`<p class="problem">${why}</p>` : nothing}
-    </div>`;
   }
 
   private why({ cells = [], problem, missing }: WorkedRow): string {
@@ -308,21 +278,11 @@ export class EsterwayRows extends SectionElement {
   // -- giving back ----------------------------------------------------------
 
   private give(): unknown {
-    const { words } = this;
     return html`
       <div class="no-print">
         <h3>${this.textsOf(GIVING_TEXTS).give}</h3>
-        ${this.#giving.render(this.host && this.#selection ? html`<button class="action" part="action" type="button" @click=${this.onBeside}>${words.beside}</button>` : nothing)}
-        ${this.filled
-          ? html`<div class="gate" role="alertdialog" aria-label=${words.beside}>
-              <p>${fill(words.filled, { count: String(this.filled.count), first: this.filled.first.map(({ address, text }) => `${address} “${text}”`).join(', ') })}</p>
-              <div class="actions">
-                <button class="action" part="action" type="button" @click=${() => (this.filled = undefined)}>${words.cancel}</button>
-                <button class="action" part="action" type="button" @click=${() => void this.write('blanks')}>${words.onlyBlanks}</button>
-                <button class="action" part="action" type="button" @click=${() => void this.write('replace')}>${words.replace}</button>
-              </div>
-            </div>`
-          : nothing}
+        ${this.#giving.render(this.#beside.action())}
+        ${this.#beside.question()}
       </div>
     `;
   }
@@ -359,42 +319,11 @@ export class EsterwayRows extends SectionElement {
     return [...head, ...this.rows.map((row) => (row.state ? text(resultCells(row, tongue)) : blank))];
   }
 
-  private async onBeside(): Promise<void> {
-    const selection = this.#selection;
-    if (!this.host || !selection) return;
-    await this.trying(async (host) => {
-      const filled = await host.wouldOverwrite(this.block, selection);
-      if (filled.count) this.filled = filled;
-      else await this.write('blanks');
-    });
-  }
-
-  private async write(over: 'blanks' | 'replace'): Promise<void> {
-    const selection = this.#selection;
-    this.filled = undefined;
-    if (!selection) return;
-    await this.trying(async (host) => {
-      const { address, cells } = await host.write(this.block, selection, over);
-      const { words } = this;
-      this.said = `${fill(words.written, { cells: String(cells), address })} ${host.undo === 'one-step' ? words.undoable : words.notUndoable}`;
-    });
-  }
-
-  /** What a sheet cannot do it says itself. */
-  private async trying(what: (host: SheetHost) => Promise<void>): Promise<void> {
-    if (!this.host) return;
-    try {
-      await what(this.host);
-    } catch (error) {
-      this.said = error instanceof Error ? error.message : String(error);
-    }
-  }
-
   // -- what a person does ---------------------------------------------------
 
   /** Takes a text in; what was worked out belongs to the text before. */
   private take(text: string, said = ''): void {
-    this.#selection = undefined;
+    this.#beside.forget();
     this.put(new SheetText(text, this.columnMemory));
     this.said = said;
     this.fault = undefined;
@@ -408,7 +337,7 @@ export class EsterwayRows extends SectionElement {
     this.stopped = false;
     this.from = 0;
     this.#giving.reset();
-    this.filled = undefined;
+    this.#beside.reset();
     this.sheet = sheet;
   }
 
@@ -472,21 +401,6 @@ export class EsterwayRows extends SectionElement {
     } catch {
       this.fault = 'file';
     }
-  }
-
-  private async onSelection(): Promise<void> {
-    await this.trying(async (host) => {
-      const selection = await host.read();
-      const { words } = this;
-      if (!selection?.cells.length) {
-        this.said = words.nothingSelected;
-        return;
-      }
-      const quoted = (cell: string): string => (/["\t\r\n]/.test(cell) ? `"${cell.replace(/"/g, '""')}"` : cell);
-      const { rows, blank } = counted(selection);
-      this.take(selection.cells.map((row) => row.map(quoted).join('\t')).join('\n'), fill(words.fromSelection, { address: selection.address, rows: String(rows), blank: String(blank) }));
-      this.#selection = selection;
-    });
   }
 
   private onWork(): void {
