@@ -233,6 +233,20 @@ describe('beside a sheet', () => {
   });
 });
 
+test('a table of HTML is read where there is no text, or where the text is its source, and nothing of it runs', async () => {
+  const source = '<table><tr><th>Lot</th><th>FFA&nbsp;[%]</th></tr><tr><td>A<script>document.title = "run"</script></td><td>2.1</td></tr><tr><td>B<img src="x" onerror="document.title = 1"></td><td>3.4</td></tr></table>';
+  const element = await placeRows();
+  const data = new DataTransfer();
+  data.setData('text/html', source);
+  box(element).dispatchEvent(new ClipboardEvent('paste', { clipboardData: data, bubbles: true, composed: true, cancelable: true }));
+  await element.updateComplete;
+  expect(select(element, '“FFA [%]”').value).toBe('certificateFfa');
+  expect(words(element)).toContain(fill(enRows.size, { rows: '2', columns: '2' }));
+  const other = await placeRows(source);
+  expect(words(other)).toContain(fill(enRows.size, { rows: '2', columns: '2' }));
+  expect(document.title).not.toMatch(/run|1/);
+});
+
 test('a file is read, whatever its letters are kept in', async () => {
   const element = await placeRows();
   const field = input(element, enRows.file);

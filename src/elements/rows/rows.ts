@@ -12,6 +12,7 @@ import { EMPTY_MEMORY, remember } from '../../exchange/table/columns.js';
 import type { ColumnMemory, ColumnUse } from '../../exchange/table/columns.js';
 import type { DateOrder } from '../../exchange/table/dates.js';
 import { isTextKey } from '../../exchange/table/meanings.js';
+import { pastedText } from '../../exchange/table/pasted.js';
 import { rowEntries } from '../../exchange/table/row-entry.js';
 import type { RowProblem, RowReading } from '../../exchange/table/row-entry.js';
 import { MOST_BYTES } from '../../exchange/table/table.js';
@@ -358,7 +359,7 @@ export class EsterwayRows extends SectionElement {
 
   /** A paste replaces what stands there: rows of two sheets are no sheet. */
   private onPaste(event: ClipboardEvent): void {
-    const text = event.clipboardData?.getData('text/plain') ?? '';
+    const text = pastedText(event.clipboardData?.getData('text/plain') ?? '', event.clipboardData?.getData('text/html') ?? '');
     if (!text.trim()) return;
     event.preventDefault();
     this.take(text);
@@ -373,9 +374,9 @@ export class EsterwayRows extends SectionElement {
     event.preventDefault();
     this.over = false;
     const [file] = event.dataTransfer?.files ?? [];
-    const text = event.dataTransfer?.getData('text/plain');
+    const text = pastedText(event.dataTransfer?.getData('text/plain') ?? '', event.dataTransfer?.getData('text/html') ?? '');
     if (file) void this.takeFile(file);
-    else if (text?.trim()) this.take(text);
+    else if (text.trim()) this.take(text);
   }
 
   private onChooseFile(): void {
@@ -397,7 +398,7 @@ export class EsterwayRows extends SectionElement {
       return;
     }
     try {
-      this.take(textOfBytes(new Uint8Array(await file.arrayBuffer())), file.name);
+      this.take(pastedText(textOfBytes(new Uint8Array(await file.arrayBuffer())), ''), file.name);
     } catch {
       this.fault = 'file';
     }
