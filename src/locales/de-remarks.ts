@@ -44,6 +44,7 @@ export const deNotices: Texts['notices'] = {
   'batch-above-vessel': 'Der Ansatz von {volume} L übersteigt die {working} L, bis zu denen der Behälter gefüllt wird. Partie teilen.',
   'batch-too-wet': 'Das Wasser im Ansatz macht {water} % des Öls aus, mehr als hier zulässig ({limit} %): weniger Ester, mehr Seife. Öl trocknen oder ein Methylat nehmen.',
   'soap-above-limit': 'Die Seife macht {soap} % des Öls aus, mehr als hier zulässig ({limit} %): die Schichten trennen sich kaum. Zweistufig arbeiten oder verschneiden.',
+  'retest-higher': 'Die Nachtitration mit {after} % FFA liegt über den {before} % vor der Veresterung, die keine Säure bildet. Prüfen, ob beide vertauscht sind; Mineralsäure im Öl titriert mit: länger absetzen lassen und eine frische Probe ziehen.',
   'methanol-little-for-catalyst': '{load} g Katalysator je Liter Methanol liegen nahe oder über den {solubility} g, die sich lösen. Mehr Methanol oder eine Lösung nehmen.',
 };
 

@@ -42,6 +42,7 @@ export const enNotices = {
   'batch-above-vessel': 'The batch of {volume} L is above the {working} L that the vessel is filled to. Split the lot.',
   'batch-too-wet': 'Water in the batch comes to {water} % of the oil, above this site’s {limit} %: less ester, more soap. Dry the oil, or take a methoxide.',
   'soap-above-limit': 'Soap comes to {soap} % of the oil, above this site’s {limit} %: the layers will hardly part. Take the two-step route, or blend.',
+  'retest-higher': 'The retest of {after} % FFA is above the {before} % before the acid step, which makes no acid. Check whether the two are swapped; mineral acid left in the oil titrates, too: settle longer and draw a fresh sample.',
   'methanol-little-for-catalyst': '{load} g of catalyst a litre of methanol is near or above the {solubility} g that dissolve. Take more methanol or a solution.',
 };
 

@@ -37,7 +37,7 @@ export const NOTICE_CODES = [
   'one-run', 'run-incomplete', 'runs-tenfold', 'target-not-reached', 'lauric-on-other-basis', 'titre-small', 'titre-above-burette', 'portion-unusual',
   'strength-perhaps-grams', 'strength-perhaps-moles', 'strength-unlikely', 'blank-large', 'titrant-old', 'titrant-age-unknown', 'titrant-not-standardised',
   'standardisation-differs', 'purity-as-fraction', 'date-in-future', 'temperature-not-corrected', 'batch-above-vessel', 'methanol-little-for-catalyst',
-  'batch-too-wet', 'soap-above-limit',
+  'batch-too-wet', 'soap-above-limit', 'retest-higher',
 ] as const;
 export type NoticeCode = (typeof NOTICE_CODES)[number];
 

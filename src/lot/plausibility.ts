@@ -43,6 +43,7 @@ export function implausibilities(entry: LotEntry, site: SiteProfile, run: LotRun
     bench(entry, run, find, say);
   }
   runs('retest.', entry.retestRuns.length ? run.runs.retest.counted : [], run, find, say);
+  if (run.givens.hasRetest()) retest(find, say);
   oil(run, find, say);
   batch(find, say);
   if (today !== undefined && isLater(entry.date, today)) say('date-in-future', 'date', { today });
@@ -65,6 +66,12 @@ function runs(prefix: RunPrefix, counted: readonly number[], { givens }: LotRun,
   }
   const contents = counted.flatMap((index) => find(runKey(prefix, index, 'acidContent')) ?? []);
   if (contents.length > 1 && Decimal.max(...contents).gt(Decimal.min(...contents).times(TENFOLD))) say('runs-tenfold', `${prefix}acidValue`);
+}
+
+/** The acid step makes no acid. */
+function retest(find: Find, say: Say): void {
+  const [before, after] = [find('freeFattyAcid'), find('retest.freeFattyAcid')];
+  if (before && after?.gt(before)) say('retest-higher', 'retest.acidValue', { before, after });
 }
 
 function titrant(site: SiteProfile, entry: LotEntry, { givens, runs: { titrant: plan } }: LotRun, find: Find, say: Say, today: string | undefined): void {

@@ -22,3 +22,12 @@ describe('remarks on the base step', () => {
     expect(codes(methoxide)).not.toContain('batch-too-wet direct.waterShare');
   });
 });
+
+describe('the acid step', () => {
+  it.each([['pretreatmentTime', '0 min', 'not-above-zero'], ['pretreatmentTemperature', '64.8 °C', 'above-boiling-point']])('%s of %s is refused at its field, and the direct route stays', (key, figure, code) => {
+    const reading = read(certified('8', { figures: { [key]: figure } }));
+    expect(reading.problems).toContainEqual(expect.objectContaining({ code, quantity: key }));
+    expect(reading.readings['twoStep.catalyst']!.value).toBeUndefined();
+    expect(reading.readings['direct.catalyst']!.value).toBeDefined();
+  });
+});

@@ -34,6 +34,9 @@ const standardised = (titrantDate: string | undefined, titres = ['24.50', '24.50
 });
 const noStrength = titrated('2.5', '4', {});
 
+/** An oil of 8 %, after the acid step of so much. */
+const again = (ffa: string): LotEntry => certified('8', { figures: { 'retest.certificateFfa': `${ffa} %` }, options: { 'retest.acidKnownFrom': 'certificate-ffa' } });
+
 const CASES: Readonly<Record<NoticeCode, Case>> = {
   'one-run': { entry: lot({ figures: strength, runs: [run('2.5 g', '0', '4')] }), at: 'acidValue', inside: { entry: usual } },
   'run-incomplete': { entry: { ...usual, runs: [...usual.runs, { sample: { text: '2.5', unit: 'g' } }] }, at: 'run3.start', params: { run: '3' }, inside: { entry: usual } },
@@ -80,6 +83,7 @@ const CASES: Readonly<Record<NoticeCode, Case>> = {
   'methanol-little-for-catalyst': { entry: certified('2'), site: site({ figures: { 'KOH.solubility': '60 g/L' } }), at: 'direct.catalyst', inside: { site: site({ figures: { 'KOH.solubility': '70 g/L' } }) } },
   'batch-too-wet': { entry: certified('2', { figures: { waterContent: '1.2 %' } }), at: 'direct.waterShare', inside: { entry: certified('2', { figures: { waterContent: '0.05 %' } }) } },
   'soap-above-limit': { entry: certified('4'), at: 'direct.soapShare', inside: { entry: certified('3') } },
+  'retest-higher': { entry: again('8.01'), at: 'retest.acidValue', inside: { entry: again('8') } },
 };
 
 const noticesOf = (entry: LotEntry, profile: SiteProfile | undefined) => {
