@@ -69,7 +69,16 @@ export class EsterwayPanel extends LotElement {
         border-block-end: 1px solid var(--_rule);
       }
       .later {
+        position: relative;
         padding-inline: 38px 14px;
+      }
+      /* the margin line of the notebook runs on */
+      .later::before {
+        content: '';
+        position: absolute;
+        inset-block: 0;
+        inset-inline-start: 26px;
+        border-inline-start: 1px solid var(--_margin);
       }
       .actions {
         display: flex;
