@@ -66,8 +66,11 @@ export function gridHost(grid: TabulatorFull, sheet: string, columns: readonly s
         const selection = selected();
         if (!writing && selection) listener(selection);
       };
-      grid.on('rangeChanged', heard);
-      return () => grid.off('rangeChanged', heard);
+      const events = ['rangeAdded', 'rangeChanged'] as const;
+      for (const event of events) grid.on(event, heard);
+      return () => {
+        for (const event of events) grid.off(event, heard);
+      };
     },
     takeBack() {
       const step = steps.pop();

@@ -17,10 +17,10 @@ const selection = document.querySelector('#selection')!;
 
 const grid = new TabulatorFull('#grid', {
   data: sheetRows.map((cells, i) => ({ id: i + 1, ...Object.fromEntries(letters.map((letter, column) => [letter, cells[column] ?? ''])) })),
-  columns: letters.map((letter, i) => ({ title: letter, field: letter, width: i < 2 ? 120 : 84, headerSort: false, editor: 'input' as const })),
+  columns: letters.map((letter, i) => ({ title: letter, field: letter, width: [90, 160, 104][i] ?? 84, headerSort: false, editor: 'input' as const })),
   rowHeader: { field: 'id', width: 44, headerSort: false, hozAlign: 'right', resizable: false, frozen: true },
   columnDefaults: { resizable: 'header' },
-  height: '100%',
+  height: 'max(320px, 100vh - 270px)',
   selectableRange: 1,
   selectableRangeColumns: true,
   selectableRangeRows: true,
@@ -48,5 +48,6 @@ grid.on('tableBuilt', () => {
   const last = grid.getRows().at(-1);
   const [from, to] = [first?.getCell('A'), last?.getCell('G')];
   if (from && to) grid.addRange(from, to);
+  scrollTo(0, 0); // a selection draws the grid into view
   document.documentElement.dataset['ready'] = 'yes';
 });
