@@ -28,6 +28,7 @@ export function lotRun(entry: LotEntry, site: SiteProfile, wanted?: readonly str
 
 /** A list of lots that all have the same fields: what rests on the site alone is worked out once for them. */
 export class LotList {
+  readonly #plans = new Map<Sheet, Plan>();
   readonly #standing = new Map<string, { readonly of: Plan; readonly standing: Standing }>();
 
   /** @param wanted as for {@link lotRun} */
@@ -40,7 +41,8 @@ export class LotList {
     const { site, wanted } = this;
     const runs = { lot: runPlan(entry.runs), retest: runPlan(entry.retestRuns), titrant: runPlan(site.titrantRuns ?? []) };
     const sheet = lotFormulas(runs);
-    const plan = planFor(sheet, [...wanted, ...DECIDING].filter((key) => sheet.quantities.has(key)));
+    let plan = this.#plans.get(sheet);
+    if (!plan) this.#plans.set(sheet, (plan = planFor(sheet, [...wanted, ...DECIDING].filter((key) => sheet.quantities.has(key)))));
     const givens = new LotGivens(sheet, entry, site);
     const id = `${Object.keys(entry.figures).sort().join()}|${JSON.stringify(entry.options)}`;
     let known = this.#standing.get(id);

@@ -79,8 +79,13 @@ function optionsOf(figures: Readonly<Record<string, Figure>>, runs: readonly Run
   };
 }
 
+/** Digits that mean one thing and are canonical as they stand. */
+const PLAIN = /^(?:0|[1-9]\d{0,14})(?:\.\d{1,15})?$/;
+
 /** A figure as typed; a per cent sign behind a share is no fault, as sheets show shares so. */
 function cellFigure(typed: string, unit: string, mark: DecimalMark): Figure {
+  // most cells of a sheet are no puzzle
+  if (PLAIN.test(typed) && (mark === '.' || !typed.includes('.'))) return { text: typed, unit };
   const read = readNumber(unit === '%' ? typed.replace(/\s*%$/, '') : typed, mark);
   if ('text' in read) return { text: read.text, unit };
   return { typed: typed.slice(0, MOST_LETTERS), doubt: 'doubt' in read ? read.doubt : 'not-a-number', unit };
